@@ -1,12 +1,19 @@
+import { tmpdir } from "node:os";
+import { join } from "node:path";
 import { defineConfig } from "vitest/config";
 import { appImports } from "./vite.imports.ts";
 
 export default defineConfig({
   resolve: { alias: appImports },
   test: {
+    // Secrets that tests cause to be made do not land in the developer's data folder.
+    env: { DATA_DIR: join(tmpdir(), "bladecount-test-data") },
     projects: [
       { extends: true, test: { name: "node", environment: "node", include: ["tests/**/*.test.ts"] } },
-      { extends: true, test: { name: "dom", environment: "jsdom", include: ["tests/**/*.test.tsx"], setupFiles: ["tests/support/setup-dom.ts"] } },
+      {
+        extends: true,
+        test: { name: "dom", environment: "jsdom", include: ["tests/**/*.test.tsx"], setupFiles: ["tests/support/setup-dom.ts"] },
+      },
     ],
   },
 });

@@ -1,0 +1,12 @@
+// Wrong tries in a row, by what they were tried on: a sign-in account, a network address, a person's PIN.
+// The key is a keyed hash, so that the table holds neither mail addresses of strangers nor network addresses.
+import { integer, sqliteTable, text } from "drizzle-orm/sqlite-core";
+
+export const attempts = sqliteTable("attempts", {
+  key: text("key").primaryKey(),
+  kind: text("kind", { enum: ["account", "address", "pin"] }).notNull(),
+  failures: integer("failures").notNull(),
+  lastAt: integer("last_at").notNull(),
+  /** Nothing is tried before this instant. */
+  blockedUntil: integer("blocked_until").notNull(),
+});

@@ -1,0 +1,50 @@
+/**
+ * What a bench sheet says once it is computed. Sentences carry no unit that depends on a person's choice:
+ * ratios, percent and rpm only; everything else is a figure with its quantity, shown in the reader's units.
+ */
+import type { Outcome } from "#app/lib/bench/check";
+import type { SheetForm } from "#app/lib/bench/form";
+import type { ValueKey } from "#app/lib/template/types";
+import type { Quantity } from "#app/lib/units/quantity";
+
+export interface SheetFigure {
+  label: string;
+  quantity: Quantity;
+  /** SI */
+  value: number;
+}
+
+export interface SheetResult {
+  passes: boolean;
+  /** The result against its criterion; when it does not pass, also what to do next. */
+  sentence: string;
+  /** Highest crankshaft speed it allows, 1/s; restraint only. */
+  cap: number | null;
+  figures: SheetFigure[];
+  caution: string;
+}
+
+/** One kind of sheet: everything the registry needs of it. */
+export interface SheetDef {
+  /** Raised when the same inputs would be judged otherwise. */
+  version: string;
+  takes: ValueKey[];
+  form: SheetForm;
+  compute: (inputs: unknown) => Outcome<SheetResult>;
+  /** The flat form (groups as lists of rows) as inputs, and where a path in the inputs is on the form. */
+  fromForm?: (flat: Record<string, unknown>) => { inputs: Record<string, unknown>; locate: (path: string) => string };
+}
+
+export const figure = (label: string, quantity: Quantity, value: number): SheetFigure => ({ label, quantity, value });
+
+/** `value` to `digits` decimals, never rounded up past a limit that it misses: 1.2499 is "1.24". */
+export function floorText(value: number, digits: number): string {
+  const scale = 10 ** digits;
+  return (Math.floor(value * scale + 1e-6) / scale).toFixed(digits);
+}
+
+/** `value` to `digits` decimals, never rounded down past a limit that it breaks: 25.001 is "25.1". */
+export function ceilText(value: number, digits: number): string {
+  const scale = 10 ** digits;
+  return (Math.ceil(value * scale - 1e-6) / scale).toFixed(digits);
+}

@@ -1,0 +1,202 @@
+/**
+ * Rule 1 of a proof: does its evidence meet the item's present criterion?
+ * Sheets are computed again, never trusted; nothing meets a criterion without its number.
+ */
+import { computeSheet, SHEET_VERSIONS, valuesTaken } from "#app/lib/bench/sheet";
+import { currentProof, type Facts } from "#app/lib/gates/facts";
+import type { BlockerCode } from "#app/lib/gates/result";
+import type { Evidence, Item, Proof } from "#app/lib/gates/snapshot";
+import type { Criterion, Part, SheetKey } from "#app/lib/template/types";
+import type { Band } from "#app/lib/units/quantity";
+
+export type Met = { ok: true } | { ok: false; code: BlockerCode; sentence: string };
+
+const no = (code: BlockerCode, sentence: string): Met => ({ ok: false, code, sentence });
+const YES: Met = { ok: true };
+
+/** The band in force: one end may come from a value of the install. Null = a number is missing. SI, inclusive. */
+export function bandInForce(criterion: Criterion, limitOf: (key: NonNullable<Criterion["limit"]>["key"]) => number | null): Band | null {
+  const { limit } = criterion;
+  const band = criterion.band ?? { min: null, max: null };
+  if (!limit) return band.min === null && band.max === null ? null : band;
+  const value = limitOf(limit.key);
+  if (value === null) return null;
+  // Both may be given: the install's limit and a floor of the item's own. The narrower one counts.
+  if (limit.end === "min") return { min: band.min === null ? value : Math.max(band.min, value), max: band.max };
+  return { min: band.min, max: band.max === null ? value : Math.min(band.max, value) };
+}
+
+/** What must be entered before anyone can prove this part: null when nothing is missing. */
+export function numberMissing(facts: Facts, part: Part): string | null {
+  if (part.kind === "tick") return part.reference && !part.reference.text ? part.reference.asks : null;
+  if (part.kind !== "measure" && part.kind !== "torque") return null;
+  return bandInForce(part.criterion, (key) => facts.values.get(key)?.value ?? null) ? null : part.label;
+}
+
+/** @returns whether the proof's evidence meets every part of the item, and the first part that it does not meet. */
+export function evidenceMeets(facts: Facts, item: Item, proof: Proof): Met {
+  for (const [n, part] of item.parts.entries()) {
+    const met = partMet(facts, item, part, proof.evidence[n] ?? null, proof);
+    if (!met.ok) return met;
+  }
+  return YES;
+}
+
+function partMet(facts: Facts, item: Item, part: Part, given: Evidence | null, proof: Proof): Met {
+  const missing = numberMissing(facts, part);
+  if (missing) return no("number-missing", `A number is missing: ${missing}. Enter it with where it was read.`);
+  if (part.kind === "computed") return YES;
+  const optional = (part.kind === "photo" || part.kind === "reading") && part.optional;
+  if (given === null) return optional ? YES : no("evidence-missing", `${evidenceName(part)} was not recorded. Prove it again with it.`);
+  if (given.kind !== part.kind) return no("evidence-missing", `The item now asks for ${evidenceName(part).toLowerCase()}. Prove it again.`);
+
+  switch (part.kind) {
+    case "tick":
+      return YES;
+    case "measure":
+      return given.kind === "measure" ? inBand(facts, part.criterion, part.places.length, given.values, part.label) : YES;
+    case "torque": {
+      if (given.kind !== "torque") return YES;
+      if (!proof.tools.length) return no("evidence-missing", "No wrench is named. Prove it again with the wrench from the crib.");
+      if (part.count !== null && given.count !== part.count)
+        return no("tally-unequal", `${given.count} fasteners torqued, ${part.count} expected. Torque the rest.`);
+      if (!(Number.isInteger(given.count) && given.count > 0))
+        return no("evidence-missing", "How many fasteners were torqued was not recorded.");
+      return inBand(facts, part.criterion, part.places.length, given.values, part.label);
+    }
+    case "tally":
+      return given.kind === "tally" ? tallyMet(facts, item, part, given) : YES;
+    case "photo":
+      if (given.kind !== "photo") return YES;
+      if (!given.files.length) return optional ? YES : no("evidence-missing", "The photo is missing. Take it and prove the item again.");
+      return given.stored ? YES : no("photo-not-stored", "The photo has not arrived yet. Keep the page open until it is stored.");
+    case "reading":
+      return given.kind === "reading" && given.values.length === part.places.length && given.values.every(Number.isFinite)
+        ? YES
+        : no("evidence-missing", `A reading is missing: ${part.label}.`);
+    case "text":
+      return given.kind === "text" && given.text.trim() ? YES : no("evidence-missing", `Not written down: ${part.asks}`);
+    case "crank":
+      return given.kind === "crank" ? crankMet(part.giveUpAfter, given.bursts) : YES;
+    case "sheet":
+      return given.kind === "sheet" ? sheetMet(facts, part.sheet, given) : YES;
+  }
+}
+
+function inBand(facts: Facts, criterion: Criterion, places: number, values: number[], label: string): Met {
+  const band = bandInForce(criterion, (key) => facts.values.get(key)?.value ?? null) as Band;
+  if (values.length !== places || !values.every(Number.isFinite)) return no("evidence-missing", `A value is missing: ${label}.`);
+  const out = values.filter((v) => (band.min !== null && v < band.min) || (band.max !== null && v > band.max));
+  return out.length ? no("out-of-band", `${label} is outside its band. Put it right and measure again.`) : YES;
+}
+
+type TallyPart = Extract<Part, { kind: "tally" }>;
+type TallyEvidence = Extract<Evidence, { kind: "tally" }>;
+
+function tallyMet(facts: Facts, item: Item, part: TallyPart, given: TallyEvidence): Met {
+  const whole = (n: number | null): n is number => n !== null && Number.isInteger(n) && n >= 0;
+  if (!given.places.length) return no("evidence-missing", "Nothing was counted. Name at least one place, with its count.");
+  if (part.mode === "out") {
+    if (!given.places.every((p) => whole(p.out))) return no("evidence-missing", "A count is missing.");
+    const sum = given.places.reduce((s, p) => s + (p.out as number), 0);
+    return part.expected !== undefined && sum !== part.expected
+      ? no("tally-unequal", `${sum} ${part.words.out}, ${part.expected} expected. Count again.`)
+      : YES;
+  }
+  if (part.mode === "pairs") {
+    if (!given.places.every((p) => whole(p.out) && whole(p.in)))
+      return no("evidence-missing", "A count is missing: every place needs both.");
+    const odd = given.places.find((p) => p.out !== p.in);
+    return odd
+      ? no(
+          "tally-unequal",
+          `${odd.place || "Count"}: ${odd.out} ${part.words.out}, ${odd.in} ${part.words.in}. Find the rest before you go on.`,
+        )
+      : YES;
+  }
+  if (!given.places.every((p) => whole(p.in))) return no("evidence-missing", "A count is missing.");
+  const step = part.of ? facts.proofsOf.get(part.of)?.at(-1) : undefined;
+  const outs = step?.evidence.find((e): e is TallyEvidence => e?.kind === "tally");
+  if (!step || step.withdrawn || !outs)
+    return no(
+      "tally-unequal",
+      `What was taken out has no count${part.of ? ` (${facts.items.get(part.of)?.words ?? item.words})` : ""}. Count that first.`,
+    );
+  const wanted = new Map(outs.places.map((p) => [p.place, p.out]));
+  const same = given.places.length === outs.places.length && given.places.every((p) => wanted.get(p.place) === p.in);
+  const sum = (list: (number | null)[]) => list.reduce<number>((s, n) => s + (n ?? 0), 0);
+  return same
+    ? YES
+    : no(
+        "tally-unequal",
+        `${sum(given.places.map((p) => p.in))} ${part.words.in}, ${sum(outs.places.map((p) => p.out))} ${part.words.out}, place by place. Find the difference.`,
+      );
+}
+
+function crankMet(giveUpAfter: number, bursts: Extract<Evidence, { kind: "crank" }>["bursts"]): Met {
+  let total = 0;
+  for (const burst of [...bursts].sort((a, b) => a.at - b.at)) {
+    if (burst.pressureAfter !== null) {
+      total += burst.pressureAfter;
+      return total <= giveUpAfter
+        ? YES
+        : no("out-of-band", `Pressure came only after ${Math.round(total)} s of cranking, ${giveUpAfter} s are allowed. Find the cause.`);
+    }
+    total += burst.seconds;
+  }
+  return no(
+    "evidence-missing",
+    bursts.length ? "No oil pressure was seen in any burst. Find the cause before you crank on." : "No burst was recorded.",
+  );
+}
+
+function sheetMet(facts: Facts, key: SheetKey, given: Extract<Evidence, { kind: "sheet" }>): Met {
+  if (given.version !== SHEET_VERSIONS[key])
+    return no("sheet-outdated", "The calculation has changed since this sheet was saved. Work the sheet again.");
+  for (const taken of valuesTaken(key)) {
+    const used = given.took[taken];
+    const value = facts.values.get(taken);
+    if (used !== undefined && used !== (value?.value ?? null))
+      return no(
+        "sheet-outdated",
+        `${value?.label ?? "A value"} of the install has changed since this sheet was saved. Work the sheet again.`,
+      );
+  }
+  const done = computeSheet(key, given.inputs);
+  if (!done.ok) return no("sheet-fails", done.errors[0]?.sentence ?? "The sheet cannot be computed from its inputs.");
+  return done.result.passes ? YES : no("sheet-fails", done.result.sentence);
+}
+
+/**
+ * Highest crankshaft speed (1/s) that the restraint sheets of this item allow, by the item's current proof, computed again.
+ * @returns undefined when the item has no restraint sheet, null when its proof gives none.
+ */
+export function restraintCap(facts: Facts, item: Item): number | null | undefined {
+  const parts = item.parts.map((p, n) => (p.kind === "sheet" && p.sheet === "restraint" ? n : -1)).filter((n) => n >= 0);
+  if (!parts.length) return undefined;
+  const proof = currentProof(facts, item.id);
+  let cap: number | null = null;
+  for (const n of parts) {
+    const given = proof?.evidence[n];
+    const done = given?.kind === "sheet" ? computeSheet("restraint", given.inputs) : null;
+    if (!done?.ok || done.result.cap === null) return null;
+    cap = cap === null ? done.result.cap : Math.min(cap, done.result.cap);
+  }
+  return cap;
+}
+
+function evidenceName(part: Part): string {
+  const known: Record<Part["kind"], string> = {
+    tick: "The tick",
+    measure: "The measurement",
+    torque: "The torque",
+    tally: "The count",
+    photo: "The photo",
+    reading: "The reading",
+    text: "The note",
+    crank: "The cranking",
+    sheet: "The sheet",
+    computed: "The computed result",
+  };
+  return known[part.kind];
+}

@@ -1,0 +1,151 @@
+/** Which gates a run requires, what a gate waits for, and the newer-than rules that a gate puts on its proofs. */
+import { type Facts, isComputed } from "#app/lib/gates/facts";
+import type { GateLimits } from "#app/lib/gates/items";
+import type { RunFacts } from "#app/lib/gates/run-facts";
+import type { Gate, Instant, Rung } from "#app/lib/gates/snapshot";
+
+/** Gates that a run of the rung requires where no plan says otherwise. `rung` null = all rungs are settled. */
+export function defaultRequired(facts: Facts, rung: Rung | null): string[] {
+  const wanted = (g: Gate) =>
+    g.requiredBy.kind === "runs-and-release" ||
+    g.requiredBy.kind === "runs" ||
+    (g.requiredBy.kind === "rung-and-release" && g.requiredBy.rung === rung?.key);
+  return [...facts.gates.values()].filter(wanted).map((g) => g.id);
+}
+
+/** Runs of the next rung that are planned and neither ended nor scrubbed, newest plan first. */
+export function plannedNext(facts: Facts): RunFacts[] {
+  const open = [...facts.runs.values()].filter((r) => r.run.rung === facts.nextRung?.key && r.plan && !r.scrub && r.endedAt === null);
+  return open.sort((a, b) => (b.plan?.recorded ?? 0) - (a.plan?.recorded ?? 0) || (a.run.id < b.run.id ? -1 : 1));
+}
+
+/** Ids of the gates that the run requires: those of its plan, or the default for the rung where nothing is planned. */
+export function requiredBy(facts: Facts, run: RunFacts | null, rung: Rung | null): string[] {
+  return run?.plan ? run.plan.requiredGates.filter((id) => facts.gates.has(id)) : defaultRequired(facts, rung);
+}
+
+/**
+ * What each gate waits for. A walk-round waits for all other gates that the next run requires; where two attempts are
+ * planned side by side, for those of both (so that it never stands only because one of them is dropped from view).
+ */
+export function prerequisites(facts: Facts): Map<string, string[]> {
+  const planned = plannedNext(facts);
+  const next = planned.length ? planned.flatMap((r) => requiredBy(facts, r, facts.nextRung)) : requiredBy(facts, null, facts.nextRung);
+  const all = new Map<string, string[]>();
+  for (const gate of facts.gates.values()) {
+    const own = facts.edges.get(gate.id)?.all ?? [];
+    all.set(gate.id, gate.eachRun ? [...new Set([...own, ...next])].filter((id) => id !== gate.id) : own);
+  }
+  return all;
+}
+
+/**
+ * Gates in an order in which each comes after what it waits for; what is left over waits in a circle.
+ * (The product refuses an edit that closes a circle; data that has one all the same must not hang or stand.)
+ */
+export function inOrder(ids: string[], before: (id: string) => string[]): { order: string[]; circle: string[] } {
+  const known = new Set(ids);
+  const waiting = new Map<string, number>();
+  const feeds = new Map<string, string[]>();
+  for (const id of ids) {
+    const list = before(id).filter((x) => known.has(x));
+    waiting.set(id, list.length);
+    for (const x of list) {
+      const targets = feeds.get(x);
+      if (targets) targets.push(id);
+      else feeds.set(x, [id]);
+    }
+  }
+  const order = ids.filter((id) => waiting.get(id) === 0);
+  for (let n = 0; n < order.length; n++)
+    for (const target of feeds.get(order[n] as string) ?? []) {
+      const left = (waiting.get(target) as number) - 1;
+      waiting.set(target, left);
+      if (left === 0) order.push(target);
+    }
+  const done = new Set(order);
+  return { order, circle: ids.filter((id) => !done.has(id)) };
+}
+
+/** Newest happening in a gate: any proof (withdrawn or not) and any signature. */
+export function newestWork(facts: Facts, gate: string): Instant | null {
+  let newest: Instant | null = null;
+  const take = (at: Instant) => {
+    if (newest === null || at > newest) newest = at;
+  };
+  for (const item of facts.itemsOf.get(gate) ?? []) {
+    const last = facts.proofsOf.get(item.id)?.at(-1);
+    if (last) take(last.counts);
+  }
+  for (const s of facts.signaturesOf.get(gate) ?? []) take(s.recorded);
+  return newest;
+}
+
+/** The newer-than rules of a gate. `work` is the memo of `newestWork`. */
+export function gateLimits(facts: Facts, gate: Gate, waitsFor: string[], work: (gate: string) => Instant | null): GateLimits {
+  return { ...newerThan(facts, gate, waitsFor, work), after: afterLimits(facts, gate) };
+}
+
+function newerThan(
+  facts: Facts,
+  gate: Gate,
+  waitsFor: string[],
+  work: (gate: string) => Instant | null,
+): Pick<GateLimits, "newerThan" | "noRunYet"> {
+  if (gate.lookBack) {
+    const id = gate.lookBack.kind === "run" ? gate.lookBack.run : facts.settledBy.get(gate.lookBack.rung);
+    const end = id ? facts.runs.get(id)?.endedAt : null;
+    if (end === null || end === undefined)
+      return {
+        newerThan: null,
+        noRunYet: { code: "run-not-ended", sentence: "It looks back on a run that has not ended yet.", roles: ["lead"] },
+      };
+    return {
+      newerThan: {
+        at: end,
+        cause: { code: "run-since", sentence: `The run ended on ${facts.when(end)}, after this was seen. Look again.` },
+      },
+      noRunYet: null,
+    };
+  }
+  const end = facts.newestEnd;
+  const runCause =
+    end === null
+      ? null
+      : {
+          at: end,
+          cause: { code: "run-since" as const, sentence: `A run ended on ${facts.when(end)}, after this was done. Do it again.` },
+        };
+  if (gate.requiredBy.kind === "release" && !gate.eachRun) return { newerThan: runCause, noRunYet: null };
+  if (!gate.eachRun) return { newerThan: null, noRunYet: null };
+  let limit: GateLimits["newerThan"] = runCause;
+  const lookBacks = [...facts.gates.values()].filter((g) => g.lookBack).map((g) => g.id);
+  for (const id of new Set([...waitsFor, ...lookBacks])) {
+    const at = id === gate.id ? null : work(id);
+    if (at !== null && (limit === null || at > limit.at))
+      limit = {
+        at,
+        cause: {
+          code: "after-gate",
+          sentence: `${facts.gates.get(id)?.name} was worked or signed on ${facts.when(at)}, after this. Walk round again.`,
+        },
+      };
+  }
+  return { newerThan: limit, noRunYet: null };
+}
+
+function afterLimits(facts: Facts, gate: Gate): GateLimits["after"] {
+  const limits: GateLimits["after"] = new Map();
+  for (const id of facts.edges.get(gate.id)?.after ?? [])
+    for (const item of facts.itemsOf.get(id) ?? []) {
+      if (item.step || isComputed(item)) continue;
+      // Withdrawn or not: taking a proof back must never let a later one count again.
+      const proof = facts.proofsOf.get(item.id)?.at(-1);
+      if (!proof || proof.state === "na") continue;
+      for (const system of item.systems) {
+        const known = limits.get(system);
+        if (!known || proof.counts > known.at) limits.set(system, { at: proof.counts, gate: id });
+      }
+    }
+  return limits;
+}

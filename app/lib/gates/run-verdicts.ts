@@ -1,0 +1,219 @@
+/** May this member do this now? Acts on runs: plan, acknowledge, answer, GO, HOLD, SCRUB, start, end. */
+import { crewOf } from "#app/lib/gates/crew";
+import { type Evaluation, evaluate } from "#app/lib/gates/evaluate";
+import { heldRole } from "#app/lib/gates/facts";
+import { soonest } from "#app/lib/gates/items";
+import { needsMember, needsRole, no, notFound, OK, refuse } from "#app/lib/gates/permit";
+import type { RunResult, Verdict } from "#app/lib/gates/result";
+import type { RunFacts } from "#app/lib/gates/run-facts";
+import type { Instant } from "#app/lib/gates/snapshot";
+
+type Found = { run: RunFacts; result: RunResult; verdict: null } | { run: null; result: null; verdict: Verdict };
+
+function find(e: Evaluation, id: string): Found {
+  const run = e.facts.runs.get(id);
+  const result = e.result.runs.find((r) => r.id === id);
+  return run && result ? { run, result, verdict: null } : { run: null, result: null, verdict: notFound(e, "run") };
+}
+
+const at = (id: string) => ({ subject: ["run", id] as ["run", string], page: "run" as const, id });
+const over = (e: Evaluation, id: string, state: string): Verdict =>
+  no(e, {
+    ...at(id),
+    code: "run-over",
+    title: `The run is ${state}`,
+    sentence: `It is ${state}; plan another run of this rung instead.`,
+    roles: ["lead"],
+  });
+
+/** @param a.run null = a new run of `rung`. */
+export function mayPlan(e: Evaluation, a: { run: string | null; rung: string; member: string }): Verdict {
+  const role = needsRole(e, a.member, ["lead"], "plan a run");
+  if (role) return role;
+  if (!e.facts.rungs.some((r) => r.key === a.rung)) return notFound(e, "rung");
+  if (a.run === null) return OK;
+  const f = find(e, a.run);
+  if (f.verdict) return f.verdict;
+  return f.run.start || f.run.scrub ? over(e, a.run, f.result.state) : OK;
+}
+
+function inCrew(e: Evaluation, run: RunFacts, member: string, act: string): Verdict | null {
+  return crewOf(run).includes(member)
+    ? null
+    : no(e, {
+        ...at(run.run.id),
+        code: "not-your-role",
+        title: "No place on this run",
+        sentence: `Only those who hold a place on this run ${act}. The lead sets the places.`,
+        roles: ["lead"],
+      });
+}
+
+const stale = (e: Evaluation, run: RunFacts, version: number): Verdict | null =>
+  run.plan?.version === version
+    ? null
+    : no(e, {
+        ...at(run.run.id),
+        code: "stale",
+        title: "The card has changed",
+        sentence: `It is version ${run.plan?.version ?? 0} now. Read it again, then answer.`,
+        roles: ["crew"],
+      });
+
+export function mayAcknowledge(e: Evaluation, a: { run: string; member: string; version: number }): Verdict {
+  const f = find(e, a.run);
+  if (f.verdict) return f.verdict;
+  if (f.run.start || f.run.scrub) return over(e, a.run, f.result.state);
+  return inCrew(e, f.run, a.member, "acknowledge its card") ?? stale(e, f.run, a.version) ?? OK;
+}
+
+export function mayAnswer(e: Evaluation, a: { run: string; member: string; version: number; answer: "go" | "no-go" }): Verdict {
+  const f = find(e, a.run);
+  if (f.verdict) return f.verdict;
+  const crew = inCrew(e, f.run, a.member, "answer its roll call");
+  if (crew) return crew;
+  // Bad news is always taken: a no-go needs neither the newest card nor an open run.
+  if (a.answer === "no-go") return OK;
+  if (f.run.start || f.run.scrub) return over(e, a.run, f.result.state);
+  const old = stale(e, f.run, a.version);
+  if (old) return old;
+  return f.run.run.acks.some((k) => k.by === a.member && k.version === a.version)
+    ? OK
+    : no(e, {
+        ...at(a.run),
+        code: "order",
+        title: "Read the card first",
+        sentence: `Acknowledge run card version ${a.version}, then say go.`,
+        roles: ["crew"],
+      });
+}
+
+export function mayRecordWind(e: Evaluation, a: { run: string; member: string }): Verdict {
+  const f = find(e, a.run);
+  return f.verdict ?? needsMember(e, a.member) ?? (f.run?.scrub || f.run?.endedAt ? over(e, a.run, f.result?.state ?? "over") : OK);
+}
+
+/** When a GO called now would end: its window from the planned start, or earlier with what it stands on. Null = no planned start. */
+export function goEnds(e: Evaluation, run: string): Instant | null {
+  const f = find(e, run);
+  const start = f.run?.run.plannedStart ?? null;
+  return start === null ? null : soonest(start + e.snapshot.settings.goWindow, f.result?.until ?? null);
+}
+
+export function mayCallGo(e: Evaluation, a: { run: string; member: string }): Verdict {
+  const f = find(e, a.run);
+  if (f.verdict) return f.verdict;
+  const role = needsRole(e, a.member, ["lead"], "call GO");
+  if (role) return role;
+  if (f.result.go)
+    return no(e, {
+      ...at(a.run),
+      code: "already",
+      title: "GO stands",
+      sentence: `GO was called and stands until ${e.facts.when(f.result.go.ends)}.`,
+      roles: ["lead"],
+    });
+  if (!f.result.clear) return refuse(...f.result.blockers);
+  const start = f.run.run.plannedStart;
+  if (start === null)
+    return no(e, {
+      ...at(a.run),
+      code: "not-planned",
+      title: "No time set",
+      sentence: "Set the time and place of the run, then call GO.",
+      roles: ["lead"],
+    });
+  if (start + e.snapshot.settings.goWindow <= e.at)
+    return no(e, {
+      ...at(a.run),
+      code: "planned-too-late",
+      title: "The planned time has passed",
+      sentence: `It was planned for ${e.facts.when(start)}. Set a new time, then call GO.`,
+      roles: ["lead"],
+    });
+  if (f.result.until !== null && start >= f.result.until) {
+    const then = evaluate(e.snapshot, start).result.runs.find((r) => r.id === a.run);
+    return refuse(...(then?.blockers ?? []).map((b) => ({ ...b, sentence: `By ${e.facts.when(start)}: ${b.sentence}` })));
+  }
+  return OK;
+}
+
+export function mayCallNoGo(e: Evaluation, a: { run: string; member: string }): Verdict {
+  const f = find(e, a.run);
+  if (f.verdict) return f.verdict;
+  const role = needsRole(e, a.member, ["lead"], "send a no-go");
+  if (role) return role;
+  if (f.result.state === "planned" || f.result.state === "held") return OK;
+  return f.result.state === "called"
+    ? no(e, { ...at(a.run), code: "order", title: "GO stands", sentence: "Call HOLD first: it tells the crew at once.", roles: ["lead"] })
+    : over(e, a.run, f.result.state);
+}
+
+/** HOLD from any member, on a run that has not ended. */
+export function mayHold(e: Evaluation, a: { run: string; member: string }): Verdict {
+  const f = find(e, a.run);
+  if (f.verdict) return f.verdict;
+  const outsider = needsMember(e, a.member);
+  if (outsider) return outsider;
+  return f.run.scrub || f.run.endedAt !== null ? over(e, a.run, f.result.state) : OK;
+}
+
+export function mayScrub(e: Evaluation, a: { run: string; member: string }): Verdict {
+  const f = find(e, a.run);
+  if (f.verdict) return f.verdict;
+  const role = needsRole(e, a.member, ["lead"], "scrub a run");
+  if (role) return role;
+  if (f.run.scrub)
+    return no(e, { ...at(a.run), code: "already", title: "Scrubbed already", sentence: "This run was scrubbed before.", roles: ["lead"] });
+  return f.run.start
+    ? no(e, {
+        ...at(a.run),
+        code: "order",
+        title: "It was started",
+        sentence: "A run that was started is reported ended and reviewed, not scrubbed.",
+        roles: ["lead"],
+      })
+    : OK;
+}
+
+/** Lead, or whoever holds run lead or recorder on this run. */
+function leadsRun(e: Evaluation, run: RunFacts, member: string, act: string): Verdict | null {
+  const places = run.plan?.positions.filter((p) => p.member === member).map((p) => p.position) ?? [];
+  if (heldRole(e.facts, member, "lead", e.at) || places.includes("runlead") || places.includes("recorder")) return null;
+  return no(e, {
+    ...at(run.run.id),
+    code: "not-your-role",
+    title: "Not your place",
+    sentence: `Only the lead, the run lead or the recorder can ${act}.`,
+    roles: ["lead"],
+  });
+}
+
+export function mayStart(e: Evaluation, a: { run: string; member: string }): Verdict {
+  const f = find(e, a.run);
+  if (f.verdict) return f.verdict;
+  const place = leadsRun(e, f.run, a.member, "start the run");
+  if (place) return place;
+  if (f.run.start || f.run.scrub) return over(e, a.run, f.result.state);
+  const blockers = [...f.result.blockers, ...f.result.startBlockers];
+  return blockers.length ? refuse(...blockers) : OK;
+}
+
+/** Take the start back (never fired), report the end, or state the outcome. */
+export function mayReport(e: Evaluation, a: { run: string; member: string; report: "take-back" | "ended" | "outcome" }): Verdict {
+  const f = find(e, a.run);
+  if (f.verdict) return f.verdict;
+  const place = leadsRun(e, f.run, a.member, "report on the run");
+  if (place) return place;
+  const running = f.run.start !== null && f.run.endedAt === null;
+  const right = a.report === "outcome" ? f.run.endedAt !== null : running;
+  return right
+    ? OK
+    : no(e, {
+        ...at(a.run),
+        code: "order",
+        title: `The run is ${f.result.state}`,
+        sentence: a.report === "outcome" ? "Report the run ended first." : "It is not running.",
+        roles: ["lead"],
+      });
+}

@@ -1,0 +1,66 @@
+/** Signatures: what they cover, whether they hold, and which of them fill the places of a gate's policy. */
+import { currentProof, type Facts, heldRole, isComputed } from "#app/lib/gates/facts";
+import type { Cover, Gate, Item, Signature } from "#app/lib/gates/snapshot";
+
+/** What a signer of these items would cover now: each item but computed ones, its revision and its current proof, standing or not. */
+export function coversNow(facts: Facts, items: Item[]): Cover[] {
+  return items
+    .filter((i) => !isComputed(i))
+    .map((i) => ({ item: i.id, revision: i.revision, proof: currentProof(facts, i.id)?.id ?? null }));
+}
+
+const key = (covers: Cover[]): string =>
+  covers
+    .map((c) => `${c.item}\u0000${c.revision}\u0000${c.proof ?? ""}`)
+    .sort()
+    .join("\u0001");
+
+/** Same items, revisions and proofs, in any order. */
+export const sameCovers = (a: Cover[], b: Cover[]): boolean => a.length === b.length && key(a) === key(b);
+
+/** People who did or recorded a proof that the list covers: none of them may countersign it. */
+export function doersOf(facts: Facts, covers: Cover[]): Set<string> {
+  const people = new Set<string>();
+  for (const cover of covers) {
+    if (!cover.proof) continue;
+    const proof = facts.proofsOf.get(cover.item)?.find((p) => p.id === cover.proof);
+    if (proof) people.add(proof.did).add(proof.by);
+  }
+  return people;
+}
+
+/**
+ * The signatures that fill the policy's places, in order: each later than the one before, by another person,
+ * and from the second place on by somebody who did none of the work covered.
+ * @param signatures by seq; @returns as many as fit, from the first place on.
+ */
+export function fillPolicy(facts: Facts, gate: Gate, signatures: Signature[]): Signature[] {
+  const filled: Signature[] = [];
+  for (const signature of signatures) {
+    const place = gate.policy[filled.length];
+    if (!place) break;
+    if (!place.includes(signature.as) || !heldRole(facts, signature.by, signature.as, signature.recorded)) continue;
+    if (filled.length && (filled.some((f) => f.by === signature.by) || doersOf(facts, signature.covers).has(signature.by))) continue;
+    filled.push(signature);
+  }
+  return filled;
+}
+
+/** Signatures that hold: they cover today's list at the gate's present revision, and nobody withdrew them. */
+export function holding(facts: Facts, gate: Gate, covers: Cover[]): Signature[] {
+  const today = key(covers);
+  return (facts.signaturesOf.get(gate.id) ?? []).filter(
+    (s) => !s.withdrawn && s.gateRevision === gate.revision && s.covers.length === covers.length && key(s.covers) === today,
+  );
+}
+
+/** Whether the whole policy was signed at some time, over one and the same list. */
+export function wasSigned(facts: Facts, gate: Gate): boolean {
+  if (!gate.policy.length) return false;
+  const lists = new Map<string, Signature[]>();
+  for (const s of facts.signaturesOf.get(gate.id) ?? []) {
+    const k = `${s.gateRevision}|${key(s.covers)}`;
+    lists.set(k, [...(lists.get(k) ?? []), s]);
+  }
+  return [...lists.values()].some((list) => fillPolicy(facts, gate, list).length === gate.policy.length);
+}

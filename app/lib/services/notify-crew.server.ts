@@ -1,0 +1,117 @@
+// Puts the crew's mail about a run into the outbox, in the transaction of the act that it tells about.
+// Read by everybody with a position on the run, and by every lead.
+import { eq, inArray } from "drizzle-orm";
+import type { Tx } from "#app/db/client.server";
+import { installs } from "#app/db/schema/installs";
+import { outbox } from "#app/db/schema/outbox";
+import { runs } from "#app/db/schema/runs";
+import { users } from "#app/db/schema/users";
+import { env } from "#app/lib/env.server";
+import type { Evaluation } from "#app/lib/gates/evaluate";
+import type { Blocker, RunResult } from "#app/lib/gates/result";
+import type { Snapshot } from "#app/lib/gates/snapshot";
+import type { RunMailKind, RunMailModel } from "#app/lib/mail/compose/model";
+import { composeRunMail } from "#app/lib/mail/compose/run-mail";
+import { enqueue } from "#app/lib/mail/outbox.server";
+
+export interface CrewNews {
+  kind: RunMailKind;
+  /** Of the record that the mail tells about; one mail a record and reader. */
+  actId: string;
+  /** The board as it is with that record in it. */
+  e: Evaluation;
+  runId: string;
+  by: string;
+  reason: string;
+  auto: boolean;
+  goEnds: number | null;
+  stops: Blocker[];
+  head: { seq: number; hash: string };
+}
+
+/** The standing words of product and card: nothing here replaces whoever has the last word on the aircraft. */
+const CAUTIONS = [
+  "The maker's manuals, the local rules and the judgement of licensed people come before this mail.",
+  "A propeller is live, always. Anyone may call STOP.",
+];
+
+export async function notifyCrew(tx: Tx, news: CrewNews): Promise<void> {
+  const { snapshot, result } = news.e;
+  const run = snapshot.runs.find((r) => r.id === news.runId);
+  const judged = result.runs.find((r) => r.id === news.runId);
+  if (!run || !judged) throw new Error("News of a run that the board does not know");
+  const model = await modelOf(tx, news, run, judged);
+  const leads = snapshot.members.filter((m) => m.roles.some((r) => r.role === "lead" && r.to === null)).map((m) => m.id);
+  const ids = [...new Set([...model.crew.map((c) => c.member), ...leads])];
+  const readers = await tx
+    .select({ id: users.id, name: users.name, email: users.email, units: users.units })
+    .from(users)
+    .where(inArray(users.id, ids));
+  const go = run.acts
+    .filter((a) => a.act === "go" && a.id !== news.actId)
+    .sort((a, b) => a.seq - b.seq)
+    .at(-1);
+  for (const reader of readers) {
+    const mail = composeRunMail(news.kind, model, { member: reader.id, name: reader.name, units: reader.units });
+    const answers = go ? await messageIdOf(tx, `go:${go.id}:${reader.id}`) : undefined;
+    await enqueue(tx, {
+      kind: news.kind,
+      installId: snapshot.install.id,
+      to: { userId: reader.id, address: reader.email },
+      ...mail,
+      inReplyTo: answers,
+      references: answers ? [answers] : [],
+      dedupeKey: `${news.kind}:${news.actId}:${reader.id}`,
+    });
+  }
+}
+
+async function messageIdOf(tx: Tx, dedupeKey: string): Promise<string | undefined> {
+  const [row] = await tx.select({ messageId: outbox.messageId }).from(outbox).where(eq(outbox.dedupeKey, dedupeKey));
+  return row?.messageId;
+}
+
+async function modelOf(tx: Tx, news: CrewNews, run: Snapshot["runs"][number], judged: RunResult): Promise<RunMailModel> {
+  const { snapshot } = news.e;
+  const { install } = snapshot;
+  const [stored] = await tx.select({ positions: installs.positions }).from(installs).where(eq(installs.id, install.id));
+  const [row] = await tx.select({ place: runs.place }).from(runs).where(eq(runs.id, run.id));
+  const plan = [...run.plans].sort((a, b) => a.version - b.version).at(-1);
+  if (!plan || !stored || !row) throw new Error("News of a run without a plan");
+  const nameOf = (id: string) => snapshot.members.find((m) => m.id === id)?.name ?? "a former member";
+  const wind = [...run.winds].sort((a, b) => a.seq - b.seq).at(-1);
+  const base = `${env.appOrigin ?? `http://${env.host}:${env.port}`}/installs/${install.id}`;
+  return {
+    install,
+    run: {
+      id: run.id,
+      label: run.label,
+      rung: snapshot.rungs.find((r) => r.key === run.rung)?.name ?? run.rung,
+      place: row.place,
+      plannedStart: run.plannedStart,
+      rpm: plan.rpm,
+      version: plan.version,
+    },
+    clearance: judged.clearance,
+    wind: {
+      limit: plan.windLimit,
+      gustLimit: plan.gustLimit,
+      newest: wind ? { speed: wind.speed, gust: wind.gust, recorded: wind.recorded } : null,
+    },
+    crew: [...new Set(plan.positions.map((p) => p.member))].map((member) => ({
+      member,
+      name: nameOf(member),
+      positions: plan.positions.flatMap((p) => (p.member === member ? stored.positions.filter((d) => d.key === p.position) : [])),
+    })),
+    card: plan.card,
+    limits: snapshot.values
+      .filter((v) => v.card && v.limit)
+      .map((v) => ({ label: v.label, quantity: v.quantity, value: v.value, confirmed: v.source !== null })),
+    stops: news.stops.map((b) => ({ title: b.title, sentence: b.sentence, who: b.owner.members.map(nameOf), next: b.owner.next })),
+    goEnds: news.goEnds,
+    act: { by: nameOf(news.by), at: news.e.at, reason: news.reason, auto: news.auto },
+    head: news.head,
+    links: { run: `${base}/runs/${run.id}`, board: base },
+    cautions: CAUTIONS,
+  };
+}

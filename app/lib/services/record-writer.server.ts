@@ -1,0 +1,54 @@
+// Writes events at the end of an install's chain, inside the transaction of the act that they tell about.
+import { desc, eq } from "drizzle-orm";
+import type { Tx } from "#app/db/client.server";
+import { events } from "#app/db/schema/events";
+import type { Role } from "#app/lib/gates/snapshot";
+import { newId } from "#app/lib/ids";
+import { canonical } from "#app/lib/record/canonical";
+import { FIRST, link } from "#app/lib/record/chain";
+import { type EventBody, parseEvent } from "#app/lib/record/events";
+
+/** The columns that every record shares, ready to be spread into its row. */
+export interface RecordBase {
+  id: string;
+  installId: string;
+  seq: number;
+  recorded: number;
+  by: string;
+  as: Role;
+}
+
+export interface RecordWriter {
+  /** The instant that counts for everything in this act: the clock, but never before the newest record. */
+  now: number;
+  /** Number and hash of the newest event. */
+  head: () => { seq: number; hash: string };
+  /** Appends one event and returns the base of the row that it tells about. `id` where the row has one already. */
+  record: (who: { by: string; as: Role }, body: EventBody, id?: string) => Promise<RecordBase>;
+}
+
+/** A writer at the chain's present end. `clock` in ms since 1970 UTC. */
+export async function recordWriter(tx: Tx, installId: string, clock: number): Promise<RecordWriter> {
+  const [newest] = await tx
+    .select({ seq: events.seq, hash: events.hash, recorded: events.recorded })
+    .from(events)
+    .where(eq(events.installId, installId))
+    .orderBy(desc(events.seq))
+    .limit(1);
+  const now = Math.max(clock, newest?.recorded ?? 0);
+  let head = { seq: newest?.seq ?? 0, hash: newest?.hash ?? FIRST };
+  return {
+    now,
+    head: () => head,
+    async record({ by, as }, body, id = newId()) {
+      const seq = head.seq + 1;
+      const event = parseEvent({ v: 1, install: installId, seq, recorded: now, by, as, id, ...body });
+      const hash = link(head.hash, event);
+      await tx
+        .insert(events)
+        .values({ installId, seq, recorded: now, by, type: event.type, body: canonical(event), prev: head.hash, hash });
+      head = { seq, hash };
+      return { id, installId, seq, recorded: now, by, as };
+    },
+  };
+}
