@@ -9,7 +9,11 @@ import { BodyTooLarge, readRequest } from "./scripts/read-request.mjs";
 import { serveFiles } from "./scripts/serve-files.mjs";
 
 process.env.NODE_ENV ??= "production";
-const build = await import("./build/server/index.js");
+const build = await import("./build/server/index.js").catch((error) => {
+  // A setting that cannot be used, or no build: said before there is a log.
+  console.error(`Cannot start. ${error.message}`);
+  process.exit(78);
+});
 const { boot, createRequestHandler, env, log, newRequestFacts, requestContext, RouterContextProvider, setSecurityHeaders } =
   build.entry.module;
 const handle = createRequestHandler(build, env.mode);

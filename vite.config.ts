@@ -35,8 +35,8 @@ export default defineConfig(({ command }) => ({
   // Named up front so that the dev server does not find them late and reload the page;
   // server-only packages are kept out of the client's pre-bundle.
   optimizeDeps: {
-    include: ["@conform-to/react", "@conform-to/zod/v4", "zod", "@tanstack/react-table"],
-    exclude: ["@libsql/client", "drizzle-orm"],
+    include: ["@conform-to/react", "@conform-to/zod/v4", "zod", "@tanstack/react-table", "nanoid"],
+    exclude: ["drizzle-orm", "remix-auth", "remix-auth-form", ...external],
   },
   server: { host: "127.0.0.1", port: 5173, strictPort: true },
 }));

@@ -82,7 +82,16 @@ export const handleError: HandleErrorFunction = (error, { request, context }) =>
 
 /** What must be done before the first request: bring the database up to date, start sending mail. Resolves to the way to stop. */
 export async function boot(): Promise<() => Promise<void>> {
-  await migrateDatabase();
+  await migrateDatabase().catch((error: unknown) => {
+    const reason = error instanceof Error ? error.message : String(error);
+    throw new Error(
+      `The database ${env.databaseUrl} cannot be used: ${reason}. See that its folder can be written and has room; if the file is damaged, restore a backup.`,
+    );
+  });
   const mail = startMailWorker();
   return () => mail.stop();
 }
+
+// The development server has nobody in front to call boot; it loads this module anew at each edit, and boots once.
+const booted = globalThis as typeof globalThis & { bladecountBooted?: Promise<unknown> };
+if (import.meta.env.DEV) booted.bladecountBooted ??= boot().catch((error: unknown) => log.fatal({ err: error }, "cannot start"));

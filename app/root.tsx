@@ -29,7 +29,8 @@ export function Layout({ children }: { children: React.ReactNode }) {
         <meta charSet="utf-8" />
         <meta name="viewport" content="width=device-width, initial-scale=1" />
         <Meta />
-        <Links />
+        {/* Style sheets are our own files and need no nonce; a browser hides it, and hydration would find it missing. */}
+        <Links nonce="" />
       </head>
       <body>
         <a className="skip-link" href="#main">

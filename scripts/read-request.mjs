@@ -23,14 +23,15 @@ export class BodyTooLarge extends Error {
 }
 
 /**
- * Throws BodyTooLarge when the sender says so itself, TypeError when the address cannot be read. `tooLarge` of the answer turns
- * true when a body of unknown length passes its limit.
+ * Throws BodyTooLarge when the sender says so itself, another error when the address cannot be read. `overrun()` of the answer is
+ * that error once a body of unknown length has passed its limit.
  * @param {import("node:http").IncomingMessage} req
  * @param {import("node:http").ServerResponse} res
  * @param {string | undefined} origin the public address, when a proxy in front ends TLS
  */
 export function readRequest(req, res, origin) {
   const url = new URL(`${origin ?? `http://${req.headers.host}`}${req.url}`);
+  decodeURI(url.pathname);
   const limit = bodyLimit(url.pathname, req.headers["content-type"] ?? "");
   if (Number(req.headers["content-length"] ?? 0) > limit) throw new BodyTooLarge(limit);
 

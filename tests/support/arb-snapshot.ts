@@ -3,7 +3,7 @@
  * to six disturbances hit it. So a good share of gates still stands signed, and each rule has been broken alone somewhere.
  */
 import fc from "fast-check";
-import type { Instant, Item, Snapshot } from "#app/lib/gates/snapshot";
+import type { Gate, Instant, Item, Snapshot } from "#app/lib/gates/snapshot";
 import type { RequiredBy, SystemKey, Validity } from "#app/lib/template/types";
 import { type Dice, diceFrom } from "./dice";
 import { disturb } from "./disturbances";
@@ -27,11 +27,7 @@ const VALIDITIES: (Validity | null)[] = [
   { hours: 12, afterRunHours: null },
   { hours: 4, afterRunHours: 12 },
 ];
-const POLICIES = [
-  [["builder"], ["inspector"]],
-  [["builder"], ["lead", "inspector"]],
-  [["builder"]],
-] as const;
+const POLICIES = [[["builder"], ["inspector"]], [["builder"], ["lead", "inspector"]], [["builder"]]] as const;
 
 function addItems(dice: Dice, board: Board, gate: string, more: Partial<Item> = {}): void {
   const own: Item[] = [];
@@ -102,7 +98,7 @@ function addLateGates(dice: Dice, board: Board): void {
   }
   if (dice.chance(60)) {
     const needs = board.s.gates.filter((g) => g.lookBack?.kind === "run").map((g) => g.id);
-    board.gate("rl", { requiredBy: { kind: "release" }, policy: [], needs });
+    board.gate("rl", { requiredBy: { kind: "release" }, policy: dice.chance(80) ? [] : [["builder"], ["inspector"]], needs });
     addItems(dice, board, "rl");
     board.item("rl-record", "rl", { parts: [{ kind: "computed", rule: "release-record" }] });
     if (dice.chance(50)) board.item("rl-openings", "rl", { parts: [{ kind: "computed", rule: "release-openings" }] });
@@ -110,9 +106,12 @@ function addLateGates(dice: Dice, board: Board): void {
 }
 
 function signRelease(dice: Dice, board: Board, holdingIds: string[]): void {
-  const own = board.s.gates.filter((g) => g.requiredBy.kind === "release" && !g.hidden);
+  const own = board.s.gates.filter((g) => g.requiredBy.kind === "release" && g.lookBack === null && !g.hidden);
   const covers = { items: own.flatMap((g) => board.covers(g.id)), signatures: holdingIds };
-  for (const [by, as] of [["la", "lead"], ["di", "inspector"]] as const) {
+  for (const [by, as] of [
+    ["la", "lead"],
+    ["di", "inspector"],
+  ] as const) {
     if (dice.chance(90)) {
       const base = { ...board.record("release", { by, as }), as };
       board.s.releaseSignatures.push({ ...base, meaning: "released", rulesVersion: "1", covers, withdrawn: null });
@@ -128,6 +127,7 @@ export function makeScene(dice: Dice): Scene & { board: Board } {
   board.extinguishers();
   board.value("redline", 45);
   board.value("oilPressureMin", 6, dice.chance(90) ? "manual p. 4" : null, { card: true });
+  board.value("mass", 500, "weighed", { quantity: "mass", limit: false });
   if (dice.chance(20)) board.s.settings.stepWindow = 2 * TICK;
   const rungs = dice.int(1, 3);
   for (let n = 1; n <= rungs; n++) board.rung(String(n), 10 * (n + 1));
@@ -157,8 +157,13 @@ export function makeScene(dice: Dice): Scene & { board: Board } {
       if (dice.chance(50)) board.act(other, "go");
     }
   } else {
-    const releasing = board.s.gates.filter((g) => !["release", "runs"].includes(g.requiredBy.kind) && !g.hidden);
-    signRelease(dice, board, board.s.signatures.filter((x) => releasing.some((g) => g.id === x.gate)).map((x) => x.id));
+    const kinds = (g: Gate) => g.requiredBy.kind !== "runs" && (g.requiredBy.kind !== "release" || g.lookBack !== null);
+    const releasing = board.s.gates.filter((g) => kinds(g) && !g.hidden);
+    signRelease(
+      dice,
+      board,
+      board.s.signatures.filter((x) => releasing.some((g) => g.id === x.gate)).map((x) => x.id),
+    );
   }
   if (dice.chance(75)) for (let n = dice.int(0, 6); n > 0; n--) disturb(dice, board);
   const at = board.now + dice.one([0, 0, 1, 4, 40]) * TICK;

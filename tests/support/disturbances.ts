@@ -4,6 +4,7 @@
  */
 import type { Item, Proof, Run } from "#app/lib/gates/snapshot";
 import type { Dice } from "./dice";
+import { restraintEvidence } from "./sheets";
 import { type Board, passing, TICK } from "./snapshots";
 
 const SYSTEMS = ["oil", "fueleng", "ign", "bay", "prop"] as const;
@@ -87,6 +88,10 @@ const work: Record<string, Happening> = {
     }
     board.proof(item.id, { evidence, tools: dice.one([[], ["t2"], ["t1"], ["t9"]]) });
   },
+  "other straps": (dice, board) => {
+    const item = dice.maybeOne(board.s.items.filter((i) => i.parts.some((p) => p.kind === "sheet")));
+    if (item) board.proof(item.id, { evidence: item.parts.map((part) => passing(part) && restraintEvidence(dice.one([50, 300, 3000]))) });
+  },
   "close opening": (dice, board) => {
     const opening = dice.maybeOne(board.s.openings.filter((o) => o.closed === null));
     if (opening) opening.closed = board.now;
@@ -164,7 +169,7 @@ const edits: Record<string, Happening> = {
   limit: (dice, board) => {
     const value = dice.one(board.s.values);
     if (dice.chance(50)) value.source = null;
-    else value.value = dice.one([null, 15, 9]);
+    else value.value = dice.one([null, 15, 9, 500]);
   },
   "limit in band": (dice, board) => {
     const part = dice.maybeOne(board.s.items.flatMap((i) => i.parts).filter((p) => p.kind === "measure" || p.kind === "torque"));
@@ -201,13 +206,25 @@ const running: Record<string, Happening> = {
   },
   "plan with other gates": (dice, board) => {
     const run = openRun(dice, board);
-    if (run) board.brief(run, { requiredGates: dice.some(board.s.gates.map((g) => g.id), 60) });
+    if (run)
+      board.brief(run, {
+        requiredGates: dice.some(
+          board.s.gates.map((g) => g.id),
+          60,
+        ),
+      });
   },
   "plan with other crew": (dice, board) => {
     const run = openRun(dice, board);
     if (!run) return;
     const member = dice.one(["cy", "bo", "fi", "nobody"]);
-    board.brief(run, { positions: [{ position: "operator", member: "la" }, { position: "runlead", member: "cy" }, { position: "fireguard", member }] });
+    board.brief(run, {
+      positions: [
+        { position: "operator", member: "la" },
+        { position: "runlead", member: "cy" },
+        { position: "fireguard", member },
+      ],
+    });
   },
   "roll call again": (dice, board) => {
     const run = openRun(dice, board);

@@ -29,6 +29,7 @@ import { TitlePipe } from "#app/components/ui/TitlePipe";
 import { ValveSign } from "#app/components/ui/ValveSign";
 import { fewGates, firstWeek, heldBeforeRun3, manyGates, oneGate, released, twoThings } from "./sample-line";
 
+const ROLE = "builder";
 const WORDS = ["Board", "Build-up", "Findings", "Loose ends", "Crib", "Bench", "Record"];
 
 function Page({ current = "Board", foot, children }: { current?: string; foot?: ReactNode; children: ReactNode }) {
@@ -42,9 +43,14 @@ function Page({ current = "Board", foot, children }: { current?: string; foot?: 
         registration="N0417B"
         ship="Bramble"
         navLabel="Install"
-        links={WORDS.map((label) => ({ label, href: `/${label}`, current: label === current, ...(label === "Loose ends" ? { count: 2, countLabel: "open" } : {}) }))}
+        links={WORDS.map((label) => ({
+          label,
+          href: `/${label}`,
+          current: label === current,
+          ...(label === "Loose ends" ? { count: 2, countLabel: "open" } : {}),
+        }))}
         person="Mirela Tansen"
-        role="builder"
+        role={ROLE}
         saved="saved 10:42 CET"
         network="online"
       />
@@ -54,7 +60,19 @@ function Page({ current = "Board", foot, children }: { current?: string; foot?: 
   );
 }
 
-const Board = ({ line, valve, held, title, state }: { line: LineProps; valve?: ShownValve; held?: boolean; title: string; state: string }) => (
+const Board = ({
+  line,
+  valve,
+  held,
+  title,
+  state,
+}: {
+  line: LineProps;
+  valve?: ShownValve;
+  held?: boolean;
+  title: string;
+  state: string;
+}) => (
   <Page>
     <TitlePipe title={title} state={state} valve={valve} held={held} then="Then the day check, then the walk-round." />
     <Line {...line} />
@@ -99,7 +117,12 @@ const Parts = () => (
     <Notice band kind="hold" title="GO of 09:14 CET is over.">
       6 people were told at 09:21, 4 have read it. Nobody starts the engine. HOLD stays until a lead calls GO again.
     </Notice>
-    <Notice band kind="offline" title="No network. As of 14:10 CET, 3 waiting to be sent" action={<Fitting href="/waiting">See the 3</Fitting>}>
+    <Notice
+      band
+      kind="offline"
+      title="No network. As of 14:10 CET, 3 waiting to be sent"
+      action={<Fitting href="/waiting">See the 3</Fitting>}
+    >
       What others did since 14:10 is not in the picture.
     </Notice>
     <section className="grid gap-4 p-6">
@@ -145,7 +168,7 @@ const Parts = () => (
           <BandRule min={-2} max={2} value={1} label="+1 degree, band −2 to +2" />
         </div>
       </div>
-      <div className="grid gap-4 tablet:grid-cols-3">
+      <div className="grid items-start gap-4 tablet:grid-cols-3">
         <Fitting size="act" note="24.0 N·m with TW-5">
           Put down 4 plugs
         </Fitting>
@@ -220,7 +243,14 @@ const Forms = () => (
         ]}
       />
       <div className="flex flex-wrap gap-4">
-        <TextInput name="registration" label="Registration" figures size={8} defaultValue="N0550R" errors={["Enter it as painted, letters and figures"]} />
+        <TextInput
+          name="registration"
+          label="Registration"
+          figures
+          size={8}
+          defaultValue="N0550R"
+          errors={["Enter it as painted, letters and figures"]}
+        />
         <TextInput name="ship" label="Name" optional defaultValue="Ladle" />
         <NumberInput name="torque" label="True torque" unit="N·m" defaultValue="24.0" hint="22 to 26 N·m, maker’s manual p. 41" />
         <Select name="wrench" label="Wrench" empty="choose a wrench" options={[{ value: "5", label: "TW-5, due 14 Mar" }]} />
@@ -235,7 +265,13 @@ const Forms = () => (
           defaultValue="electric"
           options={["gravity", "engine pump", "engine pump + electric", "electric"].map((label) => ({ value: label, label }))}
         />
-        <ChoiceGroup no={2} open name="gear" label="Gear" options={["nose wheel", "tail wheel"].map((label) => ({ value: label, label }))} />
+        <ChoiceGroup
+          no={2}
+          open
+          name="gear"
+          label="Gear"
+          options={["nose wheel", "tail wheel"].map((label) => ({ value: label, label }))}
+        />
         <ChoiceGroup
           no={3}
           kind="checkbox"
@@ -256,7 +292,13 @@ const Forms = () => (
         options={["all 4", "waits for me", "not clear", "released"].map((label, i) => ({ value: i ? label : "all", label }))}
       />
       <div className="max-w-[370px]">
-        <PinInput name="pin" label="Your signing PIN" hint="6 digits or more." errors={["That is not your PIN. 4 tries are left."]} keypad />
+        <PinInput
+          name="pin"
+          label="Your signing PIN"
+          hint="6 digits or more."
+          errors={["That is not your PIN. 4 tries are left."]}
+          keypad
+        />
       </div>
     </form>
   </Page>

@@ -3,9 +3,10 @@
  * compared with it by the properties. It answers the essence only: what stands, in which state, and the clearance.
  */
 import { computeSheet } from "#app/lib/bench/sheet";
+import type { BoardResult } from "#app/lib/gates/result";
 import type { Cover, Gate, Instant, Proof, Run, Signature, Snapshot } from "#app/lib/gates/snapshot";
 import type { SigningRole } from "#app/lib/template/types";
-import { proofsInOrder, valueOf } from "./naive-evidence";
+import { installValue, proofsInOrder } from "./naive-evidence";
 import {
   allConfirmed, bySeq, endOf, heldRole, isComputed, isPresent, isScrubbed, isSettled, isStarted, itemsOf, logIsDealtWith, looseEndAccepted,
   type NaiveItem, naiveItem, newestAct, newestPlan, noOpeningSinceRun, prerequisitesOf, presentGates, requiredGates,
@@ -127,18 +128,17 @@ function runState(s: Snapshot, run: Run, at: Instant): string {
 
 function clearanceOf(s: Snapshot, run: Run, at: Instant): number {
   const planned = newestPlan(run)?.rpm ?? s.rungs.find((r) => r.key === run.rung)?.rpm ?? 0;
-  const caps = [planned, valueOf(s, "redline") ?? 0];
+  const caps = [planned, installValue(s, "redline") ?? 0];
   for (const f of s.findings) if (f.severity === "limiting" && !f.closed) caps.push(f.cap ?? 0);
   for (const item of requiredGates(s, run).flatMap((g) => itemsOf(s, g))) {
     item.parts.forEach((part, i) => {
       if (part.kind !== "sheet" || part.sheet !== "restraint") return;
       const found = naiveItem(s, item, at);
-      if (!found.stands) caps.push(0);
       const evidence = proofsInOrder(s, item.id).at(-1)?.evidence[i];
-      if (found.state !== "done" || evidence?.kind !== "sheet") return;
+      // Not applicable: there is no sheet, so none stands.
+      if (found.state !== "done" || evidence?.kind !== "sheet") return caps.push(0);
       const computed = computeSheet("restraint", evidence.inputs);
-      if (!computed.ok) caps.push(0);
-      else if (computed.result.cap !== null) caps.push(computed.result.cap);
+      return caps.push(computed.ok ? (computed.result.cap ?? Number.POSITIVE_INFINITY) : 0);
     });
   }
   return Math.min(...caps);
@@ -160,7 +160,9 @@ function crewIsReady(s: Snapshot, run: Run, at: Instant): boolean {
   const lastHold = newestAct(run, "hold");
   return people.every((member) => {
     const acked = run.acks.some((a) => a.by === member && a.version === plan.version);
-    const answer = bySeq(run.answers).filter((a) => a.by === member).at(-1);
+    const answer = bySeq(run.answers)
+      .filter((a) => a.by === member)
+      .at(-1);
     const fresh = answer && answer.version === plan.version && (!lastHold || answer.seq > lastHold.seq);
     return acked && fresh && answer.answer === "go" && answer.queueEmpty;
   });
@@ -172,6 +174,15 @@ function windIsInside(run: Run, at: Instant): boolean {
   return !!plan && !!wind && at < wind.dayEnds && wind.speed <= plan.windLimit && wind.gust <= plan.gustLimit && !wind.tail;
 }
 
+/**
+ * Called or running. A run that was called keeps the others back until it is scrubbed or has run: else a HOLD, or the end of its GO,
+ * would make another run clear, which bad news and time must never do.
+ */
+function isInTheWay(s: Snapshot, run: Run, at: Instant): boolean {
+  const state = runState(s, run, at);
+  return ["called", "running"].includes(state) || (state === "held" && newestAct(run, "go") !== null);
+}
+
 function isClear(s: Snapshot, run: Run, at: Instant): boolean {
   const rung = s.rungs.find((r) => r.key === run.rung);
   const plan = newestPlan(run);
@@ -181,7 +192,7 @@ function isClear(s: Snapshot, run: Run, at: Instant): boolean {
   return (
     s.rungs.every((r) => r.order >= rung.order || isSettled(s, r.key)) &&
     others.every((r) => !isStarted(r) || isReviewed(s, r, at)) &&
-    others.every((r) => !["called", "running"].includes(runState(s, r, at))) &&
+    others.every((r) => !isInTheWay(s, r, at)) &&
     requiredGates(s, run).every((g) => gateStands(s, g, at)) &&
     s.findings.every((f) => f.severity !== "grounding" || f.closed) &&
     s.looseEnds.every((l) => l.confirmed || looseEndAccepted(s, l, run.rung)) &&
@@ -196,7 +207,8 @@ function isClear(s: Snapshot, run: Run, at: Instant): boolean {
 
 function naiveRelease(s: Snapshot, at: Instant): NaiveBoard["release"] {
   const required = presentGates(s).filter((g) => g.requiredBy.kind !== "runs");
-  const own = required.filter((g) => g.requiredBy.kind === "release");
+  // "RL's proofs and the other gates' signature ids": post-run gates are required by the release alone too, but have signatures.
+  const own = required.filter((g) => g.requiredBy.kind === "release" && g.lookBack === null);
   const conditions =
     s.rungs.every((r) => isSettled(s, r.key)) &&
     s.runs.every((r) => !isStarted(r) || isReviewed(s, r, at)) &&
@@ -220,8 +232,9 @@ function naiveRelease(s: Snapshot, at: Instant): NaiveBoard["release"] {
       }),
     );
   if (conditions && both(good, false)) return { stands: true, state: "released" };
+  if (both(valid, true)) return { stands: false, state: "lapsed" };
   if (conditions) return { stands: false, state: good.length > 0 ? "half signed" : "ready" };
-  return { stands: false, state: both(valid, true) ? "lapsed" : "not yet" };
+  return { stands: false, state: "not yet" };
 }
 
 /** Every answer of the rules at `at`, each worked out afresh. */
@@ -241,4 +254,22 @@ export function naive(s: Snapshot, at: Instant): NaiveBoard {
     board.runs[run.id] = { clear: isClear(s, run, at), state: runState(s, run, at), clearanceRpm: clearanceOf(s, run, at) };
   }
   return board;
+}
+
+/** The same essence of the product's answer, for comparison. */
+export function essenceOf(board: BoardResult): NaiveBoard {
+  const essence: NaiveBoard = {
+    items: {},
+    gates: {},
+    rungs: {},
+    runs: {},
+    release: { stands: board.release.stands, state: board.release.state },
+  };
+  for (const { id, stands, state } of Object.values(board.items)) essence.items[id] = { stands, state };
+  for (const { id, present, complete, ready, stands, state } of Object.values(board.gates)) {
+    if (present) essence.gates[id] = { complete, ready, stands, state };
+  }
+  for (const { key, settled } of Object.values(board.rungs)) essence.rungs[key] = { settled };
+  for (const { id, clear, state, clearance } of board.runs) if (id) essence.runs[id] = { clear, state, clearanceRpm: clearance.rpm };
+  return essence;
 }

@@ -9,7 +9,7 @@ import type { Criterion, Part, ValueKey } from "#app/lib/template/types";
 type Tally = Extract<Evidence, { kind: "tally" }>;
 
 /** The install's value of this key, null where it has none. */
-export function valueOf(s: Snapshot, key: ValueKey): number | null {
+export function installValue(s: Snapshot, key: ValueKey): number | null {
   return s.values.find((v) => v.key === key)?.value ?? null;
 }
 
@@ -21,7 +21,7 @@ export function proofsInOrder(s: Snapshot, itemId: string): Proof[] {
 function bandOf(s: Snapshot, criterion: Criterion): { min: number | null; max: number | null } | null {
   const ends = { min: criterion.band?.min ?? null, max: criterion.band?.max ?? null };
   if (criterion.limit) {
-    const limit = valueOf(s, criterion.limit.key);
+    const limit = installValue(s, criterion.limit.key);
     if (limit === null) return null;
     ends[criterion.limit.end] = limit;
   }
@@ -68,7 +68,7 @@ function crankMeets(giveUpAfter: number, bursts: Extract<Evidence, { kind: "cran
 function sheetMeets(s: Snapshot, evidence: Extract<Evidence, { kind: "sheet" }>): boolean {
   const computed = computeSheet(evidence.sheet, evidence.inputs);
   if (!computed.ok || !computed.result.passes || evidence.version !== SHEET_VERSIONS[evidence.sheet]) return false;
-  return valuesTaken(evidence.sheet).every((key) => evidence.took[key] === undefined || evidence.took[key] === valueOf(s, key));
+  return valuesTaken(evidence.sheet).every((key) => evidence.took[key] === undefined || evidence.took[key] === installValue(s, key));
 }
 
 function partMeets(s: Snapshot, part: Part, evidence: Evidence | null | undefined, proof: Proof): boolean {

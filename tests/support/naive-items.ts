@@ -3,6 +3,7 @@
  * from the snapshot by plain loops; `path` guards against circles only.
  */
 import type { Gate, Instant, Item, Proof, Role, Run, RunAct, Snapshot } from "#app/lib/gates/snapshot";
+import type { ComputedRule } from "#app/lib/template/types";
 import { evidenceMeets, proofsInOrder } from "./naive-evidence";
 
 export type NaiveItem = { stands: boolean; state: "to do" | "done" | "not applicable" | "second eyes" | "lapsed" };
@@ -42,7 +43,11 @@ export function throughAbsent(s: Snapshot, ids: string[], path: string[] = []): 
 type Act<K extends RunAct["act"]> = Extract<RunAct, { act: K }>;
 
 export function newestAct<K extends RunAct["act"]>(run: Run, ...kinds: K[]): Act<K> | null {
-  return (bySeq(run.acts).filter((a) => (kinds as string[]).includes(a.act)).at(-1) as Act<K> | undefined) ?? null;
+  return (
+    (bySeq(run.acts)
+      .filter((a) => (kinds as string[]).includes(a.act))
+      .at(-1) as Act<K> | undefined) ?? null
+  );
 }
 export const isStarted = (run: Run): boolean => newestAct(run, "start", "take-back")?.act === "start";
 export const endOf = (run: Run): Instant | null => (isStarted(run) ? (newestAct(run, "ended")?.at ?? null) : null);
@@ -75,13 +80,11 @@ export function requiredGates(s: Snapshot, run: Run): Gate[] {
   const plan = newestPlan(run);
   return plan === null ? defaultGates(s, run.rung) : presentGates(s).filter((g) => plan.requiredGates.includes(g.id));
 }
-/** What the next run requires: the plan of a run of the next rung that is neither ended nor scrubbed, else the default. */
+/** What the next run requires: the plans of the runs of the next rung that are neither ended nor scrubbed, else the default. */
 export function nextRequired(s: Snapshot): Gate[] {
   const rung = nextRung(s);
   const open = s.runs.filter((r) => rung !== null && r.rung === rung.key && endOf(r) === null && !isScrubbed(r) && newestPlan(r) !== null);
-  const published = (r: Run) => newestPlan(r)?.recorded ?? 0;
-  const run = open.sort((a, b) => published(a) - published(b) || (a.id < b.id ? -1 : 1)).at(-1);
-  return run ? requiredGates(s, run) : defaultGates(s, rung?.key ?? null);
+  return open.length > 0 ? open.flatMap((run) => requiredGates(s, run)) : defaultGates(s, rung?.key ?? null);
 }
 export const logIsDealtWith = (run: Run): boolean =>
   run.acts.some((a) => a.act === "log-read" || (a.act === "no-log" && a.as === "inspector")) &&
@@ -151,7 +154,8 @@ function restsOnStep(s: Snapshot, step: Item, proof: Proof): boolean {
   const older = proofsInOrder(s, step.id).filter((p) => p.counts < proof.counts);
   const rest = older.at(-1);
   if (!rest || rest.withdrawn || !meetsOneToFive(s, step, rest)) return false;
-  if (rest.state !== "na" && proof.counts - rest.counts > s.settings.stepWindow) return false;
+  if (rest.state === "na") return true;
+  if (proof.counts - rest.counts > s.settings.stepWindow) return false;
   return !s.proofs.some((e) => e.item === step.step?.endedBy && rest.counts < e.counts && e.counts < proof.counts);
 }
 
@@ -173,7 +177,9 @@ function followsHold(s: Snapshot, item: Item, proof: Proof, at: Instant, path: s
 }
 
 function endsItsSteps(s: Snapshot, item: Item, proof: Proof): boolean {
-  const steps = presentGates(s).flatMap((g) => itemsOf(s, g)).filter((i) => i.step?.endedBy === item.id);
+  const steps = presentGates(s)
+    .flatMap((g) => itemsOf(s, g))
+    .filter((i) => i.step?.endedBy === item.id);
   return steps.every((step) => s.proofs.filter((p) => p.item === step.id).every((p) => p.counts < proof.counts));
 }
 
@@ -222,37 +228,30 @@ export function prerequisitesOf(s: Snapshot, gate: Gate): string[] {
 
 // ---------------------------------------------------------------- an item
 
-function computedHolds(s: Snapshot, gate: Gate, item: Item, at: Instant): boolean {
-  return item.parts.every((part) => {
-    if (part.kind !== "computed") return true;
-    switch (part.rule) {
-      case "extinguishers":
-        return extinguishersHold(s, at);
-      case "loose-ends":
-        return s.looseEnds.every((l) => l.confirmed !== null || looseEndAccepted(s, l, nextRung(s)?.key ?? null));
-      case "log": {
-        const look = gate.lookBack;
-        const run = look?.kind === "run" ? s.runs.find((r) => r.id === look.run) : look ? settlingRuns(s, look.rung).at(-1) : undefined;
-        return run !== undefined && endOf(run) !== null && logIsDealtWith(run);
-      }
-      case "release-record":
-        return s.findings.every((f) => f.closed) && s.looseEnds.every((l) => l.confirmed) && allConfirmed(s);
-      case "release-openings":
-        return noOpeningSinceRun(s);
+function ruleHolds(s: Snapshot, rule: ComputedRule, gate: Gate, at: Instant): boolean {
+  switch (rule) {
+    case "extinguishers":
+      return extinguishersHold(s, at);
+    case "loose-ends":
+      return s.looseEnds.every((l) => l.confirmed !== null || looseEndAccepted(s, l, nextRung(s)?.key ?? null));
+    case "log": {
+      const look = gate.lookBack;
+      const run = look?.kind === "run" ? s.runs.find((r) => r.id === look.run) : look ? settlingRuns(s, look.rung).at(-1) : undefined;
+      return run !== undefined && endOf(run) !== null && logIsDealtWith(run);
     }
-  });
+    case "release-record":
+      return s.findings.every((f) => f.closed) && s.looseEnds.every((l) => l.confirmed) && allConfirmed(s);
+    case "release-openings":
+      return noOpeningSinceRun(s);
+  }
 }
+const computedHolds = (s: Snapshot, gate: Gate, item: Item, at: Instant): boolean =>
+  item.parts.every((part) => part.kind !== "computed" || ruleHolds(s, part.rule, gate, at));
 
 function extinguishersHold(s: Snapshot, at: Instant): boolean {
   const fit = s.extinguishers.filter(
     (e) =>
-      !e.withdrawn &&
-      e.classB &&
-      e.agent !== "water" &&
-      e.lookDue !== null &&
-      at < e.lookDue &&
-      e.serviceDue !== null &&
-      at < e.serviceDue,
+      !e.withdrawn && e.classB && e.agent !== "water" && e.lookDue !== null && at < e.lookDue && e.serviceDue !== null && at < e.serviceDue,
   );
   return fit.length >= 2 && fit.some((e) => e.agent === "clean" || (e.agent === "co2" && e.charge >= FIVE_POUNDS));
 }
@@ -267,7 +266,9 @@ export function looseEndAccepted(s: Snapshot, end: Snapshot["looseEnds"][number]
 
 export function allConfirmed(s: Snapshot): boolean {
   const limits = s.values.filter((v) => v.limit).every((v) => v.value !== null && v.source !== null);
-  const killers = presentGates(s).flatMap((g) => itemsOf(s, g)).filter((i) => i.killer);
+  const killers = presentGates(s)
+    .flatMap((g) => itemsOf(s, g))
+    .filter((i) => i.killer);
   const bands = killers.flatMap((i) => i.parts).flatMap((p) => (p.kind === "measure" || p.kind === "torque" ? [p.criterion] : []));
   return limits && bands.every((c) => c.source !== null);
 }
@@ -294,7 +295,7 @@ export function naiveItem(s: Snapshot, item: Item, at: Instant, path: string[] =
     return isAccepted(s, proof) ? { stands: true, state: "not applicable" } : { stands: false, state: "second eyes" };
   }
   if (!evidenceMeets(s, item, proof)) return { stands: false, state: "to do" };
-  if (gate.lookBack && !item.step && lookedBackEnd(s, gate) === null) return { stands: false, state: "to do" };
+  if (gate.lookBack && lookedBackEnd(s, gate) === null) return { stands: false, state: "to do" };
   const rules = [
     () => sameRevision,
     () => proof.tools.every((t) => toolStands(s, t, proof.counts)),

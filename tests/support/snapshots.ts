@@ -4,10 +4,29 @@
  * so that equal instants are common.
  */
 import {
-  type Cover, DEFAULT_SETTINGS, type Evidence, type Finding, type Gate, type Instant, type Item, type LooseEnd, type Member, type Opening,
-  type PlanVersion, type Proof, type Recorded, type Role, type Run, type RunAct, type Rung, type Signature, type Snapshot, type Tool,
+  type Cover,
+  DEFAULT_SETTINGS,
+  type Evidence,
+  type Finding,
+  type Gate,
+  type Instant,
+  type Item,
+  type LooseEnd,
+  type Member,
+  type Opening,
+  type PlanVersion,
+  type Proof,
+  type Recorded,
+  type Role,
+  type Run,
+  type RunAct,
+  type Rung,
+  type Signature,
+  type Snapshot,
+  type Tool,
 } from "#app/lib/gates/snapshot";
 import type { CrewRule, Part, RunCard, SystemKey, Traits, Value, ValueDef, ValueKey } from "#app/lib/template/types"; // biome-ignore format: lists of names
+import { restraintEvidence } from "./sheets";
 
 /** One tick of the coarse clock: a quarter of an hour, exact in hours. */
 export const TICK = 15 * 60_000;
@@ -61,6 +80,7 @@ export function passing(part: Part, value = 10): Evidence | null {
     case "crank":
       return { kind: "crank", bursts: [{ at: START, seconds: 8, pressureAfter: 5 }] };
     case "sheet":
+      return part.sheet === "restraint" ? restraintEvidence() : null;
     case "computed":
       return null;
   }
@@ -260,7 +280,16 @@ export class Board {
   }
   finding(severity: Finding["severity"], more: Partial<Finding> = {}): Finding {
     const cap = severity === "limiting" ? 15 : null;
-    const finding: Finding = { ...this.record("finding"), system: "oil", words: "weeps", severity, cap, fixed: null, closed: null, ...more };
+    const finding: Finding = {
+      ...this.record("finding"),
+      system: "oil",
+      words: "weeps",
+      severity,
+      cap,
+      fixed: null,
+      closed: null,
+      ...more,
+    };
     this.s.findings.push(finding);
     return finding;
   }
@@ -280,7 +309,8 @@ export class Board {
     const rung = this.s.rungs.find((r) => r.key === run.rung);
     const kinds = ["runs-and-release", "runs"];
     const required = this.s.gates.filter(
-      ({ requiredBy: r, lookBack }) => (kinds.includes(r.kind) && lookBack?.kind !== "run") || (r.kind === "rung-and-release" && r.rung === run.rung),
+      ({ requiredBy: r, lookBack }) =>
+        (kinds.includes(r.kind) && lookBack?.kind !== "run") || (r.kind === "rung-and-release" && r.rung === run.rung),
     );
     const plan: PlanVersion = {
       version: run.plans.length + 1,
@@ -309,7 +339,12 @@ export class Board {
     const base = { ...this.record("wind"), speed: 3, gust: 5, tail: false, dayEnds: this.now + 40 * TICK };
     run.winds.push({ ...base, ...more });
   }
-  act<K extends RunAct["act"]>(run: Run, act: K, more: Partial<Extract<RunAct, { act: K }>> = {}, who: By = { by: "la", as: "lead" }): void {
+  act<K extends RunAct["act"]>(
+    run: Run,
+    act: K,
+    more: Partial<Extract<RunAct, { act: K }>> = {},
+    who: By = { by: "la", as: "lead" },
+  ): void {
     const base: Record<RunAct["act"], object> = {
       go: { version: run.plans.length, plannedStart: this.now, ends: this.now + 16 * TICK, cap: 20, signatures: [] },
       hold: { reason: "rain", auto: false },

@@ -27,11 +27,29 @@ interface ChoiceGroupProps extends Pick<ControlProps, "id" | "name" | "label" | 
 
 /** A question with its answers as fittings: a fieldset, so that the question is read with each answer. */
 export function ChoiceGroup(props: ChoiceGroupProps) {
-  const { id, name, label, hint, errors, options, kind = "radio", defaultValue, value, onChange, no, open = false, stacked = false } = props;
+  const {
+    id,
+    name,
+    label,
+    hint,
+    errors,
+    options,
+    kind = "radio",
+    defaultValue,
+    value,
+    onChange,
+    no,
+    open = false,
+    stacked = false,
+  } = props;
   const { control, hintId, errorId, aria } = wire({ id, name, hint, errors });
   const held = (list: string | string[] | undefined, one: string) => (Array.isArray(list) ? list.includes(one) : list === one);
   return (
-    <fieldset id={control} className={cx("choices", open && "choices-open", stacked && "choices-stacked")} aria-describedby={aria["aria-describedby"]}>
+    <fieldset
+      id={control}
+      className={cx("choices", open && "choices-open", stacked && "choices-stacked")}
+      aria-describedby={aria["aria-describedby"]}
+    >
       <legend className={props.labelHidden ? "sr-only" : undefined}>
         {no !== undefined && <span className="fig choices-no">{no} </span>}
         {label}

@@ -22,7 +22,12 @@ export function PasswordInput(props: ControlProps & { autoComplete: "current-pas
           <input {...rest} {...aria} id={control} name={name} type={shown ? "text" : "password"} autoCapitalize="none" spellCheck={false} />
         </span>
         {scripted && (
-          <Fitting type="button" label={shown ? "Hide the password" : "Show the password"} onClick={() => setShown(!shown)}>
+          <Fitting
+            className="mt-1"
+            type="button"
+            label={shown ? "Hide the password" : "Show the password"}
+            onClick={() => setShown(!shown)}
+          >
             {shown ? "Hide" : "Show"}
           </Fitting>
         )}

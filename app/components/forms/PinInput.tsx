@@ -64,7 +64,12 @@ function PinDots({ filled, of }: { filled: number; of: number }) {
     <div className="pin-dots">
       <svg viewBox={`0 0 ${of * 32} 26`} height="30" role="img" aria-label={`${filled} of ${of} digits`}>
         {Array.from({ length: of }, (_, i) => i).map((i) => (
-          <path key={i} className={i < filled ? "on" : undefined} transform={`translate(${i * 32 + 14} 13)`} d="M-11 0-5.5-9.5H5.5L11 0 5.5 9.5H-5.5Z" />
+          <path
+            key={i}
+            className={i < filled ? "on" : undefined}
+            transform={`translate(${i * 32 + 14} 13)`}
+            d="M-11 0-5.5-9.5H5.5L11 0 5.5 9.5H-5.5Z"
+          />
         ))}
       </svg>
     </div>

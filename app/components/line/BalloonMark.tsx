@@ -2,7 +2,7 @@
 export function BalloonMark({ x, y, n }: { x: number; y: number; n: number | null }) {
   if (!n) return null;
   return (
-    <g className="balloon-mark" transform={`translate(${round(x)} ${round(y)})`} aria-hidden="true">
+    <g className="balloon-mark" transform={`translate(${round(x)} ${round(y)})`}>
       <circle r="11" />
       <text textAnchor="middle" y="5">
         {n}

@@ -11,7 +11,8 @@ export function LyingGate({ drawn }: { drawn: DrawnGate }) {
   const wider = (name.length - 1) * 18;
   const textX = round(x + LABEL_AT);
   const noteX = round(x + LABEL_AT + (gate.balloon ? BALLOON_ROOM : 0));
-  const width = LABEL_AT + 32 + Math.max(...name.map((line) => textWidth(line, NAME_PX)), textWidth(note, NOTE_PX) + (gate.balloon ? BALLOON_ROOM : 0));
+  const width =
+    LABEL_AT + 32 + Math.max(...name.map((line) => textWidth(line, NAME_PX)), textWidth(note, NOTE_PX) + (gate.balloon ? BALLOON_ROOM : 0));
   return (
     <Anchor className={`valve-link is-${gate.state}`} href={gate.href} aria-label={spokenGate(gate, name.join(" "))}>
       <rect className="hit" x={round(x - 25)} y={round(y - 26 - wider)} width={Math.round(width)} height={52 + wider} rx="3" />

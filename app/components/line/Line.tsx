@@ -29,7 +29,9 @@ export function Line(props: LineProps) {
         )}
       </div>
       {gates.length === 0 ? (
-        <p className="line-empty">No gates yet. Answer the set-up questions, and the gates that this install needs appear here as valves on a pipe.</p>
+        <p className="line-empty">
+          No gates yet. Answer the set-up questions, and the gates that this install needs appear here as valves on a pipe.
+        </p>
       ) : (
         <>
           <div className="line-drawing line-lying">

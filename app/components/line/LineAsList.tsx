@@ -20,7 +20,9 @@ export function LineAsList({ gates, walkRound, runs, release }: LineProps) {
         if (item.kind === "walk-round") return <GateRow key={item.key} gate={item.gate} />;
         if (item.kind === "run") return <RunRow key={item.key} run={item.run} />;
         const sign = item.kind === "release" ? <CapSign state={item.stop.state} /> : <ValveSign state={item.stop.state} />;
-        return <Row key={item.key} state={item.stop.state} sign={sign} href={item.stop.href} name={stopName(item)} says={stopWords(item.stop)} />;
+        return (
+          <Row key={item.key} state={item.stop.state} sign={sign} href={item.stop.href} name={stopName(item)} says={stopWords(item.stop)} />
+        );
       })}
     </ol>
   );
@@ -29,7 +31,16 @@ export function LineAsList({ gates, walkRound, runs, release }: LineProps) {
 function GateRow({ gate }: { gate: LineGate }) {
   const full = gate.full || gate.note;
   const says = full.toLowerCase().includes(VALVE_WORD[gate.state]) ? full : [VALVE_WORD[gate.state], full].filter(Boolean).join(": ");
-  return <Row state={gate.state} sign={<ValveSign state={gate.state} part={gate.part} />} href={gate.href} name={gate.name} says={says} balloon={gate.balloon} />;
+  return (
+    <Row
+      state={gate.state}
+      sign={<ValveSign state={gate.state} part={gate.part} />}
+      href={gate.href}
+      name={gate.name}
+      says={says}
+      balloon={gate.balloon}
+    />
+  );
 }
 
 function RunRow({ run }: { run: LineRun }) {

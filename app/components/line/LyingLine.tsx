@@ -12,12 +12,17 @@ export function LyingLine(props: LineProps & { label: string }) {
   const tooWide = width > 1320;
   return (
     // biome-ignore lint/a11y/useSemanticElements: an svg has no element for a group with a name
-    <svg viewBox={`0 0 ${round(width)} ${round(height)}`} role="group" aria-label={props.label} style={tooWide ? { minWidth: width } : undefined}>
-      <g aria-hidden="true">
+    <svg
+      viewBox={`0 0 ${round(width)} ${round(height)}`}
+      role="group"
+      aria-label={props.label}
+      style={tooWide ? { minWidth: width } : undefined}
+    >
+      <g>
         <Pipework drawn={pipework} />
         <path className="pipe-blank" d={gates.map((g) => (g.blank ? `M${round(g.x - 30)} ${round(g.y - 10)}v20` : "")).join("")} />
         {firstRun && (
-          <text className="g-note" x={round(width - 12)} y={round(firstRun.y - 20)} textAnchor="end">
+          <text className="g-note" x={round(width - 12)} y={round(firstRun.y - 22)} textAnchor="end">
             % rpm
           </text>
         )}
@@ -25,7 +30,7 @@ export function LyingLine(props: LineProps & { label: string }) {
       {gates.map((drawn) => (
         <LyingGate key={drawn.gate.id} drawn={drawn} />
       ))}
-      <RunPipe ladder={ladder} x={x} width={width} blade={Math.min(104, width - x - 82)} roomy={false} />
+      <RunPipe ladder={ladder} x={x} width={width} blade={Math.min(104, width - x - 82)} />
     </svg>
   );
 }

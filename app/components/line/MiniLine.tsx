@@ -27,9 +27,15 @@ export function MiniLine({ gates, runs, released = false, label, className }: Mi
   const firstShut = gates.findIndex((gate) => gate.state !== "signed");
   const firstOpen = runs.findIndex((run) => run.state !== "reviewed" && run.state !== "scrubbed");
   const flowTo = firstShut >= 0 ? gateX(firstShut) - 8 : firstOpen >= 0 ? runX(firstOpen) - 12 : released ? end + 8 : end - 6;
-  const name = label ? { role: "img", "aria-label": label } : { "aria-hidden": true };
   return (
-    <svg className={`pipe-small block h-auto w-full ${className ?? ""}`} style={{ maxWidth: end + 34 }} viewBox={`0 0 ${end + 34} 50`} {...name}>
+    <svg
+      className={`pipe-small block h-auto w-full ${className ?? ""}`}
+      style={{ maxWidth: end + 34 }}
+      viewBox={`0 0 ${end + 34} 50`}
+      role={label ? "img" : undefined}
+      aria-label={label}
+      aria-hidden={!label}
+    >
       <path className="pipe-wall" d={`M-4 ${Y}H${end + 8}`} />
       <path className="pipe-bore" d={`M-4 ${Y}H${end + 6}`} />
       {flowTo > 0 && <path className="pipe-flow" d={`M-4 ${Y}H${flowTo}`} />}

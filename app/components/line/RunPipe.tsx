@@ -18,19 +18,24 @@ interface RunPipeProps {
   width: number;
   /** Length of the blade of full rated speed. */
   blade: number;
-  /** Names and speeds are written out beside the blades. */
-  roomy: boolean;
+  /** Where the gates' names begin. Set on the standing Line: names and speeds are written out beside the blades. */
+  textX?: number;
 }
 
 /** What stands on the run pipe: the walk-round, a blade a run, post-run valves, service, the release cap. The pipe itself is part of the pipework. */
-export function RunPipe({ ladder, x, width, blade, roomy }: RunPipeProps) {
+export function RunPipe({ ladder, x, width, blade, textX }: RunPipeProps) {
+  const roomy = textX !== undefined;
   return ladder.map(({ item, y }) => {
     const place = { x, y, width };
     switch (item.kind) {
       case "walk-round":
-        return <WalkRound key={item.key} {...place} gate={item.gate} fed={item.fed} roomy={roomy} />;
+        return <WalkRound key={item.key} {...place} gate={item.gate} fed={item.fed} column={textX} />;
       case "run":
-        return roomy ? <NamedRun key={item.key} {...place} run={item.run} blade={blade} /> : <ShortRun key={item.key} {...place} run={item.run} blade={blade} />;
+        return roomy ? (
+          <NamedRun key={item.key} {...place} run={item.run} blade={blade} />
+        ) : (
+          <ShortRun key={item.key} {...place} run={item.run} blade={blade} />
+        );
       case "release":
         return <Release key={item.key} {...place} stop={item.stop} roomy={roomy} />;
       default:
@@ -45,12 +50,14 @@ interface Place {
   width: number;
 }
 
-function WalkRound({ x, y, width, gate, fed, roomy }: Place & { gate: LineGate; fed: boolean; roomy: boolean }) {
-  const textX = x + (roomy ? 46 : 28);
+function WalkRound({ x, y, width, gate, fed, column }: Place & { gate: LineGate; fed: boolean; column?: number }) {
+  const roomy = column !== undefined;
+  const textX = column ?? x + 28;
   const name = roomy ? gate.name : gate.short;
   return (
     <Anchor className={`valve-link is-${gate.state}`} href={gate.href} aria-label={spokenGate(gate, name)}>
       <rect className="hit" x={round(x - 26)} y={round(y - 27)} width={round(width - x + 22)} height="54" rx="3" />
+      {roomy && <path className="line-leader" d={`M${round(x + 20)} ${round(y)}H${round(textX - 6)}`} />}
       <g transform={`translate(${round(x)} ${round(y)})`}>
         <Valve state={gate.state} part={gate.part} fed={fed} standing scale={roomy ? 0.72 : 1} lever={36} />
       </g>
@@ -66,17 +73,18 @@ function WalkRound({ x, y, width, gate, fed, roomy }: Place & { gate: LineGate; 
 }
 
 function RunDrawing({ x, y, run, blade }: { x: number; y: number; run: LineRun; blade: number }) {
+  const length = blade * Math.min(1, Math.max(0.2, run.share));
   return (
     <>
       <g transform={`translate(${round(x + 6)} ${round(y)}) rotate(90)`}>
-        <Blade length={blade * Math.min(1, Math.max(0.2, run.share))} state={run.state} />
+        <Blade length={length} state={run.state} />
       </g>
       {isHeld(run) && (
         <g transform={`translate(${round(x)} ${round(y)}) rotate(90)`}>
           <Spade />
         </g>
       )}
-      <BalloonMark x={x - 36} y={y} n={run.balloon} />
+      <BalloonMark x={x + 6 + length * 0.72} y={y} n={run.balloon} />
     </>
   );
 }
@@ -87,7 +95,11 @@ function ShortRun({ x, y, width, run, blade }: Place & { run: LineRun; blade: nu
   const held = isHeld(run);
   const percent = Math.round(run.share * 100);
   return (
-    <Anchor className="valve-link" href={run.href} aria-label={spokenRun(run, held ? `${run.key}, HOLD` : `${run.key}, ${percent} % of rated`)}>
+    <Anchor
+      className="valve-link"
+      href={run.href}
+      aria-label={spokenRun(run, held ? `${run.key}, HOLD` : `${run.key}, ${percent} % of rated`)}
+    >
       <rect className="hit" x={round(x + 13)} y={round(y - 20)} width={round(width - x - 19)} height="40" rx="3" />
       <RunDrawing x={x} y={y} run={run} blade={blade} />
       <text className="run-number" x={round(textX)} y={round(y + 6)}>
@@ -118,16 +130,29 @@ function NamedRun({ x, y, width, run, blade }: Place & { run: LineRun; blade: nu
         {clip(run.name, NAME_PX, width - textX)}
       </text>
       <text className={held ? "run-hold" : second === run.rpmText ? "run-figure" : "g-note"} x={round(textX)} y={round(y + 17)}>
-        {second}
+        {second === run.rpmText ? tightFigure(second) : second}
       </text>
     </Anchor>
   );
 }
 
+/** The figures' type gives a point a whole cell: draw it and what follows closer. */
+function tightFigure(text: string) {
+  return text.split(/(?<=[.,])/).map((part, i) => (
+    <tspan key={part} dx={i ? "-0.27em" : undefined}>
+      {part}
+    </tspan>
+  ));
+}
+
 function SmallValve({ x, y, width, item, roomy }: Place & { item: Extract<LadderItem, { kind: "post-run" | "service" }>; roomy: boolean }) {
   const service = item.kind === "service";
   const seen = service ? "service" : roomy ? "after" : "";
-  const hit = roomy ? { x: x - 62, width: 74, height: 40 } : service ? { x: x - 30, width: width - x + 22, height: 26 } : { x: x - 30, width: 42, height: 30 };
+  const hit = roomy
+    ? { x: x - 62, width: 74, height: 40 }
+    : service
+      ? { x: x - 30, width: width - x + 22, height: 26 }
+      : { x: x - 30, width: 42, height: 30 };
   return (
     <Anchor
       className={`valve-link is-${item.stop.state}`}
@@ -150,7 +175,11 @@ function SmallValve({ x, y, width, item, roomy }: Place & { item: Extract<Ladder
 function Release({ x, y, width, stop, roomy }: Place & { stop: LineStop; roomy: boolean }) {
   const seen = roomy ? "release for taxi tests" : "release";
   return (
-    <Anchor className={`valve-link is-${stop.state}`} href={stop.href} aria-label={`${seen}${roomy ? "" : " for taxi tests"}, ${stopWords(stop)}`}>
+    <Anchor
+      className={`valve-link is-${stop.state}`}
+      href={stop.href}
+      aria-label={`${seen}${roomy ? "" : " for taxi tests"}, ${stopWords(stop)}`}
+    >
       <rect className="hit" x={round(x - 24)} y={round(y - 12)} width={round(width - x + 18)} height="40" rx="3" />
       <g transform={`translate(${round(x)} ${round(y)})`}>
         <ReleaseCap state={stop.state} />

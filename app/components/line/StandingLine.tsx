@@ -17,14 +17,14 @@ export function StandingLine(props: LineProps & { label: string }) {
       aria-label={props.label}
       style={{ maxWidth: round((width / 390) * 520), minWidth: tooWide ? round(width * 0.85) : undefined }}
     >
-      <g aria-hidden="true">
+      <g>
         <Pipework drawn={pipework} />
         <path className="pipe-blank" d={gates.map((g) => (g.blank ? `M${round(g.x - 9)} ${round(g.y - 31)}h18` : "")).join("")} />
       </g>
       {gates.map((drawn) => (
         <StandingGate key={drawn.gate.id} drawn={drawn} textX={textX} width={width} />
       ))}
-      <RunPipe ladder={ladder} x={x} width={width} blade={blade} roomy />
+      <RunPipe ladder={ladder} x={x} width={width} blade={blade} textX={textX} />
     </svg>
   );
 }

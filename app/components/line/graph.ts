@@ -24,8 +24,9 @@ export interface GateGraph {
  */
 export function reduceGates(gates: GateEdges[]): GateGraph {
   const number = new Map<string, number>();
-  gates.forEach((gate, i) => number.set(gate.key, i));
-  gates.forEach((gate, i) => number.set(gate.id, i));
+  for (const [i, gate] of gates.entries()) number.set(gate.key, i);
+  // an id wins over another gate's key
+  for (const [i, gate] of gates.entries()) number.set(gate.id, i);
   const direct = gates.map((gate, i) => {
     const found = [...gate.needs, ...gate.after].map((name) => number.get(name)).filter((p): p is number => p !== undefined && p !== i);
     return [...new Set(found)].sort((a, b) => a - b);

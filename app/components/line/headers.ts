@@ -44,23 +44,30 @@ export function findHeaders(graph: GateGraph, columns: Columns, lane: readonly n
 
 const TOUCHES_FOREIGN_END = 999;
 const CROSSES = 9;
-/** All orders are tried up to this many headers in a gap (720 orders); beyond it template order stands. */
+/** All orders are tried up to this many headers in a gap (720 orders); beyond it single moves have to do. */
 const MOST_PERMUTED = 6;
 
 /** Gives each header its track: the order in a gap that crosses least and never touches the end of a foreign pipe. */
-export function orderTracks(graph: GateGraph, columns: Columns, lane: readonly number[], heir: readonly (number | undefined)[], headers: Header[]): void {
+export function orderTracks(
+  graph: GateGraph,
+  columns: Columns,
+  lane: readonly number[],
+  heir: readonly (number | undefined)[],
+  headers: Header[],
+): void {
   for (let gap = 1; gap < columns.count; gap++) {
     const here = headers.filter((h) => h.gap === gap);
     let best = here;
     let least = Number.POSITIVE_INFINITY;
-    if (here.length <= MOST_PERMUTED)
-      permutations([...here], (order) => {
-        const cost = costOfOrder(order, gap);
-        if (cost < least - 1e-9) {
-          least = cost;
-          best = [...order];
-        }
-      });
+    const consider = (order: Header[]) => {
+      const cost = costOfOrder(order, gap);
+      if (cost >= least - 1e-9) return false;
+      least = cost;
+      best = [...order];
+      return true;
+    };
+    if (here.length <= MOST_PERMUTED) permutations([...here], consider);
+    else singleMoves(here, consider);
     best.forEach((header, track) => {
       header.track = track;
     });
@@ -100,6 +107,25 @@ function permutations<T>(list: T[], use: (order: T[]) => void, fixed = 0): void 
     swap(list, fixed, j);
     permutations(list, use, fixed + 1);
     swap(list, fixed, j);
+  }
+}
+
+/** Moves one element at a time for as long as `better` takes the new order. */
+function singleMoves<T>(start: T[], better: (order: T[]) => boolean): void {
+  let order = start;
+  better(order);
+  for (let moving = true; moving; ) {
+    moving = false;
+    for (let i = 0; i < order.length; i++)
+      for (let j = 0; j < order.length; j++) {
+        if (i === j) continue;
+        const moved = [...order];
+        moved.splice(j, 0, ...moved.splice(i, 1));
+        if (better(moved)) {
+          order = moved;
+          moving = true;
+        }
+      }
   }
 }
 

@@ -4,9 +4,9 @@
  */
 import { findFlow } from "#app/components/line/flow";
 import { at } from "#app/components/line/graph";
-import { ladderPipe, type LadderSizes, type PlacedItem, placeLadder } from "#app/components/line/ladderPipe";
+import { type LadderSizes, ladderPipe, type PlacedItem, placeLadder } from "#app/components/line/ladderPipe";
 import { lineLayout } from "#app/components/line/layout";
-import { NAME_PX, NOTE_PX, clip, textWidth, wrap } from "#app/components/line/measure";
+import { clip, NAME_PX, NOTE_PX, textWidth, wrap } from "#app/components/line/measure";
 import { collectorPipes, type Frame, gatePipes } from "#app/components/line/pipes";
 import { drawPipework, type Pipework } from "#app/components/line/pipework";
 import { runLadder } from "#app/components/line/runLadder";
@@ -42,10 +42,12 @@ export const BALLOON_ROOM = 24;
 const FIRST = 28;
 const PER_HEADER = 22;
 const SECOND_LINE = 18;
-/** Heading and link to the list stand at the top left; a first column that begins there moves down. */
-const HEAD_ROOM = 74;
+/** Heading and link to the list stand at the top left; a first column that would begin there moves down. */
+const BELOW_HEAD = 120;
+/** The note's text may run on to just before the next header's wall. */
+const NOTE_OVERHANG = 8;
 
-const SIZES: LadderSizes = { walkRound: 66, run: 42, service: 44, release: 42, half: HALF, smallHalf: 9 };
+const SIZES: LadderSizes = { walkRound: 74, run: 42, service: 44, release: 42, half: HALF, smallHalf: 9 };
 
 export function drawLying({ gates, walkRound, runs, release, wall = false }: LineProps): LyingDrawing {
   const layout = lineLayout(gates);
@@ -56,13 +58,15 @@ export function drawLying({ gates, walkRound, runs, release, wall = false }: Lin
   const width = columns.end + 29 + ladderWidth;
 
   const laneY: number[] = [];
-  let y = 46 + (layout.column.some((c, i) => c === 0 && at(layout.lane, i) < 2 && layout.lanes < 5) ? HEAD_ROOM : 0);
+  let y = 46;
   for (let lane = 0; lane < layout.lanes; lane++) {
     const lines = Math.max(1, ...gates.map((_, i) => (layout.lane[i] === lane ? at(columns.names, i).length : 1)));
     y += (lines - 1) * SECOND_LINE;
     laneY.push(y);
     y += lanePitch;
   }
+  const highest = Math.min(...gates.map((_, i) => (layout.column[i] === 0 ? at(laneY, at(layout.lane, i)) : BELOW_HEAD)));
+  const down = Math.max(0, BELOW_HEAD - highest);
 
   const collectorX = at(columns.headerAt, layout.columns);
   const x = collectorX + 40;
@@ -71,7 +75,7 @@ export function drawLying({ gates, walkRound, runs, release, wall = false }: Lin
     standing: false,
     main: (gate) => at(columns.x, at(layout.column, gate)),
     track: (gap, track) => at(columns.headerAt, gap) + track * PER_HEADER,
-    across: (lane) => at(laneY, lane),
+    across: (lane) => at(laneY, lane) + down,
     half: HALF,
     collector: collectorX,
     inlet: 10,
@@ -88,7 +92,7 @@ export function drawLying({ gates, walkRound, runs, release, wall = false }: Lin
   ]);
   return {
     width,
-    height: Math.max(at(laneY, laneY.length - 1), at(ladder, ladder.length - 1).y) + 34,
+    height: Math.max(at(laneY, laneY.length - 1) + down, at(ladder, ladder.length - 1).y) + 34,
     pipework,
     x,
     ladder,
@@ -97,7 +101,7 @@ export function drawLying({ gates, walkRound, runs, release, wall = false }: Lin
       x: frame.main(i),
       y: frame.across(at(layout.lane, i)),
       name: at(columns.names, i),
-      note: clip(gate.note, NOTE_PX, at(columns.room, at(layout.column, i)) - (gate.balloon ? BALLOON_ROOM : 0)),
+      note: clip(gate.note, NOTE_PX, at(columns.room, at(layout.column, i)) + NOTE_OVERHANG - (gate.balloon ? BALLOON_ROOM : 0)),
       fed: at(flow.fed, i),
       blank: at(layout.feeds, i).length === 0 && i !== layout.root,
     })),
@@ -128,7 +132,10 @@ function fitColumns(gates: LineGate[], column: number[], count: number, tracks: 
   for (const form of forms) {
     names = gates.map(form);
     widths = Array.from({ length: count }, (_, c) =>
-      Math.max(NOTE_ROOM, ...gates.map((_, i) => (column[i] === c ? Math.max(...at(names, i).map((line) => textWidth(line, NAME_PX))) : 0))),
+      Math.max(
+        NOTE_ROOM,
+        ...gates.map((_, i) => (column[i] === c ? Math.max(...at(names, i).map((line) => textWidth(line, NAME_PX))) : 0)),
+      ),
     );
     total = FIRST + widths.reduce((sum, w, c) => sum + LABEL_AT + w + 12 + gapAfter(c) + (c < count - 1 ? 29 : 0), 0);
     if (total <= room) break;

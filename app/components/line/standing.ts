@@ -4,10 +4,10 @@
  */
 import { findFlow } from "#app/components/line/flow";
 import { at } from "#app/components/line/graph";
-import { ladderPipe, type LadderSizes, type PlacedItem, placeLadder } from "#app/components/line/ladderPipe";
+import { type LadderSizes, ladderPipe, type PlacedItem, placeLadder } from "#app/components/line/ladderPipe";
 import { lineLayout } from "#app/components/line/layout";
 import { BALLOON_ROOM, type DrawnGate } from "#app/components/line/lying";
-import { NAME_PX, NOTE_PX, clip, textWidth, wrap } from "#app/components/line/measure";
+import { clip, NAME_PX, NOTE_PX, textWidth, wrap } from "#app/components/line/measure";
 import { collectorPipes, type Frame, gatePipes } from "#app/components/line/pipes";
 import { drawPipework, type Pipework } from "#app/components/line/pipework";
 import { runLadder } from "#app/components/line/runLadder";
@@ -49,7 +49,9 @@ export function drawStanding({ gates, walkRound, runs, release }: LineProps): St
   const laneX = (lane: number) => FIRST_LANE + lane * pitch;
   const textX = laneX(layout.lanes - 1) + 26;
 
-  const rows = gates.map((_, i) => i).sort((a, b) => at(layout.column, a) - at(layout.column, b) || at(layout.lane, a) - at(layout.lane, b));
+  const rows = gates
+    .map((_, i) => i)
+    .sort((a, b) => at(layout.column, a) - at(layout.column, b) || at(layout.lane, a) - at(layout.lane, b));
   const names = gates.map((gate) => wrap(gate.name, NAME_PX, width - textX - 12, MOST_LINES));
   const rowY: number[] = [];
   const headerAt: number[] = [0];

@@ -19,7 +19,10 @@ export function Airframe({ gear, pusher }: AirframeProps) {
     <>
       <circle className="plan-arc" cy={hub} r="62" />
       <path className="airframe" d={pusher ? PUSHER : TRACTOR} />
-      <path className="airframe-canopy" d={pusher ? "M-12-44C-10-58 10-58 12-44L14-4C8 2-8 2-14-4Z" : "M-14-30C-12-44 12-44 14-30L16 6C8 12-8 12-16 6Z"} />
+      <path
+        className="airframe-canopy"
+        d={pusher ? "M-12-44C-10-58 10-58 12-44L14-4C8 2-8 2-14-4Z" : "M-14-30C-12-44 12-44 14-30L16 6C8 12-8 12-16 6Z"}
+      />
       <path className="airframe-wheel" d={`M-46 ${pusher ? 34 : 2}v14M46 ${pusher ? 34 : 2}v14M0 ${third}v9`} />
       <g className="airframe-propeller" transform={`translate(0 ${hub}) rotate(74)`}>
         <path d={BLADE} />

@@ -38,7 +38,8 @@ export function ClearanceBars({ limits, unit = "rpm", caption = `Limits in ${uni
           <tr key={limit.name + limit.source} className={limit.binds ? "binds" : undefined}>
             <th scope="row">
               {limit.name}
-              {limit.binds && <span className="sr-only"> (binds)</span>} <span className="clearance-source">{limit.source}</span>
+              {limit.binds && " "}
+              {limit.binds && <span className="sr-only">(binds)</span>} <span className="clearance-source">{limit.source}</span>
             </th>
             <td className="clearance-bar">
               <i style={{ width: `${((limit.rpm / top) * 100).toFixed(2)}%` }} />

@@ -35,7 +35,13 @@ export interface FittingProps {
 export function Fitting(props: FittingProps) {
   const { children, note, size = "normal", variant = size === "act" ? "filled" : "outline", reason, busy = false, centred = false } = props;
   const barred = Boolean(reason) || busy;
-  const look = cx("fitting", `fitting-${size}`, barred ? "fitting-barred" : `fitting-${variant}`, centred && "fitting-centred", props.className);
+  const look = cx(
+    "fitting",
+    `fitting-${size}`,
+    barred ? "fitting-barred" : `fitting-${variant}`,
+    centred && "fitting-centred",
+    props.className,
+  );
   const second = reason ?? note;
   const body = (
     <>

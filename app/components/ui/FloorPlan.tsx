@@ -54,16 +54,16 @@ export function FloorPlan({ stations, gear, pusher = false, wind, line = "line f
       <g transform="translate(286 196)">
         <Airframe gear={gear} pusher={pusher} />
       </g>
-      {placeStations(stations).map(({ station, x, y, key }) => (
+      {placeStations(stations, pusher).map(({ station, x, y, key }) => (
         <g key={key} className={`station station-${station.answer}`} transform={`translate(${x} ${y})`}>
           {station.answer === "none" && <circle className="station-ring" r="25" />}
           <circle r="19" />
-          <text textAnchor="middle" y="6.5">
+          {station.answer === "no-go" && <path className="spade" style={{ strokeWidth: 5 }} d="M-19 19 19-19" />}
+          <text className="station-letter" textAnchor="middle" y="6.5">
             {station.letter}
           </text>
-          {station.answer === "no-go" && <path className="spade" style={{ strokeWidth: 5 }} d="M-17 17 17-17" />}
           {(station.you || station.answer === "no-go") && (
-            <text className="station-word" textAnchor="middle" y="40">
+            <text className="station-word" textAnchor={x > 286 ? "end" : "start"} x={x > 286 ? -26 : 26} y="6">
               {station.you ? "you" : "no-go"}
             </text>
           )}

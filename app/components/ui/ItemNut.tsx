@@ -14,9 +14,16 @@ const HEX = "M-20 0 -10-17.3H10L20 0 10 17.3H-10Z";
 
 /** A nut seen from above with witness paint across nut and plate: the line straight, the proof stands; broken, it has lapsed. */
 export function ItemNut({ state, size = 64, spoken = false, className }: ItemNutProps) {
-  const name = spoken ? { role: "img", "aria-label": NUT_WORD[state] } : { "aria-hidden": true };
   return (
-    <svg className={cx(`flex-none nut-${state}`, className)} width={size} height={size} viewBox="-32 -32 64 64" {...name}>
+    <svg
+      className={cx(`flex-none nut-${state}`, className)}
+      width={size}
+      height={size}
+      viewBox="-32 -32 64 64"
+      role={spoken ? "img" : undefined}
+      aria-label={spoken ? NUT_WORD[state] : undefined}
+      aria-hidden={!spoken}
+    >
       {state === "lapsed" ? (
         <>
           <g transform="rotate(24)">

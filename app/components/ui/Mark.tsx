@@ -16,9 +16,16 @@ export function Mark({ size = 32, title, className = "" }: MarkProps) {
   const blade = small ? bladePath(33, 8.4) : bladePath(34.5, 7.6);
   const place = small ? "translate(-.2 24) rotate(63)" : "translate(.6 25) rotate(62)";
   const strokes = (small ? [5, 11, 17, 23] : [6.2, 12.2, 18.2, 24.2]).map((x) => (small ? `M${x} 4.5V27.5` : `M${x} 5V27`)).join("");
-  const name = title ? { role: "img", "aria-label": title } : { "aria-hidden": true };
   return (
-    <svg className={`mark flex-none ${className}`} width={size} height={size} viewBox="0 0 32 32" {...name}>
+    <svg
+      className={`mark flex-none ${className}`}
+      width={size}
+      height={size}
+      viewBox="0 0 32 32"
+      role={title ? "img" : undefined}
+      aria-label={title}
+      aria-hidden={!title}
+    >
       <mask id={mask}>
         <rect width="32" height="32" fill="white" />
         <path d={blade} transform={place} fill="black" stroke="black" strokeWidth={small ? 2.2 : 2.4} />

@@ -80,7 +80,7 @@ function BlankedPipe() {
       viewBox="0 0 900 190"
       aria-hidden="true"
     >
-      <rect x="-10" y="75" width="640" height="42" className="fill-bore stroke-pipe" strokeWidth="2" />
+      <rect x="-10" y="75" width="630" height="42" className="fill-bore stroke-pipe" strokeWidth="2" />
       <rect x="-10" y="77" width="310" height="38" className="fill-flow" />
       <path d="M300 82V110" className="stroke-primer-ink" strokeWidth="7" />
       <path d="M620 52V140" className="stroke-pipe" strokeWidth="18" />

@@ -23,6 +23,7 @@ interface StripProps {
   navLabel: string;
   links: StripLink[];
   person?: string;
+  /** What the person is here: "builder", "lead today". */
   role?: string;
   /** "saved 10:42 CET", "as of 14:10 CET". */
   saved?: ReactNode;
@@ -38,7 +39,13 @@ export function Strip(props: StripProps) {
     <header className="strip">
       <Anchor className="strip-home" href={homeHref}>
         <Mark size={32} title="Bladecount" />
-        {registration ? <span className="strip-registration">{registration}</span> : <span className="strip-wordmark" aria-hidden="true">Bladecount</span>}{" "}
+        {registration ? (
+          <span className="strip-registration">{registration}</span>
+        ) : (
+          <span className="strip-wordmark" aria-hidden="true">
+            Bladecount
+          </span>
+        )}{" "}
         {ship && <span className="strip-ship">{ship}</span>}
       </Anchor>
       <nav aria-label={navLabel}>

@@ -38,9 +38,12 @@ export function TitlePipe({ title, state, fill = 1, valve, part, held = false, a
         <span className="title-pipe-name">{title}</span> <span className="title-pipe-state">{state}</span>
       </Heading>
       <div className="title-pipe-bar" aria-hidden="true">
-        <i style={{ width: sign ? (passes ? "100%" : undefined) : `${(share * 100).toFixed(1)}%` }} className={sign && !passes ? "to-valve" : undefined} />
+        <i
+          style={{ width: sign ? (passes ? "100%" : undefined) : `${(share * 100).toFixed(1)}%` }}
+          className={sign && !passes ? "to-valve" : undefined}
+        />
         {sign && (
-          <svg viewBox="-48 -62 96 124">
+          <svg viewBox="-48 -62 96 124" aria-hidden="true">
             {held ? <Spade length={88} width={15} /> : valve && <Valve state={valve} part={part} scale={1.9} lever={31} fed />}
           </svg>
         )}

@@ -21,7 +21,11 @@ const STEM = "M-6.5 0 -3.25-5.6H3.25L6.5 0 3.25 5.6H-3.25Z";
 export function Valve({ state, part = 0, fed = false, scale = 1, standing = false, lever = 44 }: ValveProps) {
   const turn = standing ? " rotate(90) scale(1 -1)" : "";
   return (
-    <g className={`valve valve-${state}`} transform={`scale(${scale})${turn}`} data-lever={state === "lapsed" ? "broken" : LEVER_ANGLE[state]}>
+    <g
+      className={`valve valve-${state}`}
+      transform={`scale(${scale})${turn}`}
+      data-lever={state === "lapsed" ? "broken" : LEVER_ANGLE[state]}
+    >
       {state === "ready" && <circle className="valve-ring" r="24" />}
       <path className="valve-body" d={BODY} />
       {fed && state !== "signed" && <path className="valve-fed" d={FED_HALF} />}

@@ -17,8 +17,12 @@ export function bandScale(min: number | null, max: number | null, value: number 
   const width = high - low || Math.abs(high) || 1;
   const step = roundStep((width * 1.7) / 5);
   // an open end gets more room, so that it does not look like a limit
-  const from = Math.floor((low - width * (min === null ? 0.5 : 0.2)) / step) * step;
-  const to = Math.ceil((high + width * (max === null ? 0.5 : 0.2)) / step) * step;
+  let from = Math.floor((low - width * (min === null ? 0.5 : 0.2)) / step) * step;
+  let to = Math.ceil((high + width * (max === null ? 0.5 : 0.2)) / step) * step;
+  if (to - from < 2 * step) {
+    from -= step;
+    to += step;
+  }
   return { from: low >= 0 ? Math.max(0, from) : from, to: high <= 0 ? Math.min(0, to) || to : to, step };
 }
 

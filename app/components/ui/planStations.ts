@@ -13,10 +13,10 @@ const PLACES: Record<PlanPosition, [number, number][]> = {
     [46, 204],
   ],
   fireguard: [
-    [526, 152],
-    [526, 204],
-    [526, 256],
+    [526, 142],
+    [526, 242],
     [46, 256],
+    [526, 292],
   ],
   areaguard: [
     [130, 384],
@@ -28,19 +28,32 @@ const PLACES: Record<PlanPosition, [number, number][]> = {
     [470, 266],
   ],
   recorder: [
-    [216, 414],
-    [160, 414],
+    [216, 412],
+    [160, 412],
   ],
   swinger: [[218, 44]],
 };
 
+/** Behind a pusher's wing the propeller turns: these stand ahead of it. */
+const PUSHER_PLACES: Partial<typeof PLACES> = {
+  fireguard: [
+    [526, 142],
+    [526, 204],
+    [46, 256],
+  ],
+  observer: [
+    [128, 182],
+    [444, 182],
+  ],
+};
+
 /** Each station with its place; past the known places of a position the next ones stand beside the last. */
-export function placeStations<T extends { position: PlanPosition; letter: string }>(stations: T[]) {
+export function placeStations<T extends { position: PlanPosition; letter: string }>(stations: T[], pusher: boolean) {
   const taken: Partial<Record<PlanPosition, number>> = {};
   return stations.map((station) => {
     const n = taken[station.position] ?? 0;
     taken[station.position] = n + 1;
-    const places = PLACES[station.position];
+    const places = (pusher && PUSHER_PLACES[station.position]) || PLACES[station.position];
     const [x, y] = places[Math.min(n, places.length - 1)] ?? [286, 414];
     return { station, x: x + Math.max(0, n - places.length + 1) * 44, y, key: `${station.position}-${n}` };
   });

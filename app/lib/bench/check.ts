@@ -52,9 +52,20 @@ export function missing(label: string): string {
   return `${label} is missing: enter it.`;
 }
 
+/** No rig, engine or pump system has more; it bounds the work that a sent form can cause. */
+export const MOST_ROWS = 60;
+
+export const tooMany = (what: string): string => `More than ${MOST_ROWS} ${what} cannot be meant: leave out what was entered by mistake.`;
+
 /** Inputs as the schema's type, or every error at its field. */
 export function check<T>(schema: z.ZodType<T>, inputs: unknown): { ok: true; value: T } | { ok: false; errors: FieldError[] } {
   const parsed = schema.safeParse(inputs);
   if (parsed.success) return { ok: true, value: parsed.data };
-  return { ok: false, errors: parsed.error.issues.map((issue) => ({ field: issue.path.join("."), sentence: issue.message })) };
+  return { ok: false, errors: parsed.error.issues.map((issue) => ({ field: issue.path.join("."), sentence: sentenceOf(issue) })) };
+}
+
+/** Every field has sentences of its own; what is left is a row, or the whole, that is no object at all. */
+function sentenceOf(issue: z.core.$ZodIssue): string {
+  const shapeless = issue.code === "invalid_type" && issue.expected === "object";
+  return shapeless ? "This part of the sheet cannot be read: enter it again." : issue.message;
 }

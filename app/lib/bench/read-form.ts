@@ -2,7 +2,7 @@
  * Reading a sheet's form back: plain repeated field names, one entry per row, into fields and rows of SI values.
  * What is not asked (`when`) is not read; an empty optional field is left out; an empty row is skipped.
  */
-import { type FieldError, missing, notChosen } from "#app/lib/bench/check";
+import { amount, check, type FieldError, missing, notChosen } from "#app/lib/bench/check";
 import type { AmountField, FormField, FormGroup, SheetForm, UnitPair } from "#app/lib/bench/form";
 import type { Quantity } from "#app/lib/units/quantity";
 
@@ -14,7 +14,9 @@ type TextOf = (field: FormField) => string;
 
 function readAmount(field: AmountField, text: string, parse: Parse): Read {
   const entry = field.as ? parse(text, field.quantity, field.as) : parse(text, field.quantity);
-  return entry.ok ? { ok: true, value: entry.si } : entry;
+  if (!entry.ok) return entry;
+  const inside = check(amount(field), entry.si);
+  return inside.ok ? inside : { ok: false, sentence: inside.errors[0]?.sentence ?? missing(field.label) };
 }
 
 function readField(field: FormField, text: string, parse: Parse): Read {

@@ -1,13 +1,15 @@
 /**
  * The form of the restraint sheet: labels, ranges, presets and where each value is filled from.
- * Friction in the help texts is common practice, no source, except tyre on wet grass and wet concrete (tyre and road handbooks).
+ * Friction values in the help texts are common practice, no source, taken at the low end.
  */
-import { ALTITUDE_RANGE } from "#app/lib/bench/atmosphere";
+import { ALTITUDE_RANGE, standardAir } from "#app/lib/bench/atmosphere";
 import { amountField, choiceField, type SheetForm, textField } from "#app/lib/bench/form";
 import { DEMAND_FACTOR } from "#app/lib/bench/restraint";
 import { FIGURE_OF_MERIT } from "#app/lib/bench/thrust";
 import { toSI } from "#app/lib/units/convert";
 
+/** Where aircraft are run up, m. */
+const ALTITUDE = { min: ALTITUDE_RANGE.min, max: 5000 };
 const deg = (n: number) => toSI(n, "deg");
 const rpm = (n: number) => toSI(n, "rpm");
 const FRICTION = [0.05, 1.2] as const;
@@ -42,6 +44,7 @@ export const RESTRAINT_FIELD = {
     },
   ),
   reduction: amountField("reduction", "Reduction ratio", "ratio", [0.5, 6], "Engine speed over propeller speed; 1 for direct drive.", {
+    preset: 1,
     prefill: [{ kind: "value", key: "reductionRatio" }],
   }),
   diameter: amountField("diameter", "Propeller diameter", "length", [0.5, 5], "Tip to tip.", {
@@ -55,13 +58,13 @@ export const RESTRAINT_FIELD = {
     "0.75 is a good propeller standing still; higher asks for more holding. Common practice.",
     { preset: FIGURE_OF_MERIT },
   ),
-  pressureAltitude: amountField(
-    "pressureAltitude",
-    "Pressure altitude",
-    "length",
-    [ALTITUDE_RANGE.min, 5000],
-    "Altimeter set to 1013.25 hPa (29.92 inHg).",
-    { as: { si: "m", us: "ft" } },
+  pressure: amountField(
+    "pressure",
+    "Air pressure at the field",
+    "pressure",
+    [standardAir(ALTITUDE.max).pressure, standardAir(ALTITUDE.min).pressure],
+    "As it is here: the manifold gauge with the engine off. A report's sea-level pressure is higher, so on the safe side.",
+    { as: { si: "hPa", us: "inHg" } },
   ),
   temperature: amountField(
     "temperature",
@@ -158,6 +161,11 @@ export const RESTRAINT_FIELD = {
   ),
 };
 
+/** A saved sheet keeps the pressure as the altitude that it stands for in the standard atmosphere, m. */
+export const PRESSURE_ALTITUDE = amountField("pressureAltitude", "Pressure altitude", "length", [ALTITUDE.min, ALTITUDE.max], "", {
+  as: { si: "m", us: "ft" },
+});
+
 const F = RESTRAINT_FIELD;
 export const RESTRAINT_FORM: SheetForm = {
   title: "Restraint",
@@ -166,9 +174,26 @@ export const RESTRAINT_FORM: SheetForm = {
   caution:
     "An estimate, not a proof load: a strap that parts or an aircraft that breaks loose kills. Walk every line, pull up slowly, stop at the first movement, nobody in line with a tight strap or the propeller. The airframe, strap and anchor makers' limits and the local rules come first.",
   fields: [
-    F.planned, F.power, F.reference, F.reduction, F.diameter, F.merit, F.pressureAltitude, F.temperature, F.factor, F.mass, F.slope,
-    F.wheels, F.wheelFriction, F.wheelMass, F.gear, F.thrustHeight, F.centreArm, F.holdDown, F.tailArm,
-  ], // biome-ignore format: a list of fields
+    F.planned,
+    F.power,
+    F.reference,
+    F.reduction,
+    F.diameter,
+    F.merit,
+    F.pressure,
+    F.temperature,
+    F.factor,
+    F.mass,
+    F.slope,
+    F.wheels,
+    F.wheelFriction,
+    F.wheelMass,
+    F.gear,
+    F.thrustHeight,
+    F.centreArm,
+    F.holdDown,
+    F.tailArm,
+  ],
   groups: [
     {
       name: "straps",

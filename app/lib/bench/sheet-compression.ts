@@ -3,7 +3,7 @@
  * Source: AC 43.13-1B, paragraph 8-14 (80 psi, loss in excess of 25 % is suspect). The engine maker's method and limits come first.
  */
 import { z } from "zod";
-import { amount, check, notChosen, type Outcome, words } from "#app/lib/bench/check";
+import { amount, check, MOST_ROWS, notChosen, type Outcome, tooMany, words } from "#app/lib/bench/check";
 import { atMost } from "#app/lib/bench/compare";
 import { LOSS_LIMIT, loss, TEST_PRESSURE } from "#app/lib/bench/compression";
 import { amountField, choiceField, type SheetForm, textField } from "#app/lib/bench/form";
@@ -88,7 +88,8 @@ const schema = z
         z.object({ name: words(FIELD.name), reading: amount(FIELD.reading), leak: z.enum(leaks, { error: () => notChosen(FIELD.leak) }) }),
         { error: () => noCylinders },
       )
-      .min(1, noCylinders),
+      .min(1, noCylinders)
+      .max(MOST_ROWS, tooMany("cylinders")),
   })
   .superRefine(({ cylinders, count, supply, maxLoss, limitFrom }, at) => {
     if (!atMost(maxLoss, LOSS_LIMIT) && limitFrom === undefined) {

@@ -3,9 +3,8 @@
  * Source: 14 CFR 23.955 before amendment 23-64; attitude and low tank as in AC 90-89A. The maker's figures come first.
  */
 import { z } from "zod";
-import { amount, check, missing, notChosen, type Outcome, words } from "#app/lib/bench/check";
-import { atLeast, atMost } from "#app/lib/bench/compare";
-import { amountField, choiceField, type SheetForm, textField } from "#app/lib/bench/form";
+import { amount, check, MOST_ROWS, missing, notChosen, type Outcome, tooMany, words } from "#app/lib/bench/check";
+import { atLeast } from "#app/lib/bench/compare";
 import {
   agreeing,
   CATCH_SPREAD,
@@ -18,98 +17,8 @@ import {
   spread,
   weighedVolume,
 } from "#app/lib/bench/fuel-flow";
+import { FUEL_FLOW_FIELD as FIELD, FUEL_FLOW_FORM } from "#app/lib/bench/fuel-flow-form";
 import { ceilText, figure, floorText, type SheetDef, type SheetFigure, type SheetResult } from "#app/lib/bench/sheet-result";
-import { toSI } from "#app/lib/units/convert";
-
-const litres = (n: number) => toSI(n, "L");
-const FIELD = {
-  supply: choiceField(
-    "supply",
-    "Fuel reaches the engine by",
-    { gravity: "gravity", pump: "pump" },
-    "Gravity has to give 1.5 times take-off consumption, a pump 1.25 times.",
-    {
-      prefill: [{ kind: "trait" }],
-    },
-  ),
-  takeoffFlow: amountField(
-    "takeoffFlow",
-    "Take-off consumption",
-    "volumeFlow",
-    [toSI(0.5, "L/h"), toSI(1500, "L/h")],
-    "The maker's figure. Left empty, it is computed from rated power.",
-    {
-      optional: true,
-      prefill: [{ kind: "value", key: "takeoffFlow" }],
-    },
-  ),
-  power: amountField("power", "Rated power", "power", [1000, 2e6], "Used where the maker gives no consumption.", {
-    optional: true,
-    prefill: [{ kind: "value", key: "ratedPower" }],
-  }),
-  specific: amountField(
-    "specific",
-    "Fuel per power and time",
-    "specificFuel",
-    [toSI(0.2, "lb/(hp·h)"), toSI(1.2, "lb/(hp·h)")],
-    "At full power: 0.55 lb/(hp·h) or 335 g/(kW·h) unless the maker says otherwise.",
-    {
-      optional: true,
-      preset: toSI(0.55, "lb/(hp·h)"),
-    },
-  ),
-  density: amountField(
-    "density",
-    "Fuel density",
-    "density",
-    [600, 900],
-    "Avgas 6.0 lb/US gal or 0.72 kg/L. Used with rated power and for weighed catches.",
-    { preset: toSI(6, "lb/US gal") },
-  ),
-  measuredAt: choiceField(
-    "measuredAt",
-    "Caught at",
-    { engine: "the engine end of the line", return: "the return, at regulated pressure", inlet: "the engine pump's inlet" },
-    "With the engine off, what comes back is what the pump can deliver.",
-  ),
-  noseUp: amountField(
-    "noseUp",
-    "Nose up during the test",
-    "angle",
-    [toSI(-10, "deg"), toSI(45, "deg")],
-    "5° above the highest climb angle.",
-  ),
-  fuelInTank: amountField(
-    "fuelInTank",
-    "Fuel in the feeding tank",
-    "volume",
-    [0, litres(1000)],
-    "Low tank: what cannot be used and a little more.",
-  ),
-  pump: textField("pump", "Pump or tank", "Each pump alone, under its own name; by gravity the tank.", { preset: "main" }),
-  volume: amountField("volume", "Caught", "volume", [litres(0.05), litres(200)], "Leave empty if it was weighed.", { optional: true }),
-  mass: amountField("mass", "or weighed", "mass", [0.03, 150], "Fuel only, without the can.", { optional: true }),
-  seconds: amountField("seconds", "In", "time", [2, 7200], "From a steady stream; longer catches are better."),
-};
-
-const form: SheetForm = {
-  title: "Fuel flow",
-  formula:
-    "Flow = caught volume / time. It must reach 1.5 (gravity) or 1.25 (pump) times take-off consumption, which is the maker's figure, or rated power × fuel per power / density. The newest catches that agree within 5 % count, two at least.",
-  caution:
-    "Fuel in the open: ignition dead, aircraft and can bonded, extinguisher manned, nothing that sparks, wipe and air before any switch. The engine and kit makers' procedure and the local rules come first.",
-  fields: [FIELD.supply, FIELD.takeoffFlow, FIELD.power, FIELD.specific, FIELD.density, FIELD.measuredAt, FIELD.noseUp, FIELD.fuelInTank],
-  groups: [
-    {
-      name: "catches",
-      label: "Catches, in the order made",
-      row: "catch",
-      rows: 2,
-      rowsFrom: null,
-      fields: [FIELD.pump, FIELD.volume, FIELD.mass, FIELD.seconds],
-    },
-  ],
-};
 
 const caught = z
   .object({ volume: amount(FIELD.volume).optional(), mass: amount(FIELD.mass).optional(), seconds: amount(FIELD.seconds) })
@@ -139,11 +48,15 @@ const schema = z
       .array(
         z.object({
           name: words(FIELD.pump),
-          catches: z.array(caught, { error: () => "Enter the catches of this pump." }).min(1, "Enter at least one catch of this pump."),
+          catches: z
+            .array(caught, { error: () => "Enter the catches of this pump." })
+            .min(1, "Enter at least one catch of this pump.")
+            .max(MOST_ROWS, tooMany("catches")),
         }),
         { error: () => noPumps },
       )
-      .min(1, noPumps),
+      .min(1, noPumps)
+      .max(MOST_ROWS, tooMany("pumps")),
   })
   .superRefine((inputs, at) => {
     if (inputs.takeoffFlow === undefined && inputs.power === undefined) {
@@ -234,7 +147,7 @@ function compute(inputs: unknown): Outcome<SheetResult> {
         figure("Nose up during the test", "angle", value.noseUp),
         figure("Fuel in the feeding tank", "volume", value.fuelInTank),
       ],
-      caution: form.caution,
+      caution: FUEL_FLOW_FORM.caution,
     },
   };
 }
@@ -254,6 +167,7 @@ function fromForm(flat: Record<string, unknown>) {
   const locate = (path: string) => {
     const [, pump, part, row, field] = path.split(".");
     if (!path.startsWith("pumps")) return path;
+    if (pump === undefined) return "catches";
     const rows = pumps[Number(pump)]?.rows ?? [];
     return part === "catches" && row !== undefined
       ? `catches.${rows[Number(row)] ?? 0}.${field ?? "volume"}`
@@ -262,4 +176,4 @@ function fromForm(flat: Record<string, unknown>) {
   return { inputs: { ...rest, pumps: pumps.map(({ name, catches }) => ({ name, catches })) }, locate };
 }
 
-export const FUEL_FLOW: SheetDef = { version: "1", takes: ["takeoffFlow", "ratedPower"], form, compute, fromForm };
+export const FUEL_FLOW: SheetDef = { version: "1", takes: ["takeoffFlow", "ratedPower"], form: FUEL_FLOW_FORM, compute, fromForm };

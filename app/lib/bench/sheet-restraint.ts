@@ -3,11 +3,11 @@
  * All rotation is crankshaft speed; the propeller's is that over the reduction ratio. Formulas and sources: restraint.ts, thrust.ts.
  */
 import { z } from "zod";
-import { airDensity, standardAir } from "#app/lib/bench/atmosphere";
-import { amount, check, notChosen, type Outcome, words } from "#app/lib/bench/check";
+import { airDensity, pressureAltitude, standardAir } from "#app/lib/bench/atmosphere";
+import { amount, check, MOST_ROWS, notChosen, type Outcome, tooMany, words } from "#app/lib/bench/check";
 import { atMost } from "#app/lib/bench/compare";
 import { capRotation, type Line, lines, rightingMoment, type Strap, slopePull, wheelHolding } from "#app/lib/bench/restraint";
-import { RESTRAINT_FIELD as F, RESTRAINT_FORM } from "#app/lib/bench/restraint-form";
+import { RESTRAINT_FIELD as F, PRESSURE_ALTITUDE, RESTRAINT_FORM } from "#app/lib/bench/restraint-form";
 import { figure, type SheetDef, type SheetFigure, type SheetResult } from "#app/lib/bench/sheet-result";
 import { inducedVelocity, powerAt, staticThrust, thrustAt } from "#app/lib/bench/thrust";
 import { fromSI, toSI } from "#app/lib/units/convert";
@@ -40,7 +40,7 @@ const common = z.object({
   reduction: amount(F.reduction),
   diameter: amount(F.diameter),
   merit: amount(F.merit),
-  pressureAltitude: amount(F.pressureAltitude),
+  pressureAltitude: amount(PRESSURE_ALTITUDE),
   temperature: amount(F.temperature),
   factor: amount(F.factor),
   mass: amount(F.mass),
@@ -48,6 +48,7 @@ const common = z.object({
   straps: z
     .array(strapSchema, { error: () => noStraps })
     .min(1, noStraps)
+    .max(MOST_ROWS, tooMany("straps"))
     .superRefine((straps, at) => {
       straps.forEach((strap, index) => {
         const sentence = pairError(straps, strap);
@@ -154,7 +155,7 @@ function compute(inputs: unknown): Outcome<SheetResult> {
         figure("Air density", "density", density),
         figure("Thrust at the reference speed", "force", thrustReference),
         figure("Thrust at the planned rpm", "force", thrust),
-        figure("Slope", "force", steady),
+        figure("Pull of the slope", "force", steady),
         figure("Demand at the planned rpm", "force", demand),
         ...held.map((line) => figure(`${line.name}: may take (limit: ${ENDED_BY[line.by]})`, "force", line.force)),
         ...held.map((line) => figure(`${line.name}: holds along the aircraft`, "force", line.axial)),
@@ -182,9 +183,16 @@ function sentenceFor(cap: number, planned: number, byNose: boolean): string {
   return `Holds up to ${capText(cap)} only (limit: ${limit}), planned ${plan}: ${better}, or plan a lower run.`;
 }
 
+/** The form asks for the pressure, which a gauge shows; reading it has kept it inside the range of the atmosphere. */
+function fromForm({ pressure, ...rest }: Record<string, unknown>) {
+  const inputs = typeof pressure === "number" ? { ...rest, pressureAltitude: pressureAltitude(pressure) } : rest;
+  return { inputs, locate: (path: string) => (path === PRESSURE_ALTITUDE.name ? F.pressure.name : path) };
+}
+
 export const RESTRAINT: SheetDef = {
   version: "1",
   takes: ["ratedPower", "ratedRpm", "staticRpmMin", "propDiameter", "reductionRatio", "mass"],
   form: RESTRAINT_FORM,
   compute,
+  fromForm,
 };

@@ -1,6 +1,6 @@
 /**
  * Torque wrenches with an adapter on the end, and the drag of self-locking nuts.
- * Source: AC 43.13-1B, paragraph 7-40 and figure 7-2; torques in N·m, lengths in m, angles in rad. The maker's value comes first.
+ * Source: AC 43.13-1B, chapter 7; torques in N·m, lengths in m, angles in rad. The maker's value comes first.
  */
 import type { Outcome } from "#app/lib/bench/check";
 import type { Band } from "#app/lib/units/quantity";

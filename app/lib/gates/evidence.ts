@@ -2,11 +2,13 @@
  * Rule 1 of a proof: does its evidence meet the item's present criterion?
  * Sheets are computed again, never trusted; nothing meets a criterion without its number.
  */
-import { computeSheet, SHEET_VERSIONS, valuesTaken } from "#app/lib/bench/sheet";
+import { atLeast, atMost } from "#app/lib/bench/compare";
+import { burstErrors, crankSummary } from "#app/lib/bench/crank";
+import { computeSheet, SHEET_VERSIONS, traitInputs, valuesTaken } from "#app/lib/bench/sheet";
 import { currentProof, type Facts } from "#app/lib/gates/facts";
 import type { BlockerCode } from "#app/lib/gates/result";
 import type { Evidence, Item, Proof } from "#app/lib/gates/snapshot";
-import type { Criterion, Part, SheetKey } from "#app/lib/template/types";
+import type { Criterion, Part, SheetKey, ValueKey } from "#app/lib/template/types";
 import type { Band } from "#app/lib/units/quantity";
 
 export type Met = { ok: true } | { ok: false; code: BlockerCode; sentence: string };
@@ -14,16 +16,18 @@ export type Met = { ok: true } | { ok: false; code: BlockerCode; sentence: strin
 const no = (code: BlockerCode, sentence: string): Met => ({ ok: false, code, sentence });
 const YES: Met = { ok: true };
 
-/** The band in force: one end may come from a value of the install. Null = a number is missing. SI, inclusive. */
-export function bandInForce(criterion: Criterion, limitOf: (key: NonNullable<Criterion["limit"]>["key"]) => number | null): Band | null {
-  const { limit } = criterion;
-  const band = criterion.band ?? { min: null, max: null };
-  if (!limit) return band.min === null && band.max === null ? null : band;
-  const value = limitOf(limit.key);
-  if (value === null) return null;
-  // Both may be given: the install's limit and a floor of the item's own. The narrower one counts.
-  if (limit.end === "min") return { min: band.min === null ? value : Math.max(band.min, value), max: band.max };
-  return { min: band.min, max: band.max === null ? value : Math.min(band.max, value) };
+/** The band in force: its ends may come from values of the install. Null = a number is missing. SI, inclusive. */
+export function bandInForce(criterion: Criterion, valueOfInstall: (key: ValueKey) => number | null): Band | null {
+  const band: Band = { min: criterion.band?.min ?? null, max: criterion.band?.max ?? null };
+  for (const limit of [criterion.limit, criterion.otherLimit]) {
+    if (!limit) continue;
+    const value = valueOfInstall(limit.key);
+    if (value === null) return null;
+    // Where the item has a number of its own at that end, the narrower of the two counts.
+    if (limit.end === "min") band.min = band.min === null ? value : Math.max(band.min, value);
+    else band.max = band.max === null ? value : Math.min(band.max, value);
+  }
+  return band.min === null && band.max === null ? null : band;
 }
 
 /** What must be entered before anyone can prove this part: null when nothing is missing. */
@@ -86,7 +90,8 @@ function partMet(facts: Facts, item: Item, part: Part, given: Evidence | null, p
 function inBand(facts: Facts, criterion: Criterion, places: number, values: number[], label: string): Met {
   const band = bandInForce(criterion, (key) => facts.values.get(key)?.value ?? null) as Band;
   if (values.length !== places || !values.every(Number.isFinite)) return no("evidence-missing", `A value is missing: ${label}.`);
-  const out = values.filter((v) => (band.min !== null && v < band.min) || (band.max !== null && v > band.max));
+  // With room for the last binary digit: a limit entered in one unit and a reading in another must meet at the boundary.
+  const out = values.filter((v) => (band.min !== null && !atLeast(v, band.min)) || (band.max !== null && !atMost(v, band.max)));
   return out.length ? no("out-of-band", `${label} is outside its band. Put it right and measure again.`) : YES;
 }
 
@@ -134,20 +139,25 @@ function tallyMet(facts: Facts, item: Item, part: TallyPart, given: TallyEvidenc
 }
 
 function crankMet(giveUpAfter: number, bursts: Extract<Evidence, { kind: "crank" }>["bursts"]): Met {
-  let total = 0;
-  for (const burst of [...bursts].sort((a, b) => a.at - b.at)) {
-    if (burst.pressureAfter !== null) {
-      total += burst.pressureAfter;
-      return total <= giveUpAfter
-        ? YES
-        : no("out-of-band", `Pressure came only after ${Math.round(total)} s of cranking, ${giveUpAfter} s are allowed. Find the cause.`);
-    }
-    total += burst.seconds;
-  }
-  return no(
-    "evidence-missing",
-    bursts.length ? "No oil pressure was seen in any burst. Find the cause before you crank on." : "No burst was recorded.",
-  );
+  const [wrong] = burstErrors(bursts);
+  if (wrong) return no("evidence-missing", wrong);
+  const { pressure, gaveUp } = crankSummary(bursts, giveUpAfter);
+  if (!pressure)
+    return no(
+      "evidence-missing",
+      bursts.length ? "No oil pressure was seen in any burst. Find the cause before you crank on." : "No burst was recorded.",
+    );
+  return gaveUp
+    ? no(
+        "out-of-band",
+        `Pressure came only after ${Math.round(pressure.cranking)} s of cranking; ${giveUpAfter} s are allowed. Find the cause.`,
+      )
+    : YES;
+}
+
+/** A saved sheet computed again, with what the install's traits say put over what was typed. */
+function compute(facts: Facts, given: Extract<Evidence, { kind: "sheet" }>) {
+  return computeSheet(given.sheet, { ...given.inputs, ...traitInputs(given.sheet, facts.snapshot.traits) });
 }
 
 function sheetMet(facts: Facts, key: SheetKey, given: Extract<Evidence, { kind: "sheet" }>): Met {
@@ -162,7 +172,7 @@ function sheetMet(facts: Facts, key: SheetKey, given: Extract<Evidence, { kind: 
         `${value?.label ?? "A value"} of the install has changed since this sheet was saved. Work the sheet again.`,
       );
   }
-  const done = computeSheet(key, given.inputs);
+  const done = compute(facts, given);
   if (!done.ok) return no("sheet-fails", done.errors[0]?.sentence ?? "The sheet cannot be computed from its inputs.");
   return done.result.passes ? YES : no("sheet-fails", done.result.sentence);
 }
@@ -178,7 +188,7 @@ export function restraintCap(facts: Facts, item: Item): number | null | undefine
   let cap: number | null = null;
   for (const n of parts) {
     const given = proof?.evidence[n];
-    const done = given?.kind === "sheet" ? computeSheet("restraint", given.inputs) : null;
+    const done = given?.kind === "sheet" ? compute(facts, given) : null;
     if (!done?.ok || done.result.cap === null) return null;
     cap = cap === null ? done.result.cap : Math.min(cap, done.result.cap);
   }

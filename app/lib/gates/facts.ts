@@ -122,7 +122,7 @@ export function gatherFacts(given: Snapshot, at: Instant): Facts {
   for (const list of itemsOf.values()) for (const item of list) items.set(item.id, item);
 
   const proofsOf = group(snapshot.proofs, (p) => p.item);
-  for (const list of proofsOf.values()) list.sort((a, b) => a.counts - b.counts || a.seq - b.seq);
+  for (const list of proofsOf.values()) if (list.length > 1) list.sort((a, b) => a.counts - b.counts || a.seq - b.seq);
   const signaturesOf = group(snapshot.signatures, (s) => s.gate);
   for (const list of signaturesOf.values()) list.sort((a, b) => a.seq - b.seq);
 

@@ -43,28 +43,29 @@ export function prerequisites(facts: Facts): Map<string, string[]> {
  * Gates in an order in which each comes after what it waits for; what is left over waits in a circle.
  * (The product refuses an edit that closes a circle; data that has one all the same must not hang or stand.)
  */
-export function inOrder(ids: string[], before: (id: string) => string[]): { order: string[]; circle: string[] } {
-  const known = new Set(ids);
-  const waiting = new Map<string, number>();
-  const feeds = new Map<string, string[]>();
-  for (const id of ids) {
-    const list = before(id).filter((x) => known.has(x));
-    waiting.set(id, list.length);
-    for (const x of list) {
-      const targets = feeds.get(x);
-      if (targets) targets.push(id);
-      else feeds.set(x, [id]);
+export function inOrder(ids: string[], before: (id: string) => readonly string[]): { order: string[]; circle: string[] } {
+  const place = new Map<string, number>();
+  for (const id of ids) place.set(id, place.size);
+  const waiting = new Int32Array(ids.length);
+  const feeds: (number[] | undefined)[] = new Array(ids.length);
+  const order: string[] = [];
+  for (let n = 0; n < ids.length; n++) {
+    for (const other of before(ids[n] as string)) {
+      const from = place.get(other);
+      if (from === undefined) continue;
+      waiting[n] = (waiting[n] as number) + 1;
+      const list = feeds[from];
+      if (list) list.push(n);
+      else feeds[from] = [n];
     }
+    if (waiting[n] === 0) order.push(ids[n] as string);
   }
-  const order = ids.filter((id) => waiting.get(id) === 0);
   for (let n = 0; n < order.length; n++)
-    for (const target of feeds.get(order[n] as string) ?? []) {
-      const left = (waiting.get(target) as number) - 1;
-      waiting.set(target, left);
-      if (left === 0) order.push(target);
+    for (const target of feeds[place.get(order[n] as string) as number] ?? []) {
+      waiting[target] = (waiting[target] as number) - 1;
+      if (waiting[target] === 0) order.push(ids[target] as string);
     }
-  const done = new Set(order);
-  return { order, circle: ids.filter((id) => !done.has(id)) };
+  return { order, circle: order.length === ids.length ? [] : ids.filter((_, n) => (waiting[n] as number) > 0) };
 }
 
 /** Newest happening in a gate: any proof (withdrawn or not) and any signature. */

@@ -109,6 +109,7 @@ export const absentGate = (gate: Gate): GateResult => ({
 });
 
 function groundingBlockers(facts: Facts, gate: Gate, hinder: Hindrances): Blocker[] {
+  if (!hinder.grounding.size) return [];
   const systems = new Set((facts.itemsOf.get(gate.id) ?? []).flatMap((i) => i.systems));
   return [...systems]
     .flatMap((s) => hinder.grounding.get(s) ?? [])

@@ -48,8 +48,8 @@ const closedAlready = (e: Evaluation, f: Finding): Verdict | null =>
 export function mayFix(e: Evaluation, a: { finding: string; member: string }): Verdict {
   const f = findingOf(e, a.finding);
   if (!f) return notFound(e, "finding");
-  const no = closedAlready(e, f) ?? needsRole(e, a.member, ["builder"], "mark a finding fixed");
-  if (no) return no;
+  const cannot = closedAlready(e, f) ?? needsRole(e, a.member, ["builder"], "mark a finding fixed");
+  if (cannot) return cannot;
   return f.fixed
     ? already(e, atFinding(f.id), "Marked fixed already", "An inspector must look and close it, or say that it is not fixed.")
     : OK;
@@ -59,8 +59,8 @@ export function mayFix(e: Evaluation, a: { finding: string; member: string }): V
 export function mayClose(e: Evaluation, a: { finding: string; member: string }): Verdict {
   const f = findingOf(e, a.finding);
   if (!f) return notFound(e, "finding");
-  const no = closedAlready(e, f) ?? needsRole(e, a.member, ["inspector"], "close a finding");
-  if (no) return no;
+  const cannot = closedAlready(e, f) ?? needsRole(e, a.member, ["inspector"], "close a finding");
+  if (cannot) return cannot;
   if (!f.fixed) return order(e, atFinding(f.id), "Not marked fixed", "A builder says first what was done about it.", ["builder"]);
   return f.fixed.by === a.member ? own(e, atFinding(f.id), a.member, "fixed", ["inspector"]) : OK;
 }
@@ -75,8 +75,8 @@ export function mayGrade(
 ): Verdict {
   const f = findingOf(e, a.finding);
   if (!f) return notFound(e, "finding");
-  const no = closedAlready(e, f) ?? needsMember(e, a.member);
-  if (no) return no;
+  const cannot = closedAlready(e, f) ?? needsMember(e, a.member);
+  if (cannot) return cannot;
   return weight(a.severity, a.cap) >= weight(f.severity, f.cap) ? OK : (needsRole(e, a.member, ["inspector"], "lower a finding") ?? OK);
 }
 
@@ -97,8 +97,8 @@ const restoredAlready = (e: Evaluation, l: LooseEnd): Verdict | null =>
 export function mayRestore(e: Evaluation, a: { looseEnd: string; member: string }): Verdict {
   const l = looseEndOf(e, a.looseEnd);
   if (!l) return notFound(e, "loose end");
-  const no = restoredAlready(e, l) ?? needsRole(e, a.member, ["builder", "inspector"], "restore a loose end");
-  if (no) return no;
+  const cannot = restoredAlready(e, l) ?? needsRole(e, a.member, ["builder", "inspector"], "restore a loose end");
+  if (cannot) return cannot;
   return l.restored ? already(e, atLooseEnd(l.id), "Restored already", "A second person must look and confirm.") : OK;
 }
 
@@ -107,8 +107,8 @@ export function mayConfirmRestored(e: Evaluation, a: { looseEnd: string; member:
   const l = looseEndOf(e, a.looseEnd);
   if (!l) return notFound(e, "loose end");
   const roles: [Role, ...Role[]] = ["builder", "inspector", "lead"];
-  const no = restoredAlready(e, l) ?? needsRole(e, a.member, roles, "confirm as the second person");
-  if (no) return no;
+  const cannot = restoredAlready(e, l) ?? needsRole(e, a.member, roles, "confirm as the second person");
+  if (cannot) return cannot;
   if (!l.restored)
     return order(e, atLooseEnd(l.id), "Not restored yet", "Somebody restores it first, then a second person looks.", [
       "builder",
@@ -123,8 +123,8 @@ export function mayAcceptLooseEnd(e: Evaluation, a: { looseEnd: string; member: 
   if (!l) return notFound(e, "loose end");
   const rung = e.facts.rungs.find((r) => r.key === a.rung);
   if (!rung) return notFound(e, "rung");
-  const no = restoredAlready(e, l) ?? needsRole(e, a.member, ["inspector"], "accept a loose end");
-  if (no) return no;
+  const cannot = restoredAlready(e, l) ?? needsRole(e, a.member, ["inspector"], "accept a loose end");
+  if (cannot) return cannot;
   if (l.by === a.member) return own(e, atLooseEnd(l.id), a.member, "made", ["inspector"]);
   const due = l.due.kind === "rung" ? l.due.rung : null;
   const from = due === null ? null : e.facts.rungs.find((r) => r.key === due);
@@ -142,8 +142,8 @@ export function mayAcceptLooseEnd(e: Evaluation, a: { looseEnd: string; member: 
 export function mayMarkMistake(e: Evaluation, a: { opening: string; member: string }): Verdict {
   const o = e.snapshot.openings.find((x) => x.id === a.opening);
   if (!o) return notFound(e, "opening");
-  const no = needsRole(e, a.member, ["inspector"], "mark an opening as a mistake");
-  if (no) return no;
+  const cannot = needsRole(e, a.member, ["inspector"], "mark an opening as a mistake");
+  if (cannot) return cannot;
   const at: Own = { subject: ["opening", o.id], page: "openings", id: o.id };
   if (o.by === a.member) return own(e, at, a.member, "recorded", ["inspector"]);
   return o.mistake ? already(e, at, "Marked already", "An inspector marked it as recorded by mistake before.") : OK;
@@ -152,8 +152,8 @@ export function mayMarkMistake(e: Evaluation, a: { opening: string; member: stri
 /** An inspector accepts that a rung is not run. */
 export function mayLeaveOut(e: Evaluation, a: { rung: string; member: string }): Verdict {
   if (!e.facts.rungs.some((r) => r.key === a.rung)) return notFound(e, "rung");
-  const no = needsRole(e, a.member, ["inspector"], "accept that a rung is left out");
-  if (no) return no;
+  const cannot = needsRole(e, a.member, ["inspector"], "accept that a rung is left out");
+  if (cannot) return cannot;
   return e.result.rungs[a.rung]?.settled
     ? already(e, { subject: ["rung", a.rung], page: "build-up", id: a.rung }, "Settled already", "This rung is settled.")
     : OK;
@@ -169,10 +169,10 @@ export const maySetBack = (e: Evaluation, a: { rung: string; member: string }): 
 export function mayReadLog(e: Evaluation, a: { run: string; member: string; missing: boolean }): Verdict {
   const run = e.facts.runs.get(a.run);
   if (!run) return notFound(e, "run");
-  const no = a.missing
+  const cannot = a.missing
     ? needsRole(e, a.member, ["inspector"], "accept that there is no log")
     : needsRole(e, a.member, ["lead", "builder", "inspector"], "read the log");
-  if (no) return no;
+  if (cannot) return cannot;
   const at: Own = { subject: ["run", a.run], page: "run", id: a.run };
   return run.endedAt === null ? order(e, at, "Not ended", "Report the run ended first.", ["lead"]) : OK;
 }
@@ -183,11 +183,11 @@ export function mayAnswerExceedance(e: Evaluation, a: { exceedance: string; memb
   const exceedance = run?.exceedances.find((x) => x.id === a.exceedance);
   if (!run || !exceedance) return notFound(e, "exceedance");
   if (a.finding !== null && !findingOf(e, a.finding)) return notFound(e, "finding");
-  const no =
+  const cannot =
     a.finding === null
       ? needsRole(e, a.member, ["inspector"], "answer an exceedance without a finding")
       : needsRole(e, a.member, ["builder", "inspector", "lead"], "answer an exceedance");
-  if (no) return no;
+  if (cannot) return cannot;
   return exceedance.answered === null
     ? OK
     : already(e, { subject: ["run", run.id], page: "run", id: run.id }, "Answered already", "A record answers it.");

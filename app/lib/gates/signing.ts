@@ -9,14 +9,18 @@ export function coversNow(facts: Facts, items: Item[]): Cover[] {
     .map((i) => ({ item: i.id, revision: i.revision, proof: currentProof(facts, i.id)?.id ?? null }));
 }
 
-const key = (covers: Cover[]): string =>
-  covers
-    .map((c) => `${c.item}\u0000${c.revision}\u0000${c.proof ?? ""}`)
-    .sort()
-    .join("\u0001");
+const equal = (a: Cover, b: Cover): boolean => a.item === b.item && a.revision === b.revision && a.proof === b.proof;
 
 /** Same items, revisions and proofs, in any order. */
-export const sameCovers = (a: Cover[], b: Cover[]): boolean => a.length === b.length && key(a) === key(b);
+export function sameCovers(a: Cover[], b: Cover[]): boolean {
+  if (a.length !== b.length) return false;
+  if (a.every((cover, n) => equal(cover, b[n] as Cover))) return true;
+  const byItem = new Map(b.map((cover) => [cover.item, cover]));
+  return (
+    new Set(a.map((cover) => cover.item)).size === a.length &&
+    a.every((cover) => equal(cover, byItem.get(cover.item) ?? { item: "", revision: 0, proof: null }))
+  );
+}
 
 /** People who did or recorded a proof that the list covers: none of them may countersign it. */
 export function doersOf(facts: Facts, covers: Cover[]): Set<string> {
@@ -48,19 +52,17 @@ export function fillPolicy(facts: Facts, gate: Gate, signatures: Signature[]): S
 
 /** Signatures that hold: they cover today's list at the gate's present revision, and nobody withdrew them. */
 export function holding(facts: Facts, gate: Gate, covers: Cover[]): Signature[] {
-  const today = key(covers);
   return (facts.signaturesOf.get(gate.id) ?? []).filter(
-    (s) => !s.withdrawn && s.gateRevision === gate.revision && s.covers.length === covers.length && key(s.covers) === today,
+    (s) => !s.withdrawn && s.gateRevision === gate.revision && sameCovers(s.covers, covers),
   );
 }
 
 /** Whether the whole policy was signed at some time, over one and the same list. */
 export function wasSigned(facts: Facts, gate: Gate): boolean {
   if (!gate.policy.length) return false;
-  const lists = new Map<string, Signature[]>();
-  for (const s of facts.signaturesOf.get(gate.id) ?? []) {
-    const k = `${s.gateRevision}|${key(s.covers)}`;
-    lists.set(k, [...(lists.get(k) ?? []), s]);
-  }
-  return [...lists.values()].some((list) => fillPolicy(facts, gate, list).length === gate.policy.length);
+  const all = facts.signaturesOf.get(gate.id) ?? [];
+  return all.some((one) => {
+    const alike = all.filter((s) => s.gateRevision === one.gateRevision && sameCovers(s.covers, one.covers));
+    return fillPolicy(facts, gate, alike).length === gate.policy.length;
+  });
 }

@@ -1,7 +1,7 @@
 /** Events of the board itself: how it came to be, its people, its numbers, proofs and signatures. */
 import { z } from "zod";
 import { cover, event, id, instant, json, role, sha256, words } from "#app/lib/record/event-parts";
-import { evidenceListSchema } from "#app/lib/schemas/evidence";
+import { evidenceListSchema } from "#app/lib/record/evidence-shape";
 
 const signed = { meaning: words, rulesVersion: z.string(), shownHash: sha256 };
 const revised = z.array(z.strictObject({ item: id, revision: z.number().int() }));

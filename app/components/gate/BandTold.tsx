@@ -1,0 +1,50 @@
+import { BandRule } from "#app/components/ui/BandRule";
+import { fromSI } from "#app/lib/units/convert";
+import { displayUnit, format, parseEntry } from "#app/lib/units/display";
+import type { Band, Quantity } from "#app/lib/units/quantity";
+
+export interface Criterion {
+  quantity: Quantity;
+  unit: string;
+  band: Band | null;
+  bandText: string;
+  from: string;
+  isDefault: boolean;
+}
+
+interface BandToldProps {
+  criterion: Criterion;
+  /** As typed; empty = nothing yet. */
+  text: string;
+  units: "si" | "us";
+  place: string;
+}
+
+/** The band as a rule with the value's mark, and in words at once whether it is in. The server tells again. */
+export function BandTold({ criterion, text, units, place }: BandToldProps) {
+  const { quantity, band, bandText, from, isDefault } = criterion;
+  const unit = displayUnit(quantity, units);
+  const entry = text.trim() ? parseEntry(text, quantity, units) : null;
+  const si = entry?.ok ? entry.si : null;
+  const out = si !== null && band !== null && ((band.min !== null && si < band.min) || (band.max !== null && si > band.max));
+  const shown = (n: number | null | undefined) => (n === null || n === undefined ? null : fromSI(n, unit));
+  const told = si === null ? null : out ? "Out of the band" : "In the band";
+  return (
+    <div className="band-told">
+      {band && (
+        <BandRule
+          min={shown(band.min)}
+          max={shown(band.max)}
+          value={si === null ? null : fromSI(si, unit)}
+          label={`${place ? `${place}: ` : ""}${si === null ? "nothing entered" : format(quantity, si, units).text}, band ${bandText}`}
+        />
+      )}
+      <p>
+        <output className={out ? "told told-out" : "told"}>{entry && !entry.ok ? entry.sentence : told}</output>
+        <span>
+          {bandText}, {isDefault ? <b>default, not confirmed: {from}</b> : from}
+        </span>
+      </p>
+    </div>
+  );
+}

@@ -1,0 +1,34 @@
+/** Forms of the crib. Dates are days at the install ("2026-12-31"); a check is in date to the end of its last day. */
+import { z } from "zod";
+import { idSchema, noteSchema } from "#app/lib/schemas/act";
+
+const dateSchema = z.string().regex(/^\d{4}-\d{2}-\d{2}$/, "Enter a date.");
+const nameSchema = z.string().trim().min(2, "Give it a name.").max(120);
+
+export const addToolSchema = z.object({ name: nameSchema, serial: z.string().trim().max(80).default("") });
+export const recordToolCheckSchema = z.object({
+  tool: idSchema,
+  /** The day of the check; null = now. */
+  on: dateSchema.nullable().default(null),
+  good: z.boolean(),
+  /** Last day in date; only on a good check. */
+  due: dateSchema.nullable().default(null),
+  note: noteSchema,
+});
+export const addExtinguisherSchema = z.object({
+  name: nameSchema,
+  agent: z.enum(["co2", "clean", "foam", "powder", "water"], "Choose the agent."),
+  classB: z.boolean(),
+  /** kg */
+  charge: z.number("Enter the charge.").positive().max(200),
+});
+export const recordLookSchema = z.object({
+  extinguisher: idSchema,
+  kind: z.enum(["look", "service", "withdrawn"]),
+  due: dateSchema.nullable().default(null),
+  note: noteSchema,
+});
+export type AddTool = z.output<typeof addToolSchema>;
+export type RecordToolCheck = z.output<typeof recordToolCheckSchema>;
+export type AddExtinguisher = z.output<typeof addExtinguisherSchema>;
+export type RecordLook = z.output<typeof recordLookSchema>;

@@ -1,0 +1,54 @@
+/** Forms about openings, loose ends and findings. */
+import { z } from "zod";
+import { idSchema, noteSchema, reasonSchema, rotationSchema, systemSchema } from "#app/lib/schemas/act";
+
+export const openSystemSchema = z.object({
+  systems: z.array(systemSchema).min(1, "Choose at least one system."),
+  reason: reasonSchema,
+  /** Opened and closed again already: one act. */
+  closed: z.boolean().default(false),
+});
+export const closeOpeningSchema = z.object({ opening: idSchema, note: noteSchema });
+export const markMistakeSchema = z.object({ opening: idSchema, reason: reasonSchema });
+export type OpenSystem = z.output<typeof openSystemSchema>;
+export type CloseOpening = z.output<typeof closeOpeningSchema>;
+export type MarkMistake = z.output<typeof markMistakeSchema>;
+
+export const makeLooseEndSchema = z.object({
+  what: z.string().trim().min(3, "Say what it is.").max(200),
+  count: z.number().int().min(1).max(1000),
+  system: systemSchema,
+  why: reasonSchema,
+  due: z.discriminatedUnion("kind", [
+    z.object({ kind: z.literal("gate"), gate: idSchema }),
+    z.object({ kind: z.literal("rung"), rung: z.string().min(1).max(8) }),
+  ]),
+  /** The item that asks for it; null = nobody asked, so making it is an opening. */
+  askedBy: idSchema.nullable().default(null),
+});
+export const looseEndSchema = z.object({ looseEnd: idSchema });
+export const acceptLooseEndSchema = z.object({ looseEnd: idSchema, rung: z.string().min(1).max(8), reason: reasonSchema });
+export type MakeLooseEnd = z.output<typeof makeLooseEndSchema>;
+export type LooseEndRef = z.output<typeof looseEndSchema>;
+export type AcceptLooseEnd = z.output<typeof acceptLooseEndSchema>;
+
+const severity = z.enum(["grounding", "limiting", "watch"], "Choose how bad it is.");
+const capFits = (f: { severity: string; cap: number | null }) => (f.severity === "limiting") === (f.cap !== null);
+const capMessage = { message: "A limiting finding needs the highest speed allowed; the others have none.", path: ["cap"] };
+
+export const raiseFindingSchema = z
+  .object({
+    system: systemSchema,
+    words: reasonSchema,
+    severity,
+    cap: rotationSchema.nullable().default(null),
+    photo: idSchema.nullable().default(null),
+  })
+  .refine(capFits, capMessage);
+export const gradeFindingSchema = z
+  .object({ finding: idSchema, severity, cap: rotationSchema.nullable().default(null), words: reasonSchema })
+  .refine(capFits, capMessage);
+export const findingWordsSchema = z.object({ finding: idSchema, words: reasonSchema });
+export type RaiseFinding = z.output<typeof raiseFindingSchema>;
+export type GradeFinding = z.output<typeof gradeFindingSchema>;
+export type FindingWords = z.output<typeof findingWordsSchema>;

@@ -1,0 +1,51 @@
+/** Forms of the set-up: a new install, its people, its ratings and limits, the maker's numbers of its items. */
+import { z } from "zod";
+import { idSchema, roleSchema, sourceSchema } from "#app/lib/schemas/act";
+import { traitsSchema } from "#app/lib/template/traits";
+
+const timeZoneSchema = z.string().refine((zone) => {
+  try {
+    new Intl.DateTimeFormat("en", { timeZone: zone });
+    return true;
+  } catch {
+    return false;
+  }
+}, "Choose a time zone.");
+
+export const createInstallSchema = z.object({
+  registration: z.string().trim().min(2, "Enter the registration.").max(20),
+  name: z.string().trim().min(2, "Give the install a name.").max(80),
+  timeZone: timeZoneSchema,
+  traits: traitsSchema,
+  /** SI by value key; `source` null = not confirmed. */
+  values: z.record(z.string(), z.object({ value: z.number().nullable(), source: sourceSchema.nullable() })).default({}),
+});
+export type CreateInstall = z.output<typeof createInstallSchema>;
+
+export const addMemberSchema = z.object({ email: z.email("Enter a mail address.").trim().toLowerCase(), role: roleSchema });
+export const endRoleSchema = z.object({ member: idSchema, role: roleSchema });
+export type AddMember = z.output<typeof addMemberSchema>;
+export type EndRole = z.output<typeof endRoleSchema>;
+
+const end = z.number().nullable();
+export const enterNumberSchema = z.object({
+  item: idSchema,
+  /** Number of the part, from 0. */
+  part: z.number().int().min(0).max(19),
+  /** Of a measure or torque, SI. */
+  band: z
+    .object({ min: end, max: end })
+    .refine(
+      (b) => (b.min !== null || b.max !== null) && (b.min ?? -Infinity) <= (b.max ?? Infinity),
+      "Enter a band whose least is not above its most.",
+    )
+    .nullable()
+    .default(null),
+  /** Of a tick that refers to a maker's mark or instruction. */
+  text: z.string().trim().min(1).max(400).nullable().default(null),
+  source: sourceSchema,
+});
+export type EnterNumber = z.output<typeof enterNumberSchema>;
+
+export const confirmValueSchema = z.object({ key: z.string().min(1).max(40), value: z.number("Enter the value."), source: sourceSchema });
+export type ConfirmValue = z.output<typeof confirmValueSchema>;

@@ -1,0 +1,93 @@
+// Sets an install up: its board is generated from the answers about the engine and the values known so far.
+// Whoever sets it up is its lead.
+
+import { eq } from "drizzle-orm";
+import { write } from "#app/db/client.server";
+import { gates } from "#app/db/schema/gates";
+import { installs } from "#app/db/schema/installs";
+import { items } from "#app/db/schema/items";
+import { memberRoles, members } from "#app/db/schema/members";
+import { rungs } from "#app/db/schema/rungs";
+import { users } from "#app/db/schema/users";
+import { values } from "#app/db/schema/values";
+import { now as clock } from "#app/lib/clock";
+import { DEFAULT_SETTINGS } from "#app/lib/gates/snapshot";
+import { newId } from "#app/lib/ids";
+import type { CreateInstall } from "#app/lib/schemas/set-up";
+import { boardRows } from "#app/lib/services/board-rows";
+import { remember, replayOf } from "#app/lib/services/commands.server";
+import { done, notFound, type Outcome } from "#app/lib/services/outcome";
+import { recordWriter } from "#app/lib/services/record-writer.server";
+import { generate } from "#app/lib/template/generate";
+import type { GeneratedBoard, ValueKey } from "#app/lib/template/types";
+
+export interface NewInstall {
+  install: string;
+  /** What the template has and these answers leave out, with the reason. */
+  leftOut: GeneratedBoard["leftOut"];
+}
+
+export function createInstall(
+  { actor, commandId }: { actor: { userId: string }; commandId: string },
+  input: CreateInstall,
+): Promise<Outcome<NewInstall>> {
+  const command = { id: commandId, userId: actor.userId, installId: "", kind: "create-install", input };
+  const known: Partial<Record<ValueKey, number>> = Object.fromEntries(
+    Object.entries(input.values).flatMap(([key, v]) => (v.value === null ? [] : [[key, v.value]])),
+  );
+  const board = generate(input.traits, known);
+  return write(async (tx) => {
+    const first = await replayOf<NewInstall>(tx, command);
+    if (first) return first;
+    const [person] = await tx.select({ id: users.id, name: users.name }).from(users).where(eq(users.id, actor.userId));
+    if (!person) return notFound("Your account");
+    const installId = newId();
+    const { registration, name, timeZone, traits } = input;
+    const rows = boardRows(installId, board, input.values, newId);
+    const writer = await recordWriter(tx, installId, clock());
+    const { now } = writer;
+    await tx.insert(installs).values({
+      id: installId,
+      registration,
+      name,
+      timeZone,
+      traits,
+      settings: DEFAULT_SETTINGS,
+      templateVersion: board.templateVersion,
+      positions: board.positions,
+      leftOut: board.leftOut,
+      postRun: board.postRun,
+      createdAt: now,
+      createdBy: person.id,
+    });
+    await tx.insert(members).values({ installId, userId: person.id, addedAt: now, addedBy: person.id });
+    await tx.insert(memberRoles).values({ id: newId(), installId, userId: person.id, role: "lead", from: now, grantedBy: person.id });
+    await tx.insert(values).values(rows.values);
+    await tx.insert(gates).values(rows.gates);
+    await tx.insert(items).values(rows.items);
+    await tx.insert(rungs).values(rows.rungs);
+    const who = { by: person.id, as: "lead" as const };
+    await writer.record(who, {
+      type: "install-created",
+      data: {
+        registration,
+        name,
+        timeZone,
+        traits: plain(traits),
+        templateVersion: board.templateVersion,
+        values: plain(rows.values.map(({ key, value, source }) => ({ key, value, source }))),
+        gates: plain(rows.gates),
+        items: plain(rows.items),
+        rungs: plain(rows.rungs),
+        leftOut: plain(board.leftOut),
+      },
+    });
+    await writer.record(who, { type: "member-added", data: { member: person.id, name: person.name, role: "lead" } });
+    const outcome = done({ install: installId, leftOut: board.leftOut });
+    await remember(tx, command, outcome, now);
+    return outcome;
+  });
+}
+
+/** Data as JSON says it: without entries that are undefined. */
+const plain = (data: unknown) => JSON.parse(JSON.stringify(data));

@@ -1,0 +1,75 @@
+// The crib's acts: tools and extinguishers come in, and are checked. A bad check reaches back to the last good one by itself.
+import { extinguisherChecks, extinguishers, toolChecks, tools } from "#app/db/schema/crib";
+import { endOfDate } from "#app/lib/gates/day";
+import { mayEditCrib, mayRaise } from "#app/lib/gates/verdicts";
+import type { AddExtinguisher, AddTool, RecordLook, RecordToolCheck } from "#app/lib/schemas/crib";
+import { done, invalid, notFound, type Outcome, refusalOf } from "#app/lib/services/outcome";
+import { roleOf } from "#app/lib/services/parts.server";
+import { type Act, type Doing, perform } from "#app/lib/services/perform.server";
+
+const keeper = (d: Doing) => roleOf(d.member, "builder", "lead", "inspector");
+
+export function addTool(act: Act, input: AddTool): Promise<Outcome<{ tool: string }>> {
+  return perform({ ...act, kind: "add-tool", input }, async (d) => {
+    const refusal = refusalOf(mayEditCrib(d.e, { member: d.member.id }));
+    if (refusal) return refusal;
+    const { id } = await d.record(keeper(d), { type: "tool-added", data: input });
+    await d.tx.insert(tools).values({ id, installId: d.installId, ...input });
+    return done({ tool: id });
+  });
+}
+
+/** An out-of-tolerance check is bad news: any member may record it. */
+export function recordToolCheck(act: Act, input: RecordToolCheck): Promise<Outcome<{ check: string }>> {
+  return perform({ ...act, kind: "record-tool-check", input }, async (d) => {
+    const refusal = refusalOf(input.good ? mayEditCrib(d.e, { member: d.member.id }) : mayRaise(d.e, { member: d.member.id }));
+    if (refusal) return refusal;
+    if (!d.e.facts.tools.has(input.tool)) return notFound("That tool");
+    const zone = d.e.snapshot.install.timeZone;
+    const dayEnd = input.on === null ? d.now : endOfDate(input.on, zone);
+    const due = input.due === null ? null : endOfDate(input.due, zone);
+    if (dayEnd === null || (input.due !== null && due === null)) return invalid("There is no such date. Enter it again.");
+    // A good check of a past day counts from that day's end, a bad one too: it reaches back, never less far.
+    const at = Math.min(dayEnd, d.now);
+    if (input.on !== null && dayEnd - 86_400_000 > d.now) return invalid("That day has not come yet. Enter the day of the check.");
+    if (input.good !== (due !== null))
+      return invalid(
+        input.good ? "Enter the last day on which the tool is in date." : "A tool that is out of tolerance has no date to run to.",
+      );
+    if (due !== null && due <= at) return invalid("The last day in date is before the check. Enter it again.");
+    const row = { at, good: input.good, due, note: input.note };
+    const base = await d.record(keeper(d), { type: "tool-checked", data: { tool: input.tool, ...row } });
+    await d.tx.insert(toolChecks).values({ ...base, toolId: input.tool, ...row });
+    return done({ check: base.id });
+  });
+}
+
+export function addExtinguisher(act: Act, input: AddExtinguisher): Promise<Outcome<{ extinguisher: string }>> {
+  return perform({ ...act, kind: "add-extinguisher", input }, async (d) => {
+    const refusal = refusalOf(mayEditCrib(d.e, { member: d.member.id }));
+    if (refusal) return refusal;
+    const { id } = await d.record(keeper(d), { type: "extinguisher-added", data: input });
+    await d.tx.insert(extinguishers).values({ id, installId: d.installId, ...input });
+    return done({ extinguisher: id });
+  });
+}
+
+/** A monthly look, a yearly service, or its withdrawal from use, which any member may record. */
+export function recordLook(act: Act, input: RecordLook): Promise<Outcome<{ check: string }>> {
+  return perform({ ...act, kind: "record-look", input }, async (d) => {
+    const { kind, note } = input;
+    const refusal = refusalOf(kind === "withdrawn" ? mayRaise(d.e, { member: d.member.id }) : mayEditCrib(d.e, { member: d.member.id }));
+    if (refusal) return refusal;
+    const bottle = d.e.snapshot.extinguishers.find((x) => x.id === input.extinguisher);
+    if (!bottle) return notFound("That extinguisher");
+    if (bottle.withdrawn) return invalid(`${bottle.name} was withdrawn from use. Add another one.`);
+    const due = input.due === null ? null : endOfDate(input.due, d.e.snapshot.install.timeZone);
+    if (kind === "withdrawn" ? due !== null : due === null)
+      return invalid(kind === "withdrawn" ? "Withdrawn from use has no date to run to." : "Enter the last day to which it is in date.");
+    if (due !== null && due <= d.now) return invalid("That day is over. Enter the last day to which it is in date.");
+    const row = { kind, at: d.now, due, note };
+    const base = await d.record(keeper(d), { type: "extinguisher-checked", data: { extinguisher: bottle.id, ...row } });
+    await d.tx.insert(extinguisherChecks).values({ ...base, extinguisherId: bottle.id, ...row });
+    return done({ check: base.id });
+  });
+}

@@ -1,0 +1,27 @@
+// Something is removed, capped or left off for now. Where no item asked for it, making it is an opening of its system too.
+import { looseEnds } from "#app/db/schema/loose-ends";
+import { mayRaise } from "#app/lib/gates/verdicts";
+import type { MakeLooseEnd } from "#app/lib/schemas/happenings";
+import { writeOpening } from "#app/lib/services/open-system.server";
+import { done, invalid, notFound, type Outcome, refusalOf } from "#app/lib/services/outcome";
+import { roleOf } from "#app/lib/services/parts.server";
+import { type Act, perform } from "#app/lib/services/perform.server";
+
+export function makeLooseEnd(act: Act, input: MakeLooseEnd): Promise<Outcome<{ looseEnd: string }>> {
+  return perform({ ...act, kind: "make-loose-end", input }, async (d) => {
+    const refusal = refusalOf(mayRaise(d.e, { member: d.member.id }));
+    if (refusal) return refusal;
+    const { what, count, system, why, due, askedBy } = input;
+    if (due.kind === "gate" ? !d.e.facts.gates.has(due.gate) : !d.e.facts.rungs.some((r) => r.key === due.rung))
+      return notFound("The gate or rung it is due before");
+    const asking = askedBy === null ? null : d.e.facts.items.get(askedBy);
+    if (asking === undefined) return notFound("That item");
+    if (asking && asking.offersLooseEnd?.system !== system) return invalid(`${asking.key} does not ask for a loose end of this system.`);
+    const as = roleOf(d.member, "builder", "inspector");
+    const row = { what, count, system, why, due, askedBy };
+    const base = await d.record(as, { type: "loose-end-made", data: row });
+    await d.tx.insert(looseEnds).values({ ...base, ...row });
+    if (!asking) await writeOpening(d, as, { systems: [system], reason: `Loose end made: ${what}`, closed: true });
+    return done({ looseEnd: base.id });
+  });
+}

@@ -1,0 +1,47 @@
+// Takes in a picture: judged by its bytes, freed of what the camera wrote about place and device, kept by its hash, then its row.
+// Bytes first, row in the transaction: a crash between leaves bytes that nobody can reach, never a row without bytes.
+import { eq, sql } from "drizzle-orm";
+import { db } from "#app/db/client.server";
+import { memberOf } from "#app/db/queries/membership.server";
+import { files } from "#app/db/schema/files";
+import { mayRaise } from "#app/lib/gates/verdicts";
+import { done, invalid, notFound, type Outcome, refusalOf } from "#app/lib/services/outcome";
+import { roleOf } from "#app/lib/services/parts.server";
+import { type Act, perform } from "#app/lib/services/perform.server";
+import { imageType } from "#app/lib/storage/image-type";
+import { keepBytes } from "#app/lib/storage/local.server";
+import { stripMetadata } from "#app/lib/storage/strip-metadata";
+
+/** Limits, common practice: a phone's picture is 3 to 8 MB. */
+export const PHOTO_LIMITS = { bytes: 12_000_000, pixels: 60_000_000, perInstall: 5000 };
+
+export async function storePhoto(act: Act, input: { bytes: Uint8Array; name: string }): Promise<Outcome<{ file: string }>> {
+  if (!(await memberOf(db(), act.installId, act.actor.userId))) return notFound("That install");
+  const { bytes } = input;
+  if (bytes.length > PHOTO_LIMITS.bytes)
+    return invalid(`The picture is larger than ${PHOTO_LIMITS.bytes / 1_000_000} MB. Send a smaller one.`);
+  const image = imageType(bytes);
+  const clean = image && stripMetadata(bytes, image.type);
+  if (!image || !clean) return invalid("This is no JPEG, PNG or WebP picture, or it is damaged. Take it again.");
+  if (image.width * image.height > PHOTO_LIMITS.pixels) return invalid("The picture has more than 60 million pixels. Send a smaller one.");
+  const hash = await keepBytes(clean);
+  const name = safeName(input.name);
+  return perform({ ...act, kind: "store-photo", input: { hash, name } }, async (d) => {
+    const refusal = refusalOf(mayRaise(d.e, { member: d.member.id }));
+    if (refusal) return refusal;
+    const [count] = await d.tx.select({ n: sql<number>`count(*)` }).from(files).where(eq(files.installId, d.installId));
+    if ((count?.n ?? 0) >= PHOTO_LIMITS.perInstall)
+      return invalid(`This install has ${PHOTO_LIMITS.perInstall} pictures already, as many as it can hold.`);
+    const row = { hash, size: clean.length, name };
+    const { id } = await d.record(roleOf(d.member, "builder", "inspector"), { type: "file-stored", data: { ...row, mime: image.type } });
+    await d.tx.insert(files).values({ id, installId: d.installId, ...row, type: image.type, createdAt: d.now, by: d.member.id });
+    return done({ file: id });
+  });
+}
+
+/** For display alone: no path, no control characters, at most 100 characters. */
+function safeName(name: string): string {
+  // biome-ignore lint/suspicious/noControlCharactersInRegex: control characters are what is taken out
+  const plain = name.replace(/^.*[\\/]|[\u0000-\u001f\u007f]/g, "");
+  return plain.trim().slice(0, 100) || "photo";
+}

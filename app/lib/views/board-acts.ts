@@ -1,0 +1,95 @@
+/** What one person can do now, most useful first, by asking the rules' own verdicts. Each is a link to the place. */
+import type { Evaluation } from "#app/lib/gates/evaluate";
+import { currentProof, isComputed } from "#app/lib/gates/facts";
+import type { GateResult } from "#app/lib/gates/result";
+import type { Item, SigningRole } from "#app/lib/gates/snapshot";
+import { mayAccept, mayConfirm, maySign } from "#app/lib/gates/verdicts";
+import { count } from "#app/lib/gates/who";
+import type { Viewer } from "#app/lib/views/board";
+import { crewActs } from "#app/lib/views/board-crew";
+import { boardOf, gateOf, runOf } from "#app/lib/views/places";
+
+export interface ActView {
+  label: string;
+  note: string;
+  href: string;
+}
+
+const SIGNING: SigningRole[] = ["inspector", "builder", "lead"];
+
+export function actsOf(e: Evaluation, me: Viewer): ActView[] {
+  return [...crewActs(e, me.id), ...signActs(e, me), ...secondPersonActs(e, me), ...leadActs(e, me), ...workActs(e, me)];
+}
+
+/** Gates that this person may sign now, with the role. */
+export function signable(e: Evaluation, me: Viewer): { gate: GateResult; as: SigningRole }[] {
+  return Object.values(e.result.gates).flatMap((gate) => {
+    if (!gate.present || !gate.ready || gate.stands) return [];
+    const as = SIGNING.find((r) => me.roles.includes(r) && maySign(e, { gate: gate.id, member: me.id, as: r, covers: null }).ok);
+    return as ? [{ gate, as }] : [];
+  });
+}
+
+function signActs(e: Evaluation, me: Viewer): ActView[] {
+  const ready = signable(e, me);
+  const install = e.snapshot.install.id;
+  const name = (id: string) => e.facts.gates.get(id)?.name ?? "the gate";
+  if (ready.length > 1)
+    return [
+      {
+        label: `Sign ${count(ready.length, "gate")} on one sheet`,
+        note: ready.map((r) => e.facts.gates.get(r.gate.id)?.short ?? "").join(", "),
+        href: `${boardOf(install)}/sign`,
+      },
+    ];
+  return ready.map(({ gate, as }) => ({
+    label: `${gate.holding.length ? "Countersign" : "Sign"} ${name(gate.id)}`,
+    note: `as ${as}, ${count(gate.of, "item")}`,
+    href: `${gateOf(install, gate.id)}/sign`,
+  }));
+}
+
+function secondPersonActs(e: Evaluation, me: Viewer): ActView[] {
+  const install = e.snapshot.install.id;
+  const waiting = [...e.facts.items.values()].flatMap((item) => {
+    const proof = currentProof(e.facts, item.id);
+    if (!proof) return [];
+    const roles = (["inspector", "builder", "lead"] as const).filter((r) => me.roles.includes(r));
+    const confirm = roles.some((as) => mayConfirm(e, { proof: proof.id, member: me.id, as }).ok);
+    const accept = e.result.items[item.id]?.blockers.some((b) => b.code === "needs-acceptance") && mayAccept(e, { proof: proof.id, member: me.id }).ok;
+    return confirm ? [{ item, verb: "Look and confirm" }] : accept ? [{ item, verb: "Accept or not" }] : [];
+  });
+  return waiting.map(({ item, verb }) => ({ label: `${verb}: ${item.key}`, note: item.words, href: gateOf(install, item.gate, item.id) }));
+}
+
+function leadActs(e: Evaluation, me: Viewer): ActView[] {
+  const { next } = e.result;
+  if (!next || !me.roles.includes("lead")) return [];
+  const install = e.snapshot.install.id;
+  if (next.id === null) return [{ label: `Plan run ${next.label}`, note: "time, wind limit, positions", href: `${boardOf(install)}/build-up` }];
+  if (next.clear && !next.go && next.state !== "running")
+    return [{ label: `Call GO for run ${next.label}`, note: "the crew is told by mail", href: runOf(install, next.id) }];
+  return [];
+}
+
+/** Gates with work for a builder or inspector: those that stop the next run first, then the others whose prerequisites stand. */
+function workActs(e: Evaluation, me: Viewer): ActView[] {
+  if (!me.roles.some((r) => r === "builder" || r === "inspector")) return [];
+  const roots = (e.result.next ?? e.result.release).blockers.flatMap((b) => (b.subject.kind === "gate" ? [b.subject.id] : []));
+  const order = [...new Set([...roots, ...e.facts.gates.keys()])];
+  const install = e.snapshot.install.id;
+  return order.flatMap((id): ActView[] => {
+    const gate = e.result.gates[id];
+    const next = gate && !gate.complete && gate.state !== "waiting" ? nextItem(e, id) : null;
+    if (!gate || !next) return [];
+    const name = e.facts.gates.get(id)?.name ?? "the gate";
+    const label = gate.state === "lapsed" ? `Do ${name} again` : gate.done ? `Carry on with ${name}` : `Begin ${name}`;
+    return [{ label, note: `Next: ${next.words}`, href: gateOf(install, id, next.id) }];
+  });
+}
+
+/** The first item of a gate that somebody has to prove: not done, and everything that it follows stands. */
+export function nextItem(e: Evaluation, gate: string): Item | null {
+  const items = (e.facts.itemsOf.get(gate) ?? []).filter((i) => !isComputed(i) && ["to do", "lapsed"].includes(e.result.items[i.id]?.state ?? ""));
+  return items.find((i) => i.follows.every((f) => e.result.items[f]?.stands ?? true)) ?? items[0] ?? null;
+}

@@ -1,0 +1,216 @@
+/** A gate's page as one person sees it: where it stands on the pipe, its items, its signatures and the one next thing. */
+import type { Evaluation } from "#app/lib/gates/evaluate";
+import type { GateResult } from "#app/lib/gates/result";
+import type { Gate, Signature, SigningRole } from "#app/lib/gates/snapshot";
+import { maySign, mayWithdrawSignature } from "#app/lib/gates/verdicts";
+import { count } from "#app/lib/gates/who";
+import { type ItemView, itemView, type Reader } from "#app/lib/views/gate-item";
+import { anyOf, boardOf, gateOf, nameIn, type Place, placeOf, whoClears } from "#app/lib/views/places";
+import { type ValveState, valveOf } from "#app/lib/views/shown-states";
+
+export interface FeedView {
+  id: string;
+  name: string;
+  state: ValveState;
+  href: string;
+}
+
+export interface SignatureView {
+  id: string | null;
+  role: string;
+  name: string;
+  time: string;
+  waits: boolean;
+  /** This person may take it back. */
+  mayWithdraw: boolean;
+}
+
+export interface FootView {
+  says: string;
+  note: string;
+  act: { label: string; note: string; href: string } | null;
+}
+
+export interface GateView {
+  id: string;
+  key: string;
+  name: string;
+  valve: ValveState;
+  part: number;
+  state: string;
+  until: string | null;
+  caution: { title: string; text: string; sign: "propeller" | "strap" | "fire" | "general" } | null;
+  feeds: FeedView[];
+  then: Place[];
+  waits: { title: string; sentence: string; place: Place }[];
+  items: ItemView[];
+  signatures: SignatureView[];
+  former: string[];
+  foot: FootView;
+}
+
+/** @returns null where there is no such gate on the board. */
+export function gateView(e: Evaluation, gateId: string, me: Reader): GateView | null {
+  const gate = e.facts.gates.get(gateId);
+  const result = e.result.gates[gateId];
+  if (!gate || !result?.present) return null;
+  const items = (e.facts.itemsOf.get(gateId) ?? []).map((item, i) => itemView(e, item, i + 1, me));
+  return {
+    id: gate.id,
+    key: gate.key,
+    name: gate.name,
+    valve: valveOf(result.state),
+    part: result.of ? result.done / result.of : 0,
+    state: stateWords(e, result),
+    until: result.until === null ? null : e.facts.when(result.until),
+    caution: cautionOf(gate),
+    feeds: result.prerequisites.map((id) => feedOf(e, id)),
+    then: thenOf(e, gateId),
+    waits: result.blockers
+      .filter((b) => ["gate-waits", "grounding", "loose-end"].includes(b.code))
+      .map((b) => ({ title: b.title, sentence: b.sentence, place: placeOf(e.snapshot, b.link) })),
+    items,
+    ...signaturesOf(e, gate, result, me),
+    foot: footOf(e, gate, result, items, me),
+  };
+}
+
+function stateWords(e: Evaluation, result: GateResult): string {
+  switch (result.state) {
+    case "in work":
+      return result.done ? `in work, ${result.done} of ${result.of} done` : `not begun, ${count(result.of, "item")}`;
+    case "half signed":
+      return `half signed, waits for the ${missingPlace(e, result)}`;
+    case "waiting":
+      return `waits for ${count(result.prerequisites.filter((id) => !e.result.gates[id]?.stands).length, "gate")}, ${result.done} of ${result.of} done`;
+    case "lapsed":
+      return `lapsed, ${result.done} of ${result.of} stand`;
+    case "ready":
+      return "ready to sign";
+    case "signed":
+      return result.until === null ? "signed" : `signed, stands until ${e.facts.when(result.until)}`;
+  }
+}
+
+const missingPlace = (e: Evaluation, result: GateResult): string =>
+  (e.facts.gates.get(result.id)?.policy[result.holding.length] ?? []).join(" or ");
+
+function feedOf(e: Evaluation, id: string): FeedView {
+  const gate = e.facts.gates.get(id);
+  return { id, name: gate?.short ?? "Gate", state: valveOf(e.result.gates[id]?.state ?? "waiting"), href: gateOf(e.snapshot.install.id, id) };
+}
+
+/** Gates that wait for this one; the run where there are none. */
+function thenOf(e: Evaluation, gateId: string): Place[] {
+  const install = e.snapshot.install.id;
+  const after = Object.values(e.result.gates).filter((g) => g.present && g.prerequisites.includes(gateId));
+  // The walk-round needs every gate; it is named only where nothing else comes first.
+  const near = after.filter((g) => !e.facts.gates.get(g.id)?.eachRun);
+  const shown = (near.length ? near : after).map((g) => ({ href: gateOf(install, g.id), label: e.facts.gates.get(g.id)?.short ?? "Gate" }));
+  const next = e.result.next;
+  if (shown.length || !next) return shown;
+  return [{ href: next.id ? `/installs/${install}/runs/${next.id}` : `${boardOf(install)}/build-up`, label: `Run ${next.label}` }];
+}
+
+const SIGNS: Record<string, NonNullable<GateView["caution"]>["sign"]> = {
+  OP: "propeller",
+  PR: "propeller",
+  IG: "propeller",
+  WR: "propeller",
+  PO: "propeller",
+  SV: "propeller",
+  TD: "strap",
+  FS: "fire",
+  FP: "fire",
+  FI: "fire",
+  DY: "fire",
+};
+
+/** Its first words stand out: up to the first colon or full stop. */
+function cautionOf(gate: Gate): GateView["caution"] {
+  if (!gate.caution) return null;
+  const [, title = gate.caution, rest = ""] = /^(.+?[.:])\s*(.*)$/s.exec(gate.caution) ?? [];
+  return {
+    title: `${title.replace(/[.:]$/, "")}.`,
+    text: rest && rest[0] ? `${rest[0].toUpperCase()}${rest.slice(1)}` : "",
+    sign: SIGNS[gate.key] ?? "general",
+  };
+}
+
+const SAYS: Record<SigningRole, string> = {
+  builder: "signed as builder",
+  inspector: "countersigned as inspector",
+  lead: "countersigned as lead",
+};
+
+function signaturesOf(e: Evaluation, gate: Gate, result: GateResult, me: Reader): Pick<GateView, "signatures" | "former"> {
+  const all = e.facts.signaturesOf.get(gate.id) ?? [];
+  const given = result.holding.flatMap((id) => all.filter((s) => s.id === id));
+  const open = gate.policy.slice(given.length).map((roles, i): SignatureView => {
+    const owner = i === 0 && result.ready ? result.blockers.find((b) => b.code === "not-signed")?.owner : undefined;
+    const names = owner?.members.map((m) => nameIn(e.snapshot, m)) ?? [];
+    return {
+      id: null,
+      role: roles.join(" or "),
+      name: names.length ? anyOf(names, 2) : "not yet",
+      time: result.ready ? (i === 0 ? "may sign now" : "after that") : "when all items stand",
+      waits: true,
+      mayWithdraw: false,
+    };
+  });
+  const held = given.map(
+    (s): SignatureView => ({
+      id: s.id,
+      role: SAYS[s.as],
+      name: nameIn(e.snapshot, s.by),
+      time: e.facts.when(s.recorded),
+      waits: false,
+      mayWithdraw: mayWithdrawSignature(e, { signature: s.id, member: me.id }).ok,
+    }),
+  );
+  const former = all.filter((s) => !result.holding.includes(s.id)).map((s) => formerWords(e, s));
+  return { signatures: [...held, ...open], former };
+}
+
+function formerWords(e: Evaluation, s: Signature): string {
+  const base = `${nameIn(e.snapshot, s.by)}, ${SAYS[s.as]}, ${e.facts.when(s.recorded)}`;
+  return s.withdrawn
+    ? `${base}: withdrawn by ${nameIn(e.snapshot, s.withdrawn.by)} ${e.facts.when(s.withdrawn.recorded)}`
+    : `${base}: what it covered has changed since`;
+}
+
+/** The role in which this person may sign now. */
+export function signingRole(e: Evaluation, gateId: string, me: Pick<Reader, "id" | "roles">): SigningRole | null {
+  const roles: SigningRole[] = ["builder", "inspector", "lead"];
+  return roles.find((as) => me.roles.includes(as) && maySign(e, { gate: gateId, member: me.id, as, covers: null }).ok) ?? null;
+}
+
+function footOf(e: Evaluation, gate: Gate, result: GateResult, items: ItemView[], me: Reader): FootView {
+  const as = signingRole(e, gate.id, me);
+  if (as)
+    return {
+      says: result.holding.length ? `Signed once. ${gate.name} waits for you.` : "All items stand",
+      note: "The sheet reads back what you sign.",
+      act: { label: result.holding.length ? `Countersign as ${as}` : `Sign as ${as}`, note: `${count(result.of, "item")}, with your PIN`, href: `${gateOf(e.snapshot.install.id, gate.id)}/sign` },
+    };
+  const left = items.filter((i) => i.reasons.length > 0);
+  if (result.stands) return { says: `${gate.name} stands signed`, note: result.until === null ? "Nothing is left to do here." : `Until ${e.facts.when(result.until)}.`, act: toBoard(e) };
+  if (!left.length) return waitingFoot(e, result, gate);
+  const mine = left.find((i) => i.confirm?.ok || i.accept?.ok) ?? left.find((i) => i.open) ?? left.find((i) => i.prove.numberMissing && i.enterNumber.ok);
+  const kinds = left.map((i) => `${i.no} ${i.nut === "second-eyes" ? "second eyes" : i.nut === "lapsed" ? "lapsed" : "to do"}`);
+  const says = `${count(left.length, "item")} left before ${result.state === "waiting" ? "it can be signed" : "anyone can sign"}`;
+  const note = kinds.length > 6 ? `${kinds.slice(0, 5).join(", ")} and ${kinds.length - 5} more` : kinds.join(", ");
+  if (!mine) return { says, note: `${left[0]?.reasons[0]?.who ? `Next: ${left[0].reasons[0].who}. ` : ""}${note}`, act: toBoard(e) };
+  const verb = mine.confirm?.ok ? "Look and confirm" : mine.accept?.ok ? "Accept or not" : mine.prove.numberMissing ? "Enter the number" : mine.nut === "lapsed" ? "Do again" : "Next";
+  return { says, note, act: { label: `${verb}: item ${mine.no}`, note: mine.words, href: `#${mine.anchor}` } };
+}
+
+function waitingFoot(e: Evaluation, result: GateResult, gate: Gate): FootView {
+  const [first] = result.blockers;
+  if (!gate.policy.length)
+    return { says: "No signatures of its own", note: "It is covered by the two signatures of the release.", act: toBoard(e) };
+  const who = first ? whoClears(e.snapshot, first.owner) : "";
+  return { says: first?.title ?? "Nothing for you here", note: first ? `${first.sentence}${who ? ` ${who}.` : ""}` : "", act: toBoard(e) };
+}
+
+const toBoard = (e: Evaluation): FootView["act"] => ({ label: "Back to the board", note: "what stops us, and what you can do", href: boardOf(e.snapshot.install.id) });

@@ -1,0 +1,78 @@
+/** The evaluator's states as the drawings know them, and short notes beside a valve. */
+import type { GateResult, GateState, ItemState } from "#app/lib/gates/result";
+import type { Instant, Snapshot } from "#app/lib/gates/snapshot";
+import { format } from "#app/lib/units/display";
+
+export type ValveState = "waiting" | "in-work" | "ready" | "half-signed" | "signed" | "lapsed";
+export type NutState = "todo" | "done" | "na" | "second-eyes" | "lapsed";
+
+const VALVES: Record<GateState, ValveState> = {
+  waiting: "waiting",
+  "in work": "in-work",
+  ready: "ready",
+  "half signed": "half-signed",
+  signed: "signed",
+  lapsed: "lapsed",
+};
+const NUTS: Record<ItemState, NutState> = {
+  "to do": "todo",
+  done: "done",
+  "not applicable": "na",
+  "second eyes": "second-eyes",
+  lapsed: "lapsed",
+};
+
+export const valveOf = (state: GateState): ValveState => VALVES[state];
+export const nutOf = (state: ItemState): NutState => NUTS[state];
+
+const dates = new Map<string, Intl.DateTimeFormat>();
+
+function parts(instant: Instant, timeZone: string): Record<string, string> {
+  let format = dates.get(timeZone);
+  if (!format) {
+    format = new Intl.DateTimeFormat("en-GB", {
+      timeZone,
+      year: "numeric",
+      month: "short",
+      day: "numeric",
+      hour: "2-digit",
+      minute: "2-digit",
+      hourCycle: "h23",
+    });
+    dates.set(timeZone, format);
+  }
+  return Object.fromEntries(format.formatToParts(instant).map((p) => [p.type, p.value]));
+}
+
+/** "08:20" on the day of `now`, else "24 Nov": for the few signs beside a valve, whose full name says the zone. */
+export function dayOrTime(instant: Instant, now: Instant, timeZone: string): string {
+  const then = parts(instant, timeZone);
+  const today = parts(now, timeZone);
+  const same = then.day === today.day && then.month === today.month && then.year === today.year;
+  return same ? `${then.hour}:${then.minute}` : `${then.day} ${then.month}`;
+}
+
+/** Prerequisites that do not stand. */
+export const waitsFor = (gates: Record<string, GateResult>, gate: GateResult): string[] =>
+  gate.prerequisites.filter((id) => !gates[id]?.stands);
+
+/** Beside the valve, at most 13 signs. */
+export function noteOf(snapshot: Snapshot, gates: Record<string, GateResult>, gate: GateResult, now: Instant): string {
+  switch (gate.state) {
+    case "signed": {
+      const last = snapshot.signatures.find((s) => s.id === gate.holding.at(-1));
+      return last ? `signed ${dayOrTime(last.recorded, now, snapshot.install.timeZone)}` : "signed";
+    }
+    case "waiting":
+      return `waits for ${waitsFor(gates, gate).length}`;
+    case "in work":
+      return gate.done ? `${gate.done} of ${gate.of} done` : "not begun";
+    case "ready":
+      return "ready to sign";
+    default:
+      return gate.state;
+  }
+}
+
+/** "1,375 rpm" from crankshaft revolutions per second. */
+export const rpmText = (rotation: number): string => format("rotation", rotation, "si").text.replace(/(\d)(?=(\d{3})+\b)/g, "$1,");

@@ -1,0 +1,76 @@
+import { Link } from "react-router";
+import { Answer } from "#app/components/board/Answer";
+import { CrewBoard } from "#app/components/board/CrewBoard";
+import { Now } from "#app/components/board/Now";
+import { StopList } from "#app/components/board/StopList";
+import { useBoardWatch } from "#app/components/board/useBoardWatch";
+import { Line } from "#app/components/line/Line";
+import { ClearanceBars } from "#app/components/ui/ClearanceBars";
+import { installContext } from "#app/lib/http/install.server";
+import { boardView } from "#app/lib/views/board";
+import { boardAnswer, tagOf } from "#app/lib/views/board-answer";
+import { boardOf } from "#app/lib/views/places";
+import type { Route } from "./+types/_app.installs.$installId._index";
+
+export const meta: Route.MetaFunction = ({ loaderData }) => [
+  { title: loaderData ? `${loaderData.view.answer.title} · ${loaderData.registration}` : "Bladecount" },
+];
+
+export function loader({ context, url }: Route.LoaderArgs) {
+  const { e, me, head, installId, snapshot } = context.get(installContext);
+  return {
+    registration: snapshot.install.registration,
+    home: boardOf(installId),
+    view: boardView(e, me),
+    whole: url.searchParams.has("whole"),
+    watch: { address: `/api/v1/installs/${installId}/board`, tag: tagOf(boardAnswer(e, head)) },
+  };
+}
+
+export default function Board({ loaderData }: Route.ComponentProps) {
+  const { view, home, whole, watch } = loaderData;
+  useBoardWatch(watch.address, watch.tag);
+  const { answer, stops, line, acts, clearance, crew } = view;
+  const short = crew !== null && !whole;
+  const records = [
+    { label: "Opening", href: `${home}/openings` },
+    { label: "Loose end", href: `${home}/loose-ends` },
+    { label: "Finding", href: `${home}/findings` },
+  ];
+  return (
+    <main id="main">
+      <section className="board-top" aria-label="Where it stands">
+        <Answer {...answer} />
+        <div className="board-stops">
+          <StopList stops={stops} most={short ? 1 : 3} nothing={answer.then ?? "Nothing stops it."} />
+        </div>
+      </section>
+      {short ? (
+        <>
+          <CrewBoard {...crew} />
+          <Now acts={acts} nothing="Nothing is asked of you now." records={records} />
+          <p className="board-whole">
+            <Link to={`${home}?whole`}>See the whole board</Link>
+          </p>
+        </>
+      ) : (
+        <>
+          <Line {...line} />
+          <Now acts={acts} nothing="Nothing waits for you here. What others do shows above as it happens." records={records} />
+          {clearance && (
+            <section className="board-clearance" aria-labelledby="clearance-title">
+              <h2 id="clearance-title">
+                Clearance: <b className="fig">{clearance.rpm}</b>
+              </h2>
+              <p>
+                Crankshaft speed. The least of these binds: {clearance.binds}. The maker’s manual, the local rules and licensed judgement come before
+                this figure.
+              </p>
+              <ClearanceBars limits={clearance.limits} />
+            </section>
+          )}
+        </>
+      )}
+    </main>
+  );
+}

@@ -1,0 +1,20 @@
+import { defineConfig } from "@playwright/test";
+
+const port = Number(process.env.E2E_PORT ?? 3200);
+
+export default defineConfig({
+  testDir: "./tests/e2e",
+  outputDir: "./test-results/browser",
+  globalSetup: "./tests/e2e/start-instance.ts",
+  // The tests share one instance and one database file.
+  workers: 1,
+  fullyParallel: false,
+  reporter: [["list"]],
+  use: {
+    baseURL: `http://127.0.0.1:${port}`,
+    browserName: "chromium",
+    screenshot: "off",
+    trace: "off",
+    launchOptions: { executablePath: process.env.CHROMIUM ?? "/usr/bin/chromium", args: ["--no-sandbox", "--disable-dev-shm-usage"] },
+  },
+});
