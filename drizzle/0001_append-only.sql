@@ -284,3 +284,172 @@ WHEN NEW.`seq` IS NOT (SELECT coalesce(max(`seq`), 0) + 1 FROM `events` WHERE `i
 BEGIN
   SELECT RAISE(ABORT, 'events: the chain goes on from its newest line');
 END;
+--> statement-breakpoint
+-- REPLACE takes a row away without asking the triggers of DELETE.
+CREATE TRIGGER `proofs_no_replace` BEFORE INSERT ON `proofs`
+WHEN EXISTS (SELECT 1 FROM `proofs` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'proofs: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `confirmations_no_replace` BEFORE INSERT ON `confirmations`
+WHEN EXISTS (SELECT 1 FROM `confirmations` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'confirmations: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `acceptances_no_replace` BEFORE INSERT ON `acceptances`
+WHEN EXISTS (SELECT 1 FROM `acceptances` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'acceptances: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `keeps_no_replace` BEFORE INSERT ON `keeps`
+WHEN EXISTS (SELECT 1 FROM `keeps` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'keeps: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `proof_withdrawals_no_replace` BEFORE INSERT ON `proof_withdrawals`
+WHEN EXISTS (SELECT 1 FROM `proof_withdrawals` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`) OR (`proof_id` = NEW.`proof_id`))
+BEGIN
+  SELECT RAISE(ABORT, 'proof_withdrawals: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `signatures_no_replace` BEFORE INSERT ON `signatures`
+WHEN EXISTS (SELECT 1 FROM `signatures` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'signatures: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `signature_withdrawals_no_replace` BEFORE INSERT ON `signature_withdrawals`
+WHEN EXISTS (SELECT 1 FROM `signature_withdrawals` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`) OR (`signature_id` = NEW.`signature_id`))
+BEGIN
+  SELECT RAISE(ABORT, 'signature_withdrawals: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `release_signatures_no_replace` BEFORE INSERT ON `release_signatures`
+WHEN EXISTS (SELECT 1 FROM `release_signatures` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'release_signatures: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `release_signature_withdrawals_no_replace` BEFORE INSERT ON `release_signature_withdrawals`
+WHEN EXISTS (SELECT 1 FROM `release_signature_withdrawals` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`) OR (`signature_id` = NEW.`signature_id`))
+BEGIN
+  SELECT RAISE(ABORT, 'release_signature_withdrawals: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `openings_no_replace` BEFORE INSERT ON `openings`
+WHEN EXISTS (SELECT 1 FROM `openings` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'openings: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `opening_closings_no_replace` BEFORE INSERT ON `opening_closings`
+WHEN EXISTS (SELECT 1 FROM `opening_closings` WHERE (`id` = NEW.`id`) OR (`opening_id` = NEW.`opening_id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'opening_closings: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `opening_mistakes_no_replace` BEFORE INSERT ON `opening_mistakes`
+WHEN EXISTS (SELECT 1 FROM `opening_mistakes` WHERE (`id` = NEW.`id`) OR (`opening_id` = NEW.`opening_id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'opening_mistakes: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `loose_ends_no_replace` BEFORE INSERT ON `loose_ends`
+WHEN EXISTS (SELECT 1 FROM `loose_ends` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'loose_ends: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `loose_end_events_no_replace` BEFORE INSERT ON `loose_end_events`
+WHEN EXISTS (SELECT 1 FROM `loose_end_events` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'loose_end_events: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `findings_no_replace` BEFORE INSERT ON `findings`
+WHEN EXISTS (SELECT 1 FROM `findings` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'findings: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `finding_events_no_replace` BEFORE INSERT ON `finding_events`
+WHEN EXISTS (SELECT 1 FROM `finding_events` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'finding_events: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `tool_checks_no_replace` BEFORE INSERT ON `tool_checks`
+WHEN EXISTS (SELECT 1 FROM `tool_checks` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'tool_checks: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `extinguisher_checks_no_replace` BEFORE INSERT ON `extinguisher_checks`
+WHEN EXISTS (SELECT 1 FROM `extinguisher_checks` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'extinguisher_checks: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `rung_events_no_replace` BEFORE INSERT ON `rung_events`
+WHEN EXISTS (SELECT 1 FROM `rung_events` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'rung_events: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `plan_versions_no_replace` BEFORE INSERT ON `plan_versions`
+WHEN EXISTS (SELECT 1 FROM `plan_versions` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`) OR (`run_id` = NEW.`run_id` AND `version` = NEW.`version`))
+BEGIN
+  SELECT RAISE(ABORT, 'plan_versions: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `acks_no_replace` BEFORE INSERT ON `acks`
+WHEN EXISTS (SELECT 1 FROM `acks` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'acks: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `answers_no_replace` BEFORE INSERT ON `answers`
+WHEN EXISTS (SELECT 1 FROM `answers` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'answers: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `winds_no_replace` BEFORE INSERT ON `winds`
+WHEN EXISTS (SELECT 1 FROM `winds` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'winds: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `run_acts_no_replace` BEFORE INSERT ON `run_acts`
+WHEN EXISTS (SELECT 1 FROM `run_acts` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'run_acts: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `exceedances_no_replace` BEFORE INSERT ON `exceedances`
+WHEN EXISTS (SELECT 1 FROM `exceedances` WHERE (`id` = NEW.`id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'exceedances: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `exceedance_answers_no_replace` BEFORE INSERT ON `exceedance_answers`
+WHEN EXISTS (SELECT 1 FROM `exceedance_answers` WHERE (`id` = NEW.`id`) OR (`exceedance_id` = NEW.`exceedance_id`) OR (`install_id` = NEW.`install_id` AND `seq` = NEW.`seq`))
+BEGIN
+  SELECT RAISE(ABORT, 'exceedance_answers: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `files_no_replace` BEFORE INSERT ON `files`
+WHEN EXISTS (SELECT 1 FROM `files` WHERE (`id` = NEW.`id`))
+BEGIN
+  SELECT RAISE(ABORT, 'files: records are append-only');
+END;
+--> statement-breakpoint
+CREATE TRIGGER `commands_no_replace` BEFORE INSERT ON `commands`
+WHEN EXISTS (SELECT 1 FROM `commands` WHERE (`id` = NEW.`id`))
+BEGIN
+  SELECT RAISE(ABORT, 'commands: records are append-only');
+END;

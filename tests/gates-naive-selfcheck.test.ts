@@ -2,8 +2,10 @@
 import { describe, expect, test } from "vitest";
 import { evaluateBoard } from "#app/lib/gates/evaluate";
 import type { Snapshot } from "#app/lib/gates/snapshot";
+import type { Board } from "./support/board";
 import { essenceOf, type NaiveBoard, naive } from "./support/naive-evaluator";
-import { type Board, HOUR, makeBoard, measure, signAll, TICK, torque } from "./support/snapshots";
+import { HOUR, measure, TICK, torque } from "./support/parts";
+import { makeBoard, signAll } from "./support/snapshots";
 
 const ours = (snapshot: Snapshot, at: number): NaiveBoard => essenceOf(evaluateBoard(snapshot, at));
 const EVALUATORS = [
@@ -194,6 +196,10 @@ describe.each(EVALUATORS)("the $name evaluator", ({ evaluate }) => {
       items: { flow: { state: "lapsed" }, oil: { state: "done" } },
       gates: { fs: { state: "ready" }, fp: { state: "lapsed" } },
     });
+    const again = board.current("tank");
+    if (again) board.withdraw(again);
+    expect(look(board).items.flow?.state, "taking the newer proof back makes nothing stand").toBe("lapsed");
+    board.proof("tank");
     board.keep(board.current("flow")?.id ?? "");
     expect(look(board).items.flow?.state, "kept at the same instant").toBe("lapsed");
     board.wait().keep(board.current("flow")?.id ?? "");

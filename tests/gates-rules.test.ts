@@ -1,8 +1,9 @@
 /** The rules of a proof, a gate, a run and the release, one example each, written from the rules themselves. */
 import { describe, expect, test } from "vitest";
 import { evaluateBoard, withOpening } from "#app/lib/gates/evaluate";
-import type { Board } from "./support/snapshots.ts";
-import { HOUR, makeBoard, measure, signAll, TICK, torque } from "./support/snapshots.ts";
+import type { Board } from "./support/board.ts";
+import { HOUR, measure, TICK, torque } from "./support/parts.ts";
+import { makeBoard, signAll } from "./support/snapshots.ts";
 
 const at = (board: Board) => evaluateBoard(board.s, board.now);
 const item = (board: Board, id: string) => at(board).items[id];

@@ -35,7 +35,7 @@ export default function Install({ loaderData }: Route.ComponentProps) {
         navLabel="Install"
         links={links.map((link) => ({ ...link, current: under(link.href) }))}
         person={person}
-        position={role}
+        role={role}
         saved={asOf}
       />
       <Outlet />

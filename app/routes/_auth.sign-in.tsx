@@ -1,6 +1,6 @@
 import { getFormProps, useForm } from "@conform-to/react";
 import { parseWithZod } from "@conform-to/zod/v4";
-import { data, Form, Link, redirect, useNavigation } from "react-router";
+import { data, Form, redirect, useNavigation } from "react-router";
 import type { z } from "zod";
 import { ErrorSummary } from "#app/components/forms/ErrorSummary";
 import { PasswordInput } from "#app/components/forms/PasswordInput";
@@ -80,9 +80,6 @@ export default function SignIn({ loaderData, actionData }: Route.ComponentProps)
           Sign in
         </Fitting>
       </Form>
-      <p className="mt-4">
-        <Link to="/forgot-password">Forgot the password</Link>
-      </p>
       <p className="mt-3 text-note text-ink-2">
         Your signing PIN is asked for later, each time that you sign. This product never replaces the maker’s manual, your authority’s rules
         or a licensed person’s judgement.

@@ -5,10 +5,12 @@
 import fc from "fast-check";
 import type { Gate, Instant, Item, Snapshot } from "#app/lib/gates/snapshot";
 import type { RequiredBy, SystemKey, Validity } from "#app/lib/template/types";
+import { Board } from "./board";
 import { type Dice, diceFrom } from "./dice";
 import { disturb } from "./disturbances";
+import { measure, TICK, tick, torque } from "./parts";
 import { sheetPart } from "./sheets";
-import { Board, measure, signAll, TICK, tick, torque } from "./snapshots";
+import { signAll } from "./snapshots";
 
 export interface Scene {
   snapshot: Snapshot;
@@ -36,7 +38,7 @@ function addItems(dice: Dice, board: Board, gate: string, more: Partial<Item> = 
   const withStep = count >= 3 && dice.chance(45);
   for (let n = 0; n < count; n++) {
     const isStep = withStep && n === 0;
-    const parts = isStep || n === count - 1 ? [tick] : [dice.one([tick, tick, measure(), torque(), sheetPart])];
+    const parts = isStep || n === count - 1 ? [tick] : [dice.chance(8) ? sheetPart : dice.one([tick, tick, measure(), torque()])];
     const follows = own.filter((i) => (withStep && i.step !== null && n < count - 1) || dice.chance(25)).map((i) => i.id);
     const item = board.item(`${gate}-${n + 1}`, gate, {
       parts,

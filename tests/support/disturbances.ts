@@ -3,9 +3,10 @@
  * instant of the one before.
  */
 import type { Item, Proof, Run } from "#app/lib/gates/snapshot";
+import type { Board } from "./board";
 import type { Dice } from "./dice";
+import { passing, TICK } from "./parts";
 import { restraintEvidence } from "./sheets";
-import { type Board, passing, TICK } from "./snapshots";
 
 const SYSTEMS = ["oil", "fueleng", "ign", "bay", "prop"] as const;
 const PEOPLE = [

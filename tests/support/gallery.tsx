@@ -125,7 +125,7 @@ const Parts = () => (
     >
       What others did since 14:10 is not in the picture.
     </Notice>
-    <section className="grid gap-4 p-6">
+    <section className="grid grid-cols-1 gap-4 p-6">
       <ul className="flex flex-wrap gap-x-8 gap-y-4">
         {VALVES.map((state) => (
           <li key={state} className="flex items-center gap-3">

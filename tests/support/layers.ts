@@ -5,7 +5,7 @@ export type SourceFile = { path: string; text: string };
 const lib = (...names: string[]) => names.map((name) => `lib/${name}/`);
 const base = ["lib/clock", "lib/ids", "lib/env.server", "lib/log.server"];
 const pure = lib("units", "bench", "template", "gates", "runlog", "record", "schemas");
-const adapters = lib("auth", "mail", "storage", "pdf", "live", "http");
+const adapters = lib("auth", "mail", "storage", "pdf", "live");
 const purePackages = ["zod", "papaparse", "csv-parse", "@noble/hashes", "canonicalize", "simple-statistics"];
 
 type Layer = {
@@ -23,20 +23,25 @@ const serverOnly = /^(node:|drizzle-orm|@libsql|nodemailer|bcryptjs|pino|remix-a
 
 export const layers: Record<string, Layer> = {
   units: { where: lib("units"), app: lib("units"), packages: purePackages },
-  bench: { where: lib("bench"), app: lib("bench", "units"), packages: purePackages },
+  // Of the template the bench takes the types alone: which sheets there are, and the keys of an install's values.
+  bench: { where: lib("bench"), app: [...lib("bench", "units"), "lib/template/types"], packages: purePackages },
   template: { where: lib("template"), app: lib("template", "bench", "units"), packages: purePackages },
   gates: { where: lib("gates"), app: lib("gates", "template", "bench", "units"), packages: purePackages },
   runlog: { where: lib("runlog"), app: lib("runlog", "units"), packages: purePackages },
   record: { where: lib("record"), app: lib("record", "gates", "runlog", "template", "bench", "units"), packages: purePackages },
   schemas: { where: lib("schemas"), app: pure, packages: purePackages },
+  // View models: from an evaluation to what a page or a mail shows. Pure; they know how places are addressed, not how they are drawn.
+  views: { where: lib("views"), app: [...lib("views"), "components/line/types", "components/ui/states", ...pure], packages: purePackages },
+  // What routes share: the request's context, and services' outcomes as responses.
+  http: { where: lib("http"), app: [...lib("http", "auth", "services", "views"), "db/queries/", "db/client.server", ...pure, ...base] },
   base: { where: base, app: base, not: routing },
   "db schema": { where: ["db/schema/"], app: ["db/schema/", ...pure], packages: ["drizzle-orm"] },
   "db queries": { where: ["db/queries/"], app: ["db/schema/", "db/client.server", "db/queries/", ...pure], packages: ["drizzle-orm"] },
   seed: { where: ["db/seed"], app: ["db/", "lib/"], not: routing },
   db: { where: ["db/"], app: ["db/schema/", "db/client.server", ...base], not: routing },
   services: { where: lib("services"), app: [...lib("services", "auth", "mail", "storage"), "db/", ...pure, ...base], not: routing },
-  adapters: { where: adapters, app: [...adapters, "db/", ...pure, ...base] },
-  components: { where: ["components/"], app: ["components/", ...pure], not: serverOnly },
+  adapters: { where: adapters, app: [...adapters, "lib/http/", "db/", ...pure, ...base] },
+  components: { where: ["components/"], app: ["components/", ...lib("views"), ...pure], not: serverOnly },
   routes: { where: ["routes/", "root", "entry.", "routes.ts"], app: [""] },
 };
 
@@ -91,7 +96,7 @@ type Habit = { in: RegExp; except?: RegExp; pattern: RegExp; why: string };
 
 const routeExports =
   /^(default|meta|links|loader|clientLoader|action|clientAction|middleware|clientMiddleware|headers|handle|shouldRevalidate|HydrateFallback|ErrorBoundary)$/;
-const pureFolders = /^app\/lib\/(units|bench|template|gates|runlog|record|schemas)\//;
+const pureFolders = /^app\/lib\/(units|bench|template|gates|runlog|record|schemas|views)\//;
 
 const habits: Habit[] = [
   { in: /^app\/routes\/.*\.(test|spec)\./, pattern: /^/, why: "a test in the routes folder becomes a route; move it to tests/" },

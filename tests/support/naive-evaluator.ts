@@ -4,13 +4,27 @@
  */
 import { computeSheet } from "#app/lib/bench/sheet";
 import type { BoardResult } from "#app/lib/gates/result";
-import type { Cover, Gate, Instant, Proof, Run, Signature, Snapshot } from "#app/lib/gates/snapshot";
+import type { Cover, Gate, Instant, Item, Proof, Run, Signature, Snapshot } from "#app/lib/gates/snapshot";
 import type { SigningRole } from "#app/lib/template/types";
+import { allConfirmed, looseEndAccepted, noOpeningSinceRun } from "./naive-computed";
 import { installValue, proofsInOrder } from "./naive-evidence";
 import {
-  allConfirmed, bySeq, endOf, heldRole, isComputed, isPresent, isScrubbed, isSettled, isStarted, itemsOf, logIsDealtWith, looseEndAccepted,
-  type NaiveItem, naiveItem, newestAct, newestPlan, noOpeningSinceRun, prerequisitesOf, presentGates, requiredGates,
-} from "./naive-items"; // biome-ignore format: a list of names
+  bySeq,
+  endOf,
+  heldRole,
+  isComputed,
+  isPresent,
+  isScrubbed,
+  isSettled,
+  isStarted,
+  itemsOf,
+  logIsDealtWith,
+  newestAct,
+  newestPlan,
+  presentGates,
+  requiredGates,
+} from "./naive-facts";
+import { type NaiveItem, naiveItem, prerequisitesOf } from "./naive-items";
 
 export interface NaiveBoard {
   items: Record<string, NaiveItem>;
@@ -126,20 +140,22 @@ function runState(s: Snapshot, run: Run, at: Instant): string {
   return last.act === "go" && at < last.ends ? "called" : "held";
 }
 
+/** Cap of the restraint sheet at this place of the item's evidence; 0 where it does not stand, or there is none. */
+function sheetCap(s: Snapshot, item: Item, part: number, at: Instant): number {
+  const evidence = proofsInOrder(s, item.id).at(-1)?.evidence[part];
+  if (naiveItem(s, item, at).state !== "done" || evidence?.kind !== "sheet") return 0;
+  const computed = computeSheet("restraint", evidence.inputs);
+  return computed.ok ? (computed.result.cap ?? Number.POSITIVE_INFINITY) : 0;
+}
+
 function clearanceOf(s: Snapshot, run: Run, at: Instant): number {
   const planned = newestPlan(run)?.rpm ?? s.rungs.find((r) => r.key === run.rung)?.rpm ?? 0;
   const caps = [planned, installValue(s, "redline") ?? 0];
   for (const f of s.findings) if (f.severity === "limiting" && !f.closed) caps.push(f.cap ?? 0);
   for (const item of requiredGates(s, run).flatMap((g) => itemsOf(s, g))) {
-    item.parts.forEach((part, i) => {
-      if (part.kind !== "sheet" || part.sheet !== "restraint") return;
-      const found = naiveItem(s, item, at);
-      const evidence = proofsInOrder(s, item.id).at(-1)?.evidence[i];
-      // Not applicable: there is no sheet, so none stands.
-      if (found.state !== "done" || evidence?.kind !== "sheet") return caps.push(0);
-      const computed = computeSheet("restraint", evidence.inputs);
-      return caps.push(computed.ok ? (computed.result.cap ?? Number.POSITIVE_INFINITY) : 0);
-    });
+    for (const [i, part] of item.parts.entries()) {
+      if (part.kind === "sheet" && part.sheet === "restraint") caps.push(sheetCap(s, item, i, at));
+    }
   }
   return Math.min(...caps);
 }

@@ -2,93 +2,26 @@
  * The rules for gates' items and proofs once more, line by line, for the second evaluator. No caches: every question is answered
  * from the snapshot by plain loops; `path` guards against circles only.
  */
-import type { Gate, Instant, Item, Proof, Role, Run, RunAct, Snapshot } from "#app/lib/gates/snapshot";
-import type { ComputedRule } from "#app/lib/template/types";
+import type { Gate, Instant, Item, Proof, Role, Snapshot } from "#app/lib/gates/snapshot";
+import { computedHolds } from "./naive-computed";
 import { evidenceMeets, proofsInOrder } from "./naive-evidence";
+import {
+  endOf,
+  heldRole,
+  isComputed,
+  isSettled,
+  itemsOf,
+  newestAct,
+  nextRequired,
+  presentGates,
+  settlingRuns,
+  throughAbsent,
+} from "./naive-facts";
 
 export type NaiveItem = { stands: boolean; state: "to do" | "done" | "not applicable" | "second eyes" | "lapsed" };
 
 const HOUR = 3_600_000;
-export const FIVE_POUNDS = 5 * 0.45359237;
-
-export const bySeq = <T extends { seq: number }>(list: T[]): T[] => [...list].sort((a, b) => a.seq - b.seq);
-
-export function heldRole(s: Snapshot, member: string, roles: Role[], at: Instant): boolean {
-  const roleNow = s.members.find((m) => m.id === member)?.roles.filter((r) => r.from <= at && (r.to === null || at < r.to)) ?? [];
-  return roleNow.some((r) => roles.includes(r.role));
-}
-
-// ---------------------------------------------------------------- what is on the board
-
-export const itemsOf = (s: Snapshot, gate: Gate): Item[] => s.items.filter((i) => i.gate === gate.id && !i.hidden);
-export const isPresent = (s: Snapshot, gate: Gate): boolean => !gate.hidden && itemsOf(s, gate).length > 0;
-export const presentGates = (s: Snapshot): Gate[] => s.gates.filter((g) => isPresent(s, g));
-export const isComputed = (item: Item): boolean => item.parts.some((p) => p.kind === "computed");
 const shares = (a: Item, b: Item): boolean => a.systems.some((system) => b.systems.includes(system));
-
-/** Gates at the far end of these edges: an absent gate passes them on to whatever it needs or comes after. */
-export function throughAbsent(s: Snapshot, ids: string[], path: string[] = []): string[] {
-  const found: string[] = [];
-  for (const id of ids) {
-    const gate = s.gates.find((g) => g.id === id);
-    if (!gate || path.includes(id)) continue;
-    if (isPresent(s, gate)) found.push(id);
-    else found.push(...throughAbsent(s, [...gate.needs, ...gate.after], [...path, id]));
-  }
-  return [...new Set(found)];
-}
-
-// ---------------------------------------------------------------- runs, as far as proofs ask for them
-
-type Act<K extends RunAct["act"]> = Extract<RunAct, { act: K }>;
-
-export function newestAct<K extends RunAct["act"]>(run: Run, ...kinds: K[]): Act<K> | null {
-  return (
-    (bySeq(run.acts)
-      .filter((a) => (kinds as string[]).includes(a.act))
-      .at(-1) as Act<K> | undefined) ?? null
-  );
-}
-export const isStarted = (run: Run): boolean => newestAct(run, "start", "take-back")?.act === "start";
-export const endOf = (run: Run): Instant | null => (isStarted(run) ? (newestAct(run, "ended")?.at ?? null) : null);
-export const isScrubbed = (run: Run): boolean => !isStarted(run) && newestAct(run, "scrub") !== null;
-export const newestPlan = (run: Run) => [...run.plans].sort((a, b) => a.version - b.version).at(-1) ?? null;
-
-export function settlingRuns(s: Snapshot, key: string): Run[] {
-  const rung = s.rungs.find((r) => r.key === key);
-  if (!rung) return [];
-  return s.runs
-    .filter((run) => {
-      const [plan, end] = [newestPlan(run), endOf(run)];
-      if (run.rung !== key || plan === null || end === null || rung.rpm === null) return false;
-      const completed = newestAct(run, "outcome")?.outcome === "completed";
-      return completed && plan.rpm >= rung.rpm && rung.setBack.every((b) => end > b.recorded);
-    })
-    .sort((a, b) => (endOf(a) ?? 0) - (endOf(b) ?? 0));
-}
-export function isSettled(s: Snapshot, key: string): boolean {
-  return s.rungs.some((r) => r.key === key && r.leftOut !== null) || settlingRuns(s, key).length > 0;
-}
-export const nextRung = (s: Snapshot) => [...s.rungs].sort((a, b) => a.order - b.order).find((r) => !isSettled(s, r.key)) ?? null;
-
-export function defaultGates(s: Snapshot, rung: string | null): Gate[] {
-  return presentGates(s).filter(
-    ({ requiredBy: r }) => r.kind === "runs-and-release" || r.kind === "runs" || (r.kind === "rung-and-release" && r.rung === rung),
-  );
-}
-export function requiredGates(s: Snapshot, run: Run): Gate[] {
-  const plan = newestPlan(run);
-  return plan === null ? defaultGates(s, run.rung) : presentGates(s).filter((g) => plan.requiredGates.includes(g.id));
-}
-/** What the next run requires: the plans of the runs of the next rung that are neither ended nor scrubbed, else the default. */
-export function nextRequired(s: Snapshot): Gate[] {
-  const rung = nextRung(s);
-  const open = s.runs.filter((r) => rung !== null && r.rung === rung.key && endOf(r) === null && !isScrubbed(r) && newestPlan(r) !== null);
-  return open.length > 0 ? open.flatMap((run) => requiredGates(s, run)) : defaultGates(s, rung?.key ?? null);
-}
-export const logIsDealtWith = (run: Run): boolean =>
-  run.acts.some((a) => a.act === "log-read" || (a.act === "no-log" && a.as === "inspector")) &&
-  run.exceedances.every((e) => e.answered !== null);
 
 // ---------------------------------------------------------------- rules 2 to 5
 
@@ -189,7 +122,8 @@ function afterHolds(s: Snapshot, gate: Gate, item: Item, proof: Proof): boolean 
     for (const other of there ? itemsOf(s, there) : []) {
       if (other.step || isComputed(other) || !shares(item, other)) continue;
       const current = proofsInOrder(s, other.id).at(-1);
-      if (current && !current.withdrawn && current.state !== "na" && current.counts >= mine) return false;
+      // Withdrawn or not: taking the newer proof back must not make the older one here stand.
+      if (current && current.state !== "na" && current.counts >= mine) return false;
     }
   }
   return true;
@@ -227,60 +161,6 @@ export function prerequisitesOf(s: Snapshot, gate: Gate): string[] {
 }
 
 // ---------------------------------------------------------------- an item
-
-function ruleHolds(s: Snapshot, rule: ComputedRule, gate: Gate, at: Instant): boolean {
-  switch (rule) {
-    case "extinguishers":
-      return extinguishersHold(s, at);
-    case "loose-ends":
-      return s.looseEnds.every((l) => l.confirmed !== null || looseEndAccepted(s, l, nextRung(s)?.key ?? null));
-    case "log": {
-      const look = gate.lookBack;
-      const run = look?.kind === "run" ? s.runs.find((r) => r.id === look.run) : look ? settlingRuns(s, look.rung).at(-1) : undefined;
-      return run !== undefined && endOf(run) !== null && logIsDealtWith(run);
-    }
-    case "release-record":
-      return s.findings.every((f) => f.closed) && s.looseEnds.every((l) => l.confirmed) && allConfirmed(s);
-    case "release-openings":
-      return noOpeningSinceRun(s);
-  }
-}
-const computedHolds = (s: Snapshot, gate: Gate, item: Item, at: Instant): boolean =>
-  item.parts.every((part) => part.kind !== "computed" || ruleHolds(s, part.rule, gate, at));
-
-function extinguishersHold(s: Snapshot, at: Instant): boolean {
-  const fit = s.extinguishers.filter(
-    (e) =>
-      !e.withdrawn && e.classB && e.agent !== "water" && e.lookDue !== null && at < e.lookDue && e.serviceDue !== null && at < e.serviceDue,
-  );
-  return fit.length >= 2 && fit.some((e) => e.agent === "clean" || (e.agent === "co2" && e.charge >= FIVE_POUNDS));
-}
-
-/** Accepted for this rung; from its due rung on it cannot be. */
-export function looseEndAccepted(s: Snapshot, end: Snapshot["looseEnds"][number], rungKey: string | null): boolean {
-  const { due } = end;
-  const order = (key: string | null) => s.rungs.find((r) => r.key === key)?.order ?? Number.POSITIVE_INFINITY;
-  if (due.kind === "rung" && order(rungKey) >= order(due.rung)) return false;
-  return end.accepted.some((a) => a.rung === rungKey && a.as === "inspector");
-}
-
-export function allConfirmed(s: Snapshot): boolean {
-  const limits = s.values.filter((v) => v.limit).every((v) => v.value !== null && v.source !== null);
-  const killers = presentGates(s)
-    .flatMap((g) => itemsOf(s, g))
-    .filter((i) => i.killer);
-  const bands = killers.flatMap((i) => i.parts).flatMap((p) => (p.kind === "measure" || p.kind === "torque" ? [p.criterion] : []));
-  return limits && bands.every((c) => c.source !== null);
-}
-
-const AFTER_RUN_SYSTEMS: string[] = ["fuelsup", "fueleng", "oil", "oilfill", "coolant", "drive", "prop"];
-
-export function noOpeningSinceRun(s: Snapshot): boolean {
-  const newest = Math.max(...s.runs.map((r) => endOf(r) ?? Number.NEGATIVE_INFINITY));
-  const count = s.openings.filter((o) => o.mistake === null && o.systems.some((system) => AFTER_RUN_SYSTEMS.includes(system)));
-  return count.every((o) => o.closed !== null && o.closed < newest);
-}
-
 /** State of one item at `at`: rules 1 to 8, in their order. */
 export function naiveItem(s: Snapshot, item: Item, at: Instant, path: string[] = []): NaiveItem {
   const gate = s.gates.find((g) => g.id === item.gate);

@@ -1,11 +1,13 @@
 // An invented install on a real database file, worked through the services as its people would: nothing is written past them.
 // Lio leads, Bea and Tom build, Ines inspects, Cal is crew; Olga belongs to another install.
-import { database, db, write } from "#app/db/client.server";
+import { copyFileSync } from "node:fs";
+import { fileURLToPath } from "node:url";
+import { database, db, openDatabase, setDatabase, write } from "#app/db/client.server";
 import { boardNow } from "#app/db/queries/board-now.server";
 import { users } from "#app/db/schema/users";
 import { hashPin } from "#app/lib/auth/pin.server";
 import { SHEET_VERSIONS, valuesTaken } from "#app/lib/bench/sheet";
-import { now } from "#app/lib/clock";
+import { now, setClock } from "#app/lib/clock";
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import { bandInForce } from "#app/lib/gates/evidence";
 import type { Evidence, Item, Role } from "#app/lib/gates/snapshot";
@@ -25,8 +27,7 @@ import { storePhoto } from "#app/lib/services/store-photo.server";
 import { presetPageTwo } from "#app/lib/template/traits";
 import type { Part, SheetKey, ValueKey } from "#app/lib/template/types";
 import { toSI } from "#app/lib/units/convert";
-import { handClock } from "./clock";
-import { freshDatabase } from "./db";
+import { emptyDatabaseUrl, freshDatabase } from "./db";
 import { png } from "./picture";
 
 export const PIN = "271828";
@@ -70,8 +71,17 @@ export type Workshop = Awaited<ReturnType<typeof workshop>>;
 
 /** A new install with its people on a fresh database, and hands to work it. */
 export async function workshop() {
-  const file = await freshDatabase();
-  const clock = handClock(Date.UTC(2026, 11, 3, 7, 0));
+  await freshDatabase();
+  // Hours pass only by hand.
+  let turned = 0;
+  const start = Date.UTC(2026, 11, 3, 7, 0);
+  const before = setClock({ now: () => start + turned });
+  const clock = {
+    add: (ms: number) => {
+      turned += ms;
+    },
+    stop: () => setClock(before),
+  };
   const pinHash = await hashPin(PIN);
   await write(async (tx) => {
     for (const id of PEOPLE)
@@ -89,9 +99,9 @@ export async function workshop() {
   clock.add(MINUTE);
 
   async function board(): Promise<Evaluation> {
-    const e = await boardNow(database().db, installId, now());
-    if (!e) throw new Error("No board");
-    return e;
+    const found = await boardNow(database().db, installId, now());
+    if (!found) throw new Error("No board");
+    return found.e;
   }
   async function gate(key: string) {
     const e = await board();
@@ -226,10 +236,23 @@ export async function workshop() {
     }
   }
 
+  /** Keeps the database and the hour as they are; what it returns goes back there, on a copy, as often as it is called. */
+  async function save(): Promise<() => void> {
+    const url = emptyDatabaseUrl();
+    const hour = now();
+    await database().client.execute({ sql: "VACUUM INTO ?", args: [fileURLToPath(url)] });
+    return () => {
+      const copy = emptyDatabaseUrl();
+      copyFileSync(fileURLToPath(url), fileURLToPath(copy));
+      setDatabase(openDatabase(copy));
+      setClock({ now: () => hour + turned });
+      turned = 0;
+    };
+  }
+
   return {
-    ...{ file, clock, installId, otherInstall: other.install, leftOut: made.leftOut, db },
-    ...{ act, board, gate, item, confirmValues, enterNumbers, stockCrib },
-    ...{ proofInput, prove, proveGate, sign, signBoth, sheetOf, readyForRun },
+    ...{ clock, installId, otherInstall: other.install, leftOut: made.leftOut, db, act, board, gate, item, save },
+    ...{ confirmValues, enterNumbers, stockCrib, proofInput, prove, proveGate, sign, signBoth, sheetOf, readyForRun },
   };
 }
 

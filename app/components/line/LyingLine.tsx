@@ -30,7 +30,7 @@ export function LyingLine(props: LineProps & { label: string }) {
       {gates.map((drawn) => (
         <LyingGate key={drawn.gate.id} drawn={drawn} />
       ))}
-      <RunPipe ladder={ladder} x={x} width={width} blade={Math.min(104, width - x - 82)} />
+      <RunPipe ladder={ladder} x={x} width={width} blade={Math.min(104, width - x - 86)} />
     </svg>
   );
 }

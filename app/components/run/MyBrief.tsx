@@ -49,7 +49,7 @@ export function MyAnswer({ brief, commandId, errors }: { brief: BriefProps; comm
   return (
     <section aria-labelledby="answer" id="my-answer" className="flex flex-col gap-3">
       <h2 id="answer" className="text-h3">
-        {acknowledge ? "Read the card, then answer" : "Are you go?"}
+        {acknowledge ? "Read the card, then answer" : said.answer === "go" ? "You are go" : "Are you go?"}
       </h2>
       {read && (
         <p className="flex items-center gap-3">
@@ -63,7 +63,7 @@ export function MyAnswer({ brief, commandId, errors }: { brief: BriefProps; comm
           <Fitting
             size="act"
             reason={acknowledge.ok ? undefined : acknowledge.why}
-            note="the card above, my place, the abort words"
+            note="the card, my place, the abort words"
             className="w-full"
           >
             I have read card version {version}

@@ -29,7 +29,7 @@ export function RollCall({ title, entries, empty, stations, gear, pusher, wind }
       <h2 id="roll" className="text-h3">
         {title}
       </h2>
-      <ul className="mt-3 grid gap-x-6 tablet:grid-cols-2">
+      <ul className="mt-3">
         {entries.map((entry) => (
           <li key={entry.key} className="grid grid-cols-[44px_minmax(0,1fr)_auto] items-center gap-x-3 border-t border-line py-2">
             <StationMark letter={entry.letter} answer={entry.answer} />
@@ -38,7 +38,7 @@ export function RollCall({ title, entries, empty, stations, gear, pusher, wind }
               {entry.name}
               {entry.you && ", you"}
             </span>
-            <span className="max-w-[11ch] text-right leading-tight">
+            <span className="text-right leading-tight">
               <b className={entry.answer === "go" ? "text-primer-ink" : entry.answer === "no-go" ? "text-stop-ink" : undefined}>
                 {entry.word}
               </b>

@@ -30,11 +30,7 @@ export function RunCardView({ version, cowl, begin, end, steps, calls, abort, le
             <Figure value={s.no} className="font-bold" />
             <b>
               {s.title}
-              {s.rpm && (
-                <>
-                  , <Figure value={s.rpm.replace(" rpm", "")} unit="rpm" />
-                </>
-              )}
+              {s.rpm && `, ${s.rpm}`}
             </b>
             <span>
               {s.hold && (
@@ -56,7 +52,7 @@ export function RunCardView({ version, cowl, begin, end, steps, calls, abort, le
           <AbortWords parts={abort} />
           {calls.length > 0 && (
             <details>
-              <summary className="flex min-h-hit items-center font-semibold text-fitting-ink">The calls and who answers</summary>
+              <summary className="min-h-hit py-3 font-semibold text-fitting-ink">The calls and who answers</summary>
               <table className="w-full">
                 <thead className="sr-only">
                   <tr>

@@ -43,6 +43,7 @@ export function RunTitle({ title, state, rungs, here, held = false }: RunTitlePr
           width={width}
           height="160"
           viewBox={`0 0 ${width} 160`}
+          aria-hidden="true"
         >
           {rungs.map((rung, i) => {
             const x = i * PITCH + PITCH / 2;
@@ -51,8 +52,8 @@ export function RunTitle({ title, state, rungs, here, held = false }: RunTitlePr
               <g key={rung.id}>
                 <g transform={`translate(${x} ${TOP})`}>
                   <Blade
-                    length={Math.max(26, 92 * Math.min(1, rung.share))}
-                    width={mine ? 25 : 19}
+                    length={Math.max(24, 68 * Math.min(1, rung.share))}
+                    width={mine ? 22 : 17}
                     state={mine && rung.state === "planned" ? "next" : rung.state}
                   />
                 </g>

@@ -31,7 +31,7 @@ export function FloorPlan({ stations, gear, pusher = false, wind, line = "line f
   return (
     <svg
       className={`floor-plan ${className ?? ""}`}
-      viewBox="0 0 572 440"
+      viewBox="0 -36 572 484"
       role="img"
       aria-label={`Floor plan, propeller ${pusher ? "behind" : "in front"}, nose into wind. ${said}`}
     >
@@ -45,8 +45,8 @@ export function FloorPlan({ stations, gear, pusher = false, wind, line = "line f
       </text>
       {wind && (
         <>
-          <path className="plan-wind" d="M336 6V42M328 32 336 43 344 32" />
-          <text className="g-note" x="354" y="28">
+          <path className="plan-wind" d="M180 -30V6M172 -4 180 7 188 -4" />
+          <text className="g-note" x="202" y="-6">
             wind {wind}
           </text>
         </>
@@ -63,7 +63,7 @@ export function FloorPlan({ stations, gear, pusher = false, wind, line = "line f
             {station.letter}
           </text>
           {(station.you || station.answer === "no-go") && (
-            <text className="station-word" textAnchor={x > 286 ? "end" : "start"} x={x > 286 ? -26 : 26} y="6">
+            <text className="station-word" textAnchor={x > 286 ? "end" : "start"} x={x > 286 ? -32 : 32} y="6">
               {station.you ? "you" : "no-go"}
             </text>
           )}

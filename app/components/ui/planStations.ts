@@ -1,4 +1,4 @@
-/** Where each position stands on the floor plan: pure geometry in the plan's units, 572 x 440, aircraft at 286, 196. */
+/** Where each position stands on the floor plan: pure geometry in the plan's units, 572 wide, aircraft at 286, 196. */
 
 export type PlanPosition = "operator" | "runlead" | "fireguard" | "areaguard" | "observer" | "recorder" | "swinger";
 

@@ -1,14 +1,12 @@
 // The install behind a request: who asks, the snapshot and what it means now, loaded once by the layout's middleware.
 // An unknown install and somebody else's are the same 404.
-import { desc, eq } from "drizzle-orm";
 import { createContext, type MiddlewareFunction } from "react-router";
 import { db } from "#app/db/client.server";
-import { loadSnapshot } from "#app/db/queries/load-snapshot.server";
+import { boardNow } from "#app/db/queries/board-now.server";
 import { memberOf } from "#app/db/queries/membership.server";
-import { events } from "#app/db/schema/events";
 import { type Actor, actorOf } from "#app/lib/auth/actor.server";
 import { now as clock } from "#app/lib/clock";
-import { type Evaluation, evaluate } from "#app/lib/gates/evaluate";
+import type { Evaluation } from "#app/lib/gates/evaluate";
 import type { Instant, Role, Snapshot } from "#app/lib/gates/snapshot";
 import type { UnitSystem } from "#app/lib/units/display";
 
@@ -28,24 +26,11 @@ export const installContext = createContext<InstallContext>();
 /** Everything of the install as this person may see it, or null: not a member, or no such install. */
 export async function loadInstall(installId: string, actor: Actor): Promise<InstallContext | null> {
   const member = await memberOf(db(), installId, actor.userId);
-  const snapshot = member && (await loadSnapshot(db(), installId));
-  if (!member || !snapshot) return null;
-  const [newest] = await db()
-    .select({ seq: events.seq, hash: events.hash, recorded: events.recorded })
-    .from(events)
-    .where(eq(events.installId, installId))
-    .orderBy(desc(events.seq))
-    .limit(1);
-  // The board is never judged at an instant before its newest record.
-  const now = Math.max(clock(), newest?.recorded ?? 0);
-  return {
-    installId,
-    snapshot,
-    e: evaluate(snapshot, now),
-    me: { id: member.id, name: member.name, roles: member.roles, units: actor.units },
-    now,
-    head: { seq: newest?.seq ?? 0, hash: newest?.hash ?? "" },
-  };
+  const board = member && (await boardNow(db(), installId, clock()));
+  if (!member || !board) return null;
+  const { e, head } = board;
+  const me = { id: member.id, name: member.name, roles: member.roles, units: actor.units };
+  return { installId, snapshot: e.snapshot, e, me, now: e.at, head: { seq: head.seq, hash: head.hash } };
 }
 
 /** Stands before every page of an install. */

@@ -46,11 +46,20 @@ export function verify(lines: Iterable<Line>): Verified {
   return { ok: true, lines: count, head: before?.hash ?? FIRST };
 }
 
+/** A damaged line may hold what has no canonical form (a number beyond all numbers): it has no hash then. */
+function hashIfAny(prev: string, event: Chained): string | null {
+  try {
+    return link(prev, event);
+  } catch {
+    return null;
+  }
+}
+
 function fault(line: Line, before: Line | null, count: number): string | null {
   const { event, prev, hash } = line;
   if (event.seq !== count) return `line ${count} carries number ${event.seq}: a line was taken out, added or moved`;
   if (prev !== (before?.hash ?? FIRST)) return `line ${count} does not follow from the line before it`;
-  if (link(prev, event) !== hash) return `line ${count} was changed after it was written`;
+  if (hashIfAny(prev, event) !== hash) return `line ${count} was changed after it was written`;
   if (before && event.install !== before.event.install) return `line ${count} belongs to another install`;
   if (before && event.recorded < before.event.recorded) return `line ${count} is dated before the line that it follows`;
   return null;

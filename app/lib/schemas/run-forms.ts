@@ -49,7 +49,7 @@ export const runPageForm = z.discriminatedUnion("intent", [acknowledgeForm, goAn
 export const reasonForm = z.object({ commandId, reason: reasonSchema });
 export const goForm = z.object({ commandId, version, pin: pinSchema });
 
-interface PlanRules {
+export interface PlanRules {
   timeZone: string;
   rung: { key: string; rpm: number | null; crew: CrewRule };
   redline: number | null;

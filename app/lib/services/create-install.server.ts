@@ -13,6 +13,7 @@ import { values } from "#app/db/schema/values";
 import { now as clock } from "#app/lib/clock";
 import { DEFAULT_SETTINGS } from "#app/lib/gates/snapshot";
 import { newId } from "#app/lib/ids";
+import { FIRST } from "#app/lib/record/chain";
 import type { CreateInstall } from "#app/lib/schemas/set-up";
 import { boardRows } from "#app/lib/services/board-rows";
 import { remember, replayOf } from "#app/lib/services/commands.server";
@@ -44,7 +45,7 @@ export function createInstall(
     const installId = newId();
     const { registration, name, timeZone, traits } = input;
     const rows = boardRows(installId, board, input.values, newId);
-    const writer = await recordWriter(tx, installId, clock());
+    const writer = recordWriter(tx, installId, { seq: 0, hash: FIRST, recorded: 0 }, clock());
     const { now } = writer;
     await tx.insert(installs).values({
       id: installId,

@@ -3,9 +3,7 @@
 import { desc, inArray } from "drizzle-orm";
 import { db, write } from "#app/db/client.server";
 import { runActs } from "#app/db/schema/runs";
-import { now as clock } from "#app/lib/clock";
-import { evaluateIn } from "#app/lib/services/perform.server";
-import { recordWriter } from "#app/lib/services/record-writer.server";
+import { beginRecord } from "#app/lib/services/perform.server";
 import { writeHold } from "#app/lib/services/write-hold.server";
 
 /** Looks at every run whose newest word is GO. Returns how many were held. */
@@ -28,8 +26,7 @@ async function installsWithGo(): Promise<string[]> {
 
 function holdIn(installId: string): Promise<number> {
   return write(async (tx) => {
-    const writer = await recordWriter(tx, installId, clock());
-    const e = await evaluateIn(tx, installId, writer.now);
+    const { writer, e } = await beginRecord(tx, installId);
     let held = 0;
     for (const run of e.result.runs) {
       const facts = run.id ? e.facts.runs.get(run.id) : undefined;

@@ -4,6 +4,7 @@
 import { type Tx, write } from "#app/db/client.server";
 import { loadSnapshot } from "#app/db/queries/load-snapshot.server";
 import { type CurrentMember, memberOf } from "#app/db/queries/membership.server";
+import { snapshotNow } from "#app/db/queries/snapshot-cache.server";
 import { now as clock } from "#app/lib/clock";
 import { type Evaluation, evaluate } from "#app/lib/gates/evaluate";
 import type { Role } from "#app/lib/gates/snapshot";
@@ -61,8 +62,7 @@ async function inTransaction<T>(tx: Tx, command: Command, work: (doing: Doing) =
   if (!member) return notFound("That install");
   const first = await replayOf<T>(tx, command);
   if (first) return first;
-  const writer = await recordWriter(tx, installId, clock());
-  const e = await evaluateIn(tx, installId, writer.now);
+  const { writer, e } = await beginRecord(tx, installId);
   const record: Doing["record"] = (as, body, id) => writer.record({ by: userId, as }, body, id);
   const outcome = await work({ tx, installId, e, now: writer.now, member, writer, record });
   if (!outcome.ok) throw new Refused(outcome);
@@ -74,7 +74,15 @@ async function inTransaction<T>(tx: Tx, command: Command, work: (doing: Doing) =
   return outcome;
 }
 
-/** The board as the transaction sees it. */
+/** At the start of a transaction: the board as it is, and a writer at the end of its record. */
+export async function beginRecord(tx: Tx, installId: string): Promise<{ writer: RecordWriter; e: Evaluation }> {
+  const found = await snapshotNow(tx, installId);
+  if (!found) throw new Error("No such install");
+  const writer = recordWriter(tx, installId, found.head, clock());
+  return { writer, e: evaluate(found.snapshot, writer.now) };
+}
+
+/** The board with what this transaction has written. */
 export async function evaluateIn(tx: Tx, installId: string, at: number): Promise<Evaluation> {
   const snapshot = await loadSnapshot(tx, installId);
   if (!snapshot) throw new Error("A member of an install that is not there");

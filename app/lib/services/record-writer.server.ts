@@ -1,11 +1,11 @@
 // Writes events at the end of an install's chain, inside the transaction of the act that they tell about.
-import { desc, eq } from "drizzle-orm";
 import type { Tx } from "#app/db/client.server";
+import type { Head } from "#app/db/queries/snapshot-cache.server";
 import { events } from "#app/db/schema/events";
 import type { Role } from "#app/lib/gates/snapshot";
 import { newId } from "#app/lib/ids";
 import { canonical } from "#app/lib/record/canonical";
-import { FIRST, link } from "#app/lib/record/chain";
+import { link } from "#app/lib/record/chain";
 import { type EventBody, parseEvent } from "#app/lib/record/events";
 
 /** The columns that every record shares, ready to be spread into its row. */
@@ -19,7 +19,7 @@ export interface RecordBase {
 }
 
 export interface RecordWriter {
-  /** The instant that counts for everything in this act: the clock, but never before the newest record. */
+  /** The instant that counts for everything in this act: the clock, but later than the newest record. */
   now: number;
   /** Number and hash of the newest event. */
   head: () => { seq: number; hash: string };
@@ -27,16 +27,11 @@ export interface RecordWriter {
   record: (who: { by: string; as: Role }, body: EventBody, id?: string) => Promise<RecordBase>;
 }
 
-/** A writer at the chain's present end. `clock` in ms since 1970 UTC. */
-export async function recordWriter(tx: Tx, installId: string, clock: number): Promise<RecordWriter> {
-  const [newest] = await tx
-    .select({ seq: events.seq, hash: events.hash, recorded: events.recorded })
-    .from(events)
-    .where(eq(events.installId, installId))
-    .orderBy(desc(events.seq))
-    .limit(1);
-  const now = Math.max(clock, newest?.recorded ?? 0);
-  let head = { seq: newest?.seq ?? 0, hash: newest?.hash ?? FIRST };
+/** A writer that goes on from `newest`, the chain's present end. `clock` in ms since 1970 UTC. */
+export function recordWriter(tx: Tx, installId: string, newest: Head, clock: number): RecordWriter {
+  // Each act is later than the one before, if only by a millisecond: the rules ask what is newer, and strictly so.
+  const now = Math.max(clock, newest.recorded + 1);
+  let head = { seq: newest.seq, hash: newest.hash };
   return {
     now,
     head: () => head,

@@ -130,7 +130,7 @@ export function windView(e: Evaluation, run: RunFacts): WindView {
   const time = timeOrWhen(wind.recorded, e.at, e.snapshot.install.timeZone);
   const by = nameIn(e.snapshot, wind.by);
   return {
-    newest: `${kt(wind.speed)}, gusts ${kt(wind.gust)}, ${wind.tail ? "some from behind" : "none from behind"}; ${by}, ${time}`,
+    newest: `${kt(wind.speed)}, gusts ${kt(wind.gust)}, ${wind.tail ? "some from behind" : "none from behind"}; ${by}, ${time}.`,
     limit,
     short: `${kt(wind.speed)}${run.plan ? `, limit ${kt(run.plan.windLimit)}` : ""}`,
   };

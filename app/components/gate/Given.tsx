@@ -1,0 +1,60 @@
+import { BandRule } from "#app/components/ui/BandRule";
+import { Figure } from "#app/components/ui/Figure";
+import { Tally } from "#app/components/ui/Tally";
+
+export type GivenModel =
+  | { kind: "value"; label: string; value: string; unit: string; rule: { min: number | null; max: number | null; at: number } | null; says: string; out: boolean }
+  | { kind: "tally"; count: number; says: string; note: string }
+  | { kind: "photos"; files: string[]; of: string }
+  | { kind: "words"; text: string };
+
+/** What was given as evidence: a value on its rule, strokes of a tally, pictures, words. */
+export function Given({ given }: { given: GivenModel[] }) {
+  if (!given.length) return null;
+  return (
+    <div className="given">
+      {given.map((one, i) => (
+        // biome-ignore lint/suspicious/noArrayIndexKey: parts keep their order
+        <GivenPart key={i} one={one} />
+      ))}
+    </div>
+  );
+}
+
+function GivenPart({ one }: { one: GivenModel }) {
+  switch (one.kind) {
+    case "value":
+      return (
+        <div className="given-value">
+          {one.rule && <BandRule min={one.rule.min} max={one.rule.max} value={one.rule.at} label={`${one.value} ${one.unit}, ${one.says}`} />}
+          <p>
+            {one.label && <span>{one.label}</span>}
+            <Figure className="given-figure" value={one.value} unit={one.unit} />
+            <span className="given-says">{one.says}</span>
+          </p>
+        </div>
+      );
+    case "tally":
+      return (
+        <div className="given-value">
+          <Tally count={one.count} label={one.says} size={36} />
+          <p>
+            <b>{one.says}</b>
+            <span className="given-says">{one.note}</span>
+          </p>
+        </div>
+      );
+    case "photos":
+      return (
+        <div className="given-photos">
+          {one.files.map((file, i) => (
+            <a key={file} href={`/files/${file}`}>
+              <img src={`/files/${file}`} alt={`${one.of}, photo ${i + 1} of ${one.files.length}`} width="132" height="88" loading="lazy" />
+            </a>
+          ))}
+        </div>
+      );
+    case "words":
+      return <p className="given-words">{one.text}</p>;
+  }
+}
