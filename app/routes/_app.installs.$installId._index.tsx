@@ -42,7 +42,7 @@ export default function Board({ loaderData }: Route.ComponentProps) {
       <section className="board-top" aria-label="Where it stands">
         <Answer {...answer} />
         <div className="board-stops">
-          <StopList stops={stops} most={short ? 1 : 3} nothing={answer.then ?? "Nothing stops it."} />
+          <StopList stops={stops} most={short ? 1 : 2} nothing={answer.note ?? "Nothing stops it."} />
         </div>
       </section>
       {short ? (
@@ -63,8 +63,8 @@ export default function Board({ loaderData }: Route.ComponentProps) {
                 Clearance: <b className="fig">{clearance.rpm}</b>
               </h2>
               <p>
-                Crankshaft speed. The least of these binds: {clearance.binds}. The maker’s manual, the local rules and licensed judgement come before
-                this figure.
+                Crankshaft speed. The least of these binds: {clearance.binds}. The maker’s manual, the local rules and licensed judgement
+                come before this figure.
               </p>
               <ClearanceBars limits={clearance.limits} />
             </section>

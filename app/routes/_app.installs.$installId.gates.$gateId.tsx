@@ -14,8 +14,8 @@ import { installContext } from "#app/lib/http/install.server";
 import { readPhotoForm } from "#app/lib/http/multipart.server";
 import { newId } from "#app/lib/ids";
 import { gateView } from "#app/lib/views/gate";
-import { boardOf, gateOf } from "#app/lib/views/places";
 import { peopleOf, toolsOf } from "#app/lib/views/gate-choices";
+import { boardOf, gateOf } from "#app/lib/views/places";
 import type { Route } from "./+types/_app.installs.$installId.gates.$gateId";
 
 export const meta: Route.MetaFunction = ({ loaderData }) => [
@@ -52,7 +52,11 @@ const never = () => () => {};
 
 export default function Gate({ loaderData, actionData }: Route.ComponentProps) {
   const { view, hashes, units, tools, people, zone, setUpHref, formId } = loaderData;
-  const live = useSyncExternalStore(never, () => true, () => false);
+  const live = useSyncExternalStore(
+    never,
+    () => true,
+    () => false,
+  );
   const sending = useNavigation().formData;
   const commandId = (item: string, act: string) => `${formId}-${act}-${item}`;
   const shared = { units, tools, people, zone, setUpHref, live, commandId };
@@ -60,7 +64,7 @@ export default function Gate({ loaderData, actionData }: Route.ComponentProps) {
   return (
     <>
       <main id="main">
-        <GateHead name={view.name} state={view.state} valve={view.valve} part={view.part} feeds={view.feeds} then={view.then} />
+        <GateHead name={view.name} state={view.state} valve={view.valve} part={view.part} feeds={view.feeds} onward={view.onward} />
         {caution && (
           <CautionSlab title={caution.title} sign={caution.sign}>
             {caution.text} The maker’s manual comes first.
@@ -72,7 +76,13 @@ export default function Gate({ loaderData, actionData }: Route.ComponentProps) {
           </Notice>
         )}
         {view.waits.map((wait) => (
-          <Notice key={wait.sentence} kind="plain" title={wait.title} band action={<Fitting href={wait.place.href}>{wait.place.label}</Fitting>}>
+          <Notice
+            key={wait.sentence}
+            kind="plain"
+            title={wait.title}
+            band
+            action={<Fitting href={wait.place.href}>{wait.place.label}</Fitting>}
+          >
             {wait.sentence}
           </Notice>
         ))}

@@ -18,7 +18,9 @@ import { gateOf } from "#app/lib/views/places";
 import { sheetView } from "#app/lib/views/sign";
 import type { Route } from "./+types/_app.installs.$installId.gates.$gateId_.sign";
 
-export const meta: Route.MetaFunction = ({ loaderData }) => [{ title: loaderData ? `${loaderData.sheet.act}: ${loaderData.sheet.name}` : "Bladecount" }];
+export const meta: Route.MetaFunction = ({ loaderData }) => [
+  { title: loaderData ? `${loaderData.sheet.act}: ${loaderData.sheet.name}` : "Bladecount" },
+];
 
 export async function loader({ context, params, url }: Route.LoaderArgs) {
   const { e, me, installId, snapshot } = context.get(installContext);
@@ -52,13 +54,17 @@ const never = () => () => {};
 export default function Sign({ loaderData, actionData }: Route.ComponentProps) {
   const { sheet, kicker, person, leftOut, commandId } = loaderData;
   const busy = useNavigation().state === "submitting";
-  const live = useSyncExternalStore(never, () => true, () => false);
+  const live = useSyncExternalStore(
+    never,
+    () => true,
+    () => false,
+  );
   const refusal = actionData?.refusal;
   const pinErrors = refusal && aboutPin(refusal.code) ? [refusal.message] : undefined;
   const stub = sheet.refusal ? (
     <Notice kind="refused" title={sheet.refusal.title}>
       <p>{sheet.refusal.sentence}</p>
-      {sheet.refusal.who && <p>{sheet.refusal.who}.</p>}
+      {sheet.refusal.who && <p>{sheet.refusal.who}</p>}
       <Fitting href={sheet.refusal.place.href}>{sheet.refusal.place.label}</Fitting>
     </Notice>
   ) : (

@@ -45,11 +45,23 @@ export default function SignSeveral({ loaderData, actionData }: Route.ComponentP
   const { several, kicker, person, home, commandId } = loaderData;
   const { sheets, roles, as, act, meaning } = several;
   const busy = useNavigation().state === "submitting";
-  const live = useSyncExternalStore(never, () => true, () => false);
+  const live = useSyncExternalStore(
+    never,
+    () => true,
+    () => false,
+  );
   const refusal = actionData?.refusal;
   const pinErrors = refusal && aboutPin(refusal.code) ? [refusal.message] : undefined;
   const stub = sheets.length ? (
-    <PinStub key={refusal?.message} form="sign" label={act} note="each gate gets a signature of its own" errors={pinErrors} busy={busy} live={live} />
+    <PinStub
+      key={refusal?.message}
+      form="sign"
+      label={act}
+      note="each gate gets a signature of its own"
+      errors={pinErrors}
+      busy={busy}
+      live={live}
+    />
   ) : (
     <Notice kind="plain" title="Nothing is ready for you">
       <p>Gates that you may sign as {as} appear here once all their items stand. The board says what is left.</p>

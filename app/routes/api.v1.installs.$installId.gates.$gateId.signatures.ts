@@ -10,7 +10,10 @@ import type { Route } from "./+types/api.v1.installs.$installId.gates.$gateId.si
 export const middleware: Route.MiddlewareFunction[] = [requireUserOfApi];
 
 export function loader() {
-  return Response.json({ code: "method", message: "A signature is given by POST. The board tells what stands." }, { status: 405, headers: { Allow: "POST" } });
+  return Response.json(
+    { code: "method", message: "A signature is given by POST. The board tells what stands." },
+    { status: 405, headers: { Allow: "POST" } },
+  );
 }
 
 /** The same service as the sign sheet, so a script is refused with the same sentence. */
@@ -20,7 +23,11 @@ export async function action({ request, params, context }: Route.ActionArgs) {
   const sent = signatureRequestSchema.safeParse(body.value);
   if (!sent.success) {
     const [issue] = sent.error.issues;
-    return refusedJson(invalid(`${issue?.path.join(".") || "The body"}: ${issue?.message ?? "cannot be read"}. See the description of this address in the README.`));
+    return refusedJson(
+      invalid(
+        `${issue?.path.join(".") || "The body"}: ${issue?.message ?? "cannot be read"}. See the description of this address in the README.`,
+      ),
+    );
   }
   const { commandId, as, pin, covers } = sent.data;
   const actor = actorOf(context);

@@ -1,4 +1,4 @@
-import { afterAll, beforeAll, beforeEach, describe, expect, it } from "vitest";
+import { afterAll, beforeAll, beforeEach, describe, expect, it, vi } from "vitest";
 import { db } from "#app/db/client.server";
 import { recordLines } from "#app/db/queries/record-lines.server";
 import { verify } from "#app/lib/record/chain";
@@ -14,6 +14,9 @@ import { recordProof } from "#app/lib/services/record-proof.server";
 import { confirmRestored, restoreLooseEnd } from "#app/lib/services/restore-loose-end.server";
 import { closeFinding, fixFinding, gradeFinding, rejectFix } from "#app/lib/services/settle-finding.server";
 import { MINUTE, type Person, value, type Workshop, workshop } from "../support/workshop";
+
+// Each test works a whole install through its services.
+vi.setConfig({ testTimeout: 30_000, hookTimeout: 120_000 });
 
 let w: Workshop;
 let restore: () => void;

@@ -1,6 +1,6 @@
 import { createClient } from "@libsql/client";
 import { eq } from "drizzle-orm";
-import { afterAll, beforeAll, beforeEach, describe, expect, it } from "vitest";
+import { afterAll, beforeAll, beforeEach, describe, expect, it, vi } from "vitest";
 import { database, db, write } from "#app/db/client.server";
 import { fileFor } from "#app/db/queries/files.server";
 import { hangarOf } from "#app/db/queries/hangar.server";
@@ -17,6 +17,9 @@ import { openSystem } from "#app/lib/services/open-system.server";
 import { done, refuse } from "#app/lib/services/outcome";
 import { perform } from "#app/lib/services/perform.server";
 import { MINUTE, value, type Workshop, workshop } from "../support/workshop";
+
+// Each test works a whole install through its services.
+vi.setConfig({ testTimeout: 30_000, hookTimeout: 120_000 });
 
 let w: Workshop;
 let restore: () => void;

@@ -1,5 +1,5 @@
 import { createHash } from "node:crypto";
-import { afterAll, beforeAll, describe, expect, it } from "vitest";
+import { afterAll, beforeAll, describe, expect, it, vi } from "vitest";
 import { db } from "#app/db/client.server";
 import { fileFor } from "#app/db/queries/files.server";
 import { PHOTO_LIMITS, storePhoto } from "#app/lib/services/store-photo.server";
@@ -8,6 +8,9 @@ import { readBytes } from "#app/lib/storage/local.server";
 import { stripMetadata } from "#app/lib/storage/strip-metadata";
 import { jpeg, png } from "../support/picture";
 import { value, type Workshop, workshop } from "../support/workshop";
+
+// Each test works a whole install through its services.
+vi.setConfig({ testTimeout: 30_000, hookTimeout: 120_000 });
 
 let w: Workshop;
 beforeAll(async () => {

@@ -1,4 +1,4 @@
-import { afterAll, beforeAll, beforeEach, describe, expect, it } from "vitest";
+import { afterAll, beforeAll, beforeEach, describe, expect, it, vi } from "vitest";
 import { db } from "#app/db/client.server";
 import { gateHistory } from "#app/db/queries/gate-history.server";
 import { recordLines } from "#app/db/queries/record-lines.server";
@@ -11,6 +11,9 @@ import { openSystem } from "#app/lib/services/open-system.server";
 import { recordProof } from "#app/lib/services/record-proof.server";
 import { withdrawProof } from "#app/lib/services/withdraw-proof.server";
 import { MINUTE, value, type Workshop, workshop } from "../support/workshop";
+
+// Each test works a whole install through its services.
+vi.setConfig({ testTimeout: 30_000, hookTimeout: 120_000 });
 
 let w: Workshop;
 let restore: () => void;

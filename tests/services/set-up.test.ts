@@ -1,4 +1,4 @@
-import { afterAll, beforeAll, beforeEach, describe, expect, it } from "vitest";
+import { afterAll, beforeAll, beforeEach, describe, expect, it, vi } from "vitest";
 import { db } from "#app/db/client.server";
 import { recordLines } from "#app/db/queries/record-lines.server";
 import { installs } from "#app/db/schema/installs";
@@ -12,6 +12,9 @@ import { carryOver } from "#app/lib/template/carry-over";
 import { generate } from "#app/lib/template/generate";
 import { toSI } from "#app/lib/units/convert";
 import { MINUTE, TRAITS, value, type Workshop, workshop } from "../support/workshop";
+
+// Each test works a whole install through its services.
+vi.setConfig({ testTimeout: 30_000, hookTimeout: 120_000 });
 
 let w: Workshop;
 let restore: () => void;

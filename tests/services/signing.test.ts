@@ -1,6 +1,6 @@
 import { createHash } from "node:crypto";
 import { eq } from "drizzle-orm";
-import { afterAll, beforeAll, beforeEach, describe, expect, it } from "vitest";
+import { afterAll, beforeAll, beforeEach, describe, expect, it, vi } from "vitest";
 import { db } from "#app/db/client.server";
 import { recordLines } from "#app/db/queries/record-lines.server";
 import { signatures } from "#app/db/schema/signatures";
@@ -12,6 +12,9 @@ import { signGates } from "#app/lib/services/sign-gates.server";
 import { signRelease } from "#app/lib/services/sign-release.server";
 import { withdrawSignature } from "#app/lib/services/withdraw-signature.server";
 import { MINUTE, PIN, value, type Workshop, workshop } from "../support/workshop";
+
+// Each test works a whole install through its services.
+vi.setConfig({ testTimeout: 30_000, hookTimeout: 120_000 });
 
 let w: Workshop;
 let restore: () => void;

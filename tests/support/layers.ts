@@ -37,7 +37,8 @@ export const layers: Record<string, Layer> = {
   base: { where: base, app: base, not: routing },
   "db schema": { where: ["db/schema/"], app: ["db/schema/", ...pure], packages: ["drizzle-orm"] },
   "db queries": { where: ["db/queries/"], app: ["db/schema/", "db/client.server", "db/queries/", ...pure], packages: ["drizzle-orm"] },
-  seed: { where: ["db/seed"], app: ["db/", "lib/"], not: routing },
+  // The demo's people and installs are plain data in fixtures/; the seed tells their story through the services.
+  seed: { where: ["db/seed"], app: ["db/", "lib/", "fixtures/"], not: routing },
   db: { where: ["db/"], app: ["db/schema/", "db/client.server", ...base], not: routing },
   services: { where: lib("services"), app: [...lib("services", "auth", "mail", "storage"), "db/", ...pure, ...base], not: routing },
   adapters: { where: adapters, app: [...adapters, "lib/http/", "db/", ...pure, ...base] },

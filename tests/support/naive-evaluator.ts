@@ -248,8 +248,8 @@ function naiveRelease(s: Snapshot, at: Instant): NaiveBoard["release"] {
       }),
     );
   if (conditions && both(good, false)) return { stands: true, state: "released" };
-  if (both(valid, true)) return { stands: false, state: "lapsed" };
   if (conditions) return { stands: false, state: good.length > 0 ? "half signed" : "ready" };
+  if (both(valid, true)) return { stands: false, state: "lapsed" };
   return { stands: false, state: "not yet" };
 }
 

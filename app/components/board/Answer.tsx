@@ -1,19 +1,19 @@
+import { cx } from "#app/components/ui/cx";
 import { Spade } from "#app/components/ui/Spade";
 import type { ShownValve } from "#app/components/ui/states";
 import { Valve } from "#app/components/ui/Valve";
-import { cx } from "#app/components/ui/cx";
 
 export interface AnswerProps {
   title: string;
   state: string;
-  then: string | null;
+  note: string | null;
   tone: "clear" | "shut" | "held" | "go" | "running";
 }
 
 const VALVE: Record<Exclude<AnswerProps["tone"], "held">, ShownValve> = { clear: "signed", go: "signed", running: "signed", shut: "shut" };
 
 /** The board's first words, as a label on the pipe: green up to the shut valve, green all along when nothing stops it. */
-export function Answer({ title, state, then, tone }: AnswerProps) {
+export function Answer({ title, state, note, tone }: AnswerProps) {
   const passes = tone !== "shut" && tone !== "held";
   return (
     <div className={cx("answer", `answer-${tone}`)}>
@@ -26,7 +26,7 @@ export function Answer({ title, state, then, tone }: AnswerProps) {
           {tone === "held" ? <Spade length={88} width={15} /> : <Valve state={VALVE[tone]} scale={1.9} lever={31} fed />}
         </svg>
       </div>
-      {then && <p>{then}</p>}
+      {note && <p>{note}</p>}
     </div>
   );
 }

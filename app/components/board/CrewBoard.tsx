@@ -38,8 +38,8 @@ export function CrewBoard({ places, runHref, when, highest, steps, stop, read }:
         </p>
       </section>
       <p className="crew-stop">
-        <b>Shout STOP, or cross your arms overhead,</b> for {stop.length ? stop.join(", ").replace(/\.$/, "") : "anything that looks wrong"}. Never walk into
-        the propeller’s arc. The maker’s manual and the run lead’s word come first.
+        <b>Shout STOP, or cross your arms overhead,</b> for {stop.length ? stop.join(", ").replace(/\.$/, "") : "anything that looks wrong"}
+        . Never walk into the propeller’s arc. The maker’s manual and the run lead’s word come first.
       </p>
       {read && (
         <p className="crew-read">

@@ -19,7 +19,7 @@ interface StopListProps {
 }
 
 /** What stops us, soonest cleared first; its balloons are those at the valves of the Line. */
-export function StopList({ stops, nothing, most = 3 }: StopListProps) {
+export function StopList({ stops, nothing, most = 2 }: StopListProps) {
   if (stops.length === 0) return <p className="stops-none">{nothing}</p>;
   const shown = stops.length === most + 1 ? stops : stops.slice(0, most);
   const rest = stops.slice(shown.length);
@@ -33,7 +33,12 @@ export function StopList({ stops, nothing, most = 3 }: StopListProps) {
       {rest.length > 0 && (
         <details className="stops-more">
           <summary>
-            {rest.length} more: {rest.slice(0, 4).map((s) => s.place.label).filter(unique).join(", ")}
+            {rest.length} more:{" "}
+            {rest
+              .slice(0, 4)
+              .map((s) => s.place.label)
+              .filter(unique)
+              .join(", ")}
             {rest.length > 4 ? " and others" : ""}
           </summary>
           <ol className="stops" start={shown.length + 1}>
@@ -55,7 +60,7 @@ function StopRow({ stop }: { stop: Stop }) {
       <Balloon n={stop.n} />
       <h2>{stop.title}</h2>
       <p>
-        {stop.sentence} {stop.who && <span className="stops-who">{stop.who}.</span>}
+        {stop.sentence} {stop.who && <span className="stops-who">{stop.who}</span>}
       </p>
       <Fitting href={stop.place.href} label={stop.linkLabel}>
         {stop.place.label}

@@ -21,8 +21,8 @@ export function CrankFields({ item, n, entry, giveUpAfter, from, live }: CrankFi
     <fieldset className="part-fields">
       <legend>Bursts of the starter</legend>
       <p className="field-hint">
-        Stop and look for the cause when no pressure shows within {giveUpAfter} s of cranking in all ({from}). The starter maker’s on and rest times come
-        first.
+        Stop and look for the cause when no pressure shows within {giveUpAfter} s of cranking in all ({from}). The starter maker’s on and
+        rest times come first.
       </p>
       {Array.from({ length: rows }, (_, row) => (
         // biome-ignore lint/suspicious/noArrayIndexKey: bursts are numbered

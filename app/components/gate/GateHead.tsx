@@ -15,14 +15,14 @@ interface GateHeadProps {
   valve: ValveState;
   part: number;
   feeds: Feed[];
-  then: { href: string; label: string }[];
+  onward: { href: string; label: string }[];
 }
 
 const ROW = 50;
 const MOST = 4;
 
 /** The gate on its pipe: the gates that feed it at the left, its name and state as labels, what comes then at the right. */
-export function GateHead({ name, state, valve, part, feeds, then }: GateHeadProps) {
+export function GateHead({ name, state, valve, part, feeds, onward }: GateHeadProps) {
   const signed = feeds.filter((f) => f.state === "signed").length;
   const fed = signed === feeds.length;
   const shown = feeds.length <= MOST ? feeds : [];
@@ -34,7 +34,9 @@ export function GateHead({ name, state, valve, part, feeds, then }: GateHeadProp
         <Inlet feeds={shown} fed={fed} height={height} />
         <path className="pipe-wall pipe-title" d={`M250 ${height / 2}H430`} />
         <path className="pipe-bore pipe-title" d={`M${shown.length ? 240 : 250} ${height / 2}H430`} />
-        {fed && <path className="pipe-flow pipe-title" d={`M${shown.length ? 240 : 250} ${height / 2}H${valve === "signed" ? 430 : 330}`} />}
+        {fed && (
+          <path className="pipe-flow pipe-title" d={`M${shown.length ? 240 : 250} ${height / 2}H${valve === "signed" ? 430 : 330}`} />
+        )}
         <g transform={`translate(350 ${height / 2})`}>
           <Valve state={valve} part={part} fed={fed} scale={1.9} lever={31} />
         </g>
@@ -68,15 +70,15 @@ export function GateHead({ name, state, valve, part, feeds, then }: GateHeadProp
           gates before it stand
         </p>
       )}
-      {then.length > 0 && (
+      {onward.length > 0 && (
         <p className="gate-head-then">
           <span>then</span>
-          {then.slice(0, 3).map((place) => (
+          {onward.slice(0, 3).map((place) => (
             <Anchor key={place.href} href={place.href}>
               {place.label}
             </Anchor>
           ))}
-          {then.length > 3 && <span>and {then.length - 3} more</span>}
+          {onward.length > 3 && <span>and {onward.length - 3} more</span>}
         </p>
       )}
     </div>
@@ -100,7 +102,11 @@ function Inlet({ feeds, fed, height }: { feeds: Feed[]; fed: boolean; height: nu
         <path key={f.id} className="pipe-bore" d={d(i)} />
       ))}
       {feeds.map((f, i) =>
-        f.state === "signed" ? <path key={f.id} className="pipe-flow" d={fed ? d(i) : `M-10 ${y(i)}H240`} /> : <path key={f.id} className="pipe-flow" d={`M-10 ${y(i)}H20`} />,
+        f.state === "signed" ? (
+          <path key={f.id} className="pipe-flow" d={fed ? d(i) : `M-10 ${y(i)}H240`} />
+        ) : (
+          <path key={f.id} className="pipe-flow" d={`M-10 ${y(i)}H20`} />
+        ),
       )}
       {feeds.map((f, i) => (
         <g key={f.id} transform={`translate(34 ${y(i)})`}>

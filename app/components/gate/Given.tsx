@@ -3,7 +3,15 @@ import { Figure } from "#app/components/ui/Figure";
 import { Tally } from "#app/components/ui/Tally";
 
 export type GivenModel =
-  | { kind: "value"; label: string; value: string; unit: string; rule: { min: number | null; max: number | null; at: number } | null; says: string; out: boolean }
+  | {
+      kind: "value";
+      label: string;
+      value: string;
+      unit: string;
+      rule: { min: number | null; max: number | null; at: number } | null;
+      says: string;
+      out: boolean;
+    }
   | { kind: "tally"; count: number; says: string; note: string }
   | { kind: "photos"; files: string[]; of: string }
   | { kind: "words"; text: string };
@@ -26,7 +34,9 @@ function GivenPart({ one }: { one: GivenModel }) {
     case "value":
       return (
         <div className="given-value">
-          {one.rule && <BandRule min={one.rule.min} max={one.rule.max} value={one.rule.at} label={`${one.value} ${one.unit}, ${one.says}`} />}
+          {one.rule && (
+            <BandRule min={one.rule.min} max={one.rule.max} value={one.rule.at} label={`${one.value} ${one.unit}, ${one.says}`} />
+          )}
           <p>
             {one.label && <span>{one.label}</span>}
             <Figure className="given-figure" value={one.value} unit={one.unit} />
@@ -49,7 +59,7 @@ function GivenPart({ one }: { one: GivenModel }) {
         <div className="given-photos">
           {one.files.map((file, i) => (
             <a key={file} href={`/files/${file}`}>
-              <img src={`/files/${file}`} alt={`${one.of}, photo ${i + 1} of ${one.files.length}`} width="132" height="88" loading="lazy" />
+              <img src={`/files/${file}`} alt={`${one.of}, ${i + 1} of ${one.files.length}`} width="132" height="88" loading="lazy" />
             </a>
           ))}
         </div>

@@ -4,7 +4,7 @@ import { Given, type GivenModel } from "#app/components/gate/Given";
 import { ItemHistory, type ProofModel } from "#app/components/gate/ItemHistory";
 import { NumberEntry } from "#app/components/gate/NumberEntry";
 import type { PartModel } from "#app/components/gate/PartFields";
-import { ProofActs } from "#app/components/gate/ProofActs";
+import { ProofActs, ProofWays } from "#app/components/gate/ProofActs";
 import { type Ask, ProveForm, type SheetResultModel } from "#app/components/gate/ProveForm";
 import { cx } from "#app/components/ui/cx";
 import { ItemNut } from "#app/components/ui/ItemNut";
@@ -77,7 +77,7 @@ export function ItemRow({ item, reply, shared, busy }: ItemRowProps) {
     <li id={item.anchor} className={cx("item", `item-${item.nut}`)}>
       <TickEnd item={item} formId={open && askable && item.prove.ok ? formId : null} />
       <div className="item-says">
-        <h3>
+        <h2>
           <span className="item-no fig">{item.no}</span>
           <span className="item-words">
             {item.words}
@@ -85,13 +85,14 @@ export function ItemRow({ item, reply, shared, busy }: ItemRowProps) {
               <small key={mark}>{mark}</small>
             ))}
           </span>
-        </h3>
+        </h2>
         {item.caution && (
           <p className="item-caution">
             <b>Caution:</b> {item.caution}
           </p>
         )}
-        {item.proof && (lapsed || item.nut === "todo" ? <p className="item-was">{item.proof.words || "ticked"}</p> : <Given given={item.proof.given} />)}
+        {item.proof &&
+          (lapsed || item.nut === "todo" ? <p className="item-was">{item.proof.words || "ticked"}</p> : <Given given={item.proof.given} />)}
         {item.proof?.note && <p className="item-note">{item.proof.note}</p>}
         {item.proof?.said.map((line) => (
           <p key={line} className="item-note">
@@ -100,7 +101,7 @@ export function ItemRow({ item, reply, shared, busy }: ItemRowProps) {
         ))}
         {second && item.reasons[0] && (
           <p>
-            <b>{item.reasons[0].sentence}</b> {item.reasons[0].who && `${item.reasons[0].who}.`}
+            <b>{item.reasons[0].sentence}</b> {item.reasons[0].who}
           </p>
         )}
         {item.source && <p className="item-source">{item.source}</p>}
@@ -133,7 +134,8 @@ export function ItemRow({ item, reply, shared, busy }: ItemRowProps) {
         )}
         {item.nut === "todo" && item.reasons[0] && (item.proof || item.computed || !open) && !item.prove.numberMissing && (
           <p className="item-reason">
-            {item.reasons[0].sentence} {!open && item.reasons[0].who && <span>{item.reasons[0].who}.</span>}
+            {item.prove.roles.length > 0 && !item.prove.ok ? item.prove.reason : item.reasons[0].sentence}{" "}
+            {!open && item.reasons[0].who && <span>{item.reasons[0].who}</span>}
           </p>
         )}
         {item.parts.map((part) => (
@@ -148,16 +150,17 @@ export function ItemRow({ item, reply, shared, busy }: ItemRowProps) {
           />
         ))}
         <ProofActs item={item} commandId={shared.commandId} entry={entry} />
-        {askable &&
-          (open ? (
-            <ProveForm key={item.proof?.id ?? "first"} {...formProps(item, formId, entry, reply, shared, busy)} />
-          ) : (
+        {askable && open && <ProveForm key={item.proof?.id ?? "first"} {...formProps(item, formId, entry, reply, shared, busy)} />}
+        <div className="item-ways">
+          {askable && !open && (
             <details className="item-again">
               <summary>{item.proof ? "Correct it, or record it anew" : "Record it"}</summary>
               <ProveForm key={item.proof?.id ?? "first"} {...formProps(item, formId, entry, reply, shared, busy)} />
             </details>
-          ))}
-        <ItemHistory proofs={item.history} name={`item ${item.no}`} />
+          )}
+          <ProofWays item={item} commandId={shared.commandId} entry={entry} />
+          <ItemHistory proofs={item.history} name={`item ${item.no}`} />
+        </div>
       </div>
     </li>
   );
@@ -166,7 +169,22 @@ export function ItemRow({ item, reply, shared, busy }: ItemRowProps) {
 function formProps(item: ItemModel, formId: string, entry: Entry, reply: RowReply | null, shared: RowShared, busy: boolean) {
   const { prove, failed, na } = item;
   const { units, tools, people, zone, live } = shared;
-  return { item, prove, failed, na, formId, commandId: shared.commandId(item.id, "prove"), entry, result: reply?.result ?? null, units, tools, people, zone, live, busy };
+  return {
+    item,
+    prove,
+    failed,
+    na,
+    formId,
+    commandId: shared.commandId(item.id, "prove"),
+    entry,
+    result: reply?.result ?? null,
+    units,
+    tools,
+    people,
+    zone,
+    live,
+    busy,
+  };
 }
 
 /** The whole left end: it sends the row where there is something to do, and only shows the state where there is not. */
@@ -178,7 +196,14 @@ function TickEnd({ item, formId }: { item: ItemModel; formId: string | null }) {
     </>
   );
   return formId ? (
-    <button type="submit" form={formId} name="intent" value="prove" className="tick" aria-label={`${item.word}: item ${item.no}, press when it is done`}>
+    <button
+      type="submit"
+      form={formId}
+      name="intent"
+      value="prove"
+      className="tick"
+      aria-label={`${item.word}: item ${item.no}, press when it is done`}
+    >
       {inside}
     </button>
   ) : (

@@ -20,7 +20,14 @@ export function PinStub({ form, label, note, errors, busy, live }: PinStubProps)
   return (
     <>
       <PinInput id="pin" name="pin" form={form} label="Your signing PIN" keypad errors={errors} onLength={setLength} />
-      <Fitting size="act" centred form={form} busy={busy} reason={missing ? `${missing} more ${missing === 1 ? "digit" : "digits"}` : undefined} note={note}>
+      <Fitting
+        size="act"
+        centred
+        form={form}
+        busy={busy}
+        reason={missing ? `${missing} more ${missing === 1 ? "digit" : "digits"}` : undefined}
+        note={note}
+      >
         {label}
       </Fitting>
     </>

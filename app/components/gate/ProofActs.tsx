@@ -11,12 +11,9 @@ interface ProofActsProps {
   entry: Entry;
 }
 
-/** What others say about the proof that is there: seen, accepted, kept; and taking it back. */
-export function ProofActs({ item, commandId, entry }: ProofActsProps) {
-  const { proof, confirm, accept, keep, withdraw } = item;
-  if (!proof) return null;
+function partsOf({ item, commandId, entry }: ProofActsProps, proof: string) {
   const hidden = (intent: string, also: Record<string, string> = {}) => (
-    <HiddenIds commandId={commandId(item.id, intent)} intent={intent} also={{ item: item.id, proof: proof.id, ...also }} />
+    <HiddenIds commandId={commandId(item.id, intent)} intent={intent} also={{ item: item.id, proof, ...also }} />
   );
   const reason = (intent: string, label: string) => (
     <TextInput
@@ -29,23 +26,45 @@ export function ProofActs({ item, commandId, entry }: ProofActsProps) {
       errors={entry.typed.intent?.[0] === intent ? errorsOf(entry, "reason") : undefined}
     />
   );
+  return { hidden, reason };
+}
+
+/** What another person can say about the proof that is there: seen, or its reason accepted. */
+export function ProofActs(props: ProofActsProps) {
+  const { proof, confirm, accept } = props.item;
+  if (!proof) return null;
+  const { hidden, reason } = partsOf(props, proof.id);
   return (
     <>
-      {confirm && (
+      {confirm && !confirm.ok && <p className="field-hint">{confirm.reason}</p>}
+      {confirm?.ok && (
         <Form method="post" preventScrollReset className="proof-act">
           {hidden("confirm", { as: confirm.as })}
-          <Fitting size="act" reason={confirm.ok ? undefined : confirm.reason} note={`as ${confirm.as}, the second person`}>
+          <Fitting size="act" note={`as ${confirm.as}, the second person`}>
             I have seen this
           </Fitting>
         </Form>
       )}
-      {accept && (
+      {accept && !accept.ok && <p className="field-hint">{accept.reason}</p>}
+      {accept?.ok && (
         <Form method="post" preventScrollReset className="proof-act">
           {hidden("accept")}
-          {accept.ok && reason("accept", "Why it is accepted")}
-          <Fitting reason={accept.ok ? undefined : accept.reason}>Accept: it does not apply</Fitting>
+          {reason("accept", "Why it is accepted")}
+          <Fitting>Accept: it does not apply</Fitting>
         </Form>
       )}
+    </>
+  );
+}
+
+/** The quieter ways: a lapsed proof kept by an inspector, and taking a proof back. */
+export function ProofWays(props: ProofActsProps) {
+  const { proof, keep, withdraw } = props.item;
+  if (!proof) return null;
+  const { entry } = props;
+  const { hidden, reason } = partsOf(props, proof.id);
+  return (
+    <>
       {keep?.ok && (
         <details className="proof-keep" open={entry.typed.intent?.[0] === "keep"}>
           <summary>Keep it: it is still true</summary>

@@ -52,7 +52,11 @@ export function ProveForm(props: ProveFormProps) {
         <PartFields key={part.n} part={part} item={item.id} n={part.n} entry={entry} units={units} tools={tools} live={live} />
       ))}
       {result && (
-        <Notice kind={result.passes ? "done" : "lapsed"} title={result.passes ? "The sheet passes" : "The sheet does not pass"} role="status">
+        <Notice
+          kind={result.passes ? "done" : "lapsed"}
+          title={result.passes ? "The sheet passes" : "The sheet does not pass"}
+          role="status"
+        >
           <p>{result.sentence}</p>
           <dl className="sheet-figures">
             {result.figures.map((f) => (

@@ -36,7 +36,7 @@ export function SheetFields({ item, n, entry, sheet, live, units }: SheetFieldsP
   const prefix = `p${n}.s.`;
   return (
     <div className="sheet-fields">
-      <h4>{sheet.title} sheet</h4>
+      <h3>{sheet.title} sheet</h3>
       <CautionSlab title="work out, then look again.">{sheet.caution}</CautionSlab>
       <p className="field-hint">{sheet.formula}</p>
       <FieldSet item={item} entry={entry} units={units} n={n} prefix={prefix} fields={sheet.fields} row={0} live={live} />
@@ -76,7 +76,8 @@ type FieldSetProps = PartProps & { prefix: string; fields: SheetField[]; row: nu
 
 function FieldSet({ item, entry, prefix, fields, row, live }: FieldSetProps) {
   const [chosen, setChosen] = useState<Record<string, string>>({});
-  const now = (field: string) => chosen[field] ?? typedIn(entry, `${prefix}${field}`, row, fields.find((f) => f.name === field)?.value ?? "");
+  const now = (field: string) =>
+    chosen[field] ?? typedIn(entry, `${prefix}${field}`, row, fields.find((f) => f.name === field)?.value ?? "");
   return (
     <div className="field-row">
       {fields.map((field) => {
@@ -95,7 +96,12 @@ function FieldSet({ item, entry, prefix, fields, row, live }: FieldSetProps) {
         return (
           <div key={field.name} hidden={hidden} className="sheet-field">
             {field.kind === "choice" ? (
-              <Select {...common} options={field.options} empty="choose" onChange={(value) => setChosen((c) => ({ ...c, [field.name]: value }))} />
+              <Select
+                {...common}
+                options={field.options}
+                empty="choose"
+                onChange={(value) => setChosen((c) => ({ ...c, [field.name]: value }))}
+              />
             ) : field.kind === "quantity" ? (
               <NumberInput {...common} unit={field.unit} size={7} />
             ) : (

@@ -85,14 +85,26 @@ export function TorqueFields(props: TorqueFieldsProps) {
       </div>
       <SetTo torques={torques} places={places} adapter={adapter} length={length} units={units} />
       <p className="field-hint">
-        An adapter in line with the wrench lengthens it, one folded back is negative. At a right angle it changes nothing: leave it empty (AC 43.13-1B,
-        7-40). The band is for the true torque.
+        An adapter in line with the wrench lengthens it, one folded back is negative. At a right angle it changes nothing: leave it empty
+        (AC 43.13-1B, 7-40). The band is for the true torque.
       </p>
     </fieldset>
   );
 }
 
-function SetTo({ torques, places, adapter, length, units }: { torques: string[]; places: string[]; adapter: string; length: string; units: "si" | "us" }) {
+function SetTo({
+  torques,
+  places,
+  adapter,
+  length,
+  units,
+}: {
+  torques: string[];
+  places: string[];
+  adapter: string;
+  length: string;
+  units: "si" | "us";
+}) {
   const settings = torques.flatMap((text, row) => {
     const torque = parseEntry(text, "torque", units);
     if (!torque.ok) return [];

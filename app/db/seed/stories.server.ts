@@ -47,15 +47,17 @@ async function build(crew: Crew, { clock, zone }: Setting, from: number, prime: 
   await stage(prime[1], ["OP"], "jonas");
 }
 
-/** The day's gates and the walk-round; `but` items of the walk-round are left, and it is not signed then. */
-async function workDay(crew: Crew, pace: number, but: string[] = []): Promise<void> {
-  await crew.work(DAY_GATES, { pace });
+/** The gates of the day, worked from `morning` on, and the walk-round from `round` on, all but the items `but`; without `but` it is signed. */
+async function workDay(crew: Crew, morning: number, round: number, but: string[] = []): Promise<void> {
+  crew.clock.to(morning);
+  await crew.work(DAY_GATES, { pace: 3 });
   await crew.sign("jonas", "builder", DAY_GATES);
   await crew.sign("henrik", "inspector", DAY_GATES);
-  await crew.work(["CR"], { pace });
+  await crew.work(["CR"], { pace: 3 });
   await crew.sign("jonas", "builder", ["CR"]);
   await crew.sign("henrik", "inspector", ["CR"]);
-  await crew.work(["WR"], { pace, but });
+  crew.clock.to(round);
+  await crew.work(["WR"], { pace: 3, but });
   if (but.length) return;
   await crew.sign("jonas", "builder", ["WR"]);
   await crew.sign("henrik", "inspector", ["WR"]);
@@ -87,8 +89,8 @@ export async function sorrel(setting: Setting): Promise<void> {
   clock.minutes(20);
   await brief(crew, run, there);
 
-  clock.to(clock.present - 165 * MINUTE);
-  await workDay(crew, 3, ["WR8"]);
+  const ago = (minutes: number) => clock.present - minutes * MINUTE;
+  await workDay(crew, ago(170), ago(30), ["WR8"]);
   await sayGo(crew, run, there);
   await readWind(crew, run, "tomasz", 6, 9);
 }
@@ -130,13 +132,13 @@ export async function teasel(setting: Setting): Promise<void> {
   past(1, "18:40");
   const third = await plan(crew, "3", TEASEL_PLACES, quarterIn(clock.present, 75), "Long Acre, hard stand");
   await brief(crew, third, TEASEL_CREW);
-  clock.to(clock.present - 175 * MINUTE);
-  await workDay(crew, 3);
+  const ago = (minutes: number) => clock.present - minutes * MINUTE;
+  await workDay(crew, ago(200), ago(75));
   await sayGo(crew, third, TEASEL_CREW);
   await readWind(crew, third, "tomasz", 5, 8);
   await go(crew, third);
-  clock.to(clock.present - 12 * MINUTE);
-  await raise(crew, "noor", "prop", "Spinner runs out: 2 mm at the tip, seen while it was pulled through", "limiting", 4000);
+  clock.to(ago(12));
+  await raise(crew, "noor", "prop", "Spinner tip runs out 2 mm, seen while it was pulled through", "limiting", 4000);
 }
 
 /** A day's gates, the run of the rung with the whole crew, ended and its outcome stated. */
@@ -146,8 +148,8 @@ async function runOnDay(crew: Crew, { clock, zone }: Setting, days: number, rung
   const start = daysBefore(clock.present, days, "11:30", zone);
   const run = await plan(crew, rung, TEASEL_PLACES, start, "Long Acre, hard stand");
   await brief(crew, run, TEASEL_CREW);
-  past(days, "07:40");
-  await workDay(crew, 3);
+  const at = (time: string) => daysBefore(clock.present, days, time, zone);
+  await workDay(crew, at("07:40"), at("10:05"));
   past(days, "11:05");
   await sayGo(crew, run, TEASEL_CREW);
   await readWind(crew, run, "tomasz", 4, 7);
@@ -181,13 +183,19 @@ async function raise(
 async function mendSlipJoint(crew: Crew, { clock, zone }: Setting, finding: string): Promise<void> {
   clock.to(daysBefore(clock.present, 7, "17:30", zone));
   value(
-    await openSystem(crew.act("jonas"), { systems: ["exh"], reason: "Slip joint of cylinder 3 apart, new seal ring, springs", closed: true }),
+    await openSystem(crew.act("jonas"), {
+      systems: ["exh"],
+      reason: "Slip joint of cylinder 3 apart, new seal ring, springs",
+      closed: true,
+    }),
   );
   await crew.work(["MF", "IX"]);
-  await crew.sign("jonas", "builder", ["MF", "IX"]);
+  await crew.sign("jonas", "builder", ["MF"]);
   value(await fixFinding(crew.act("jonas"), { finding, words: "New seal ring, joint greased, both springs changed" }));
   clock.to(daysBefore(clock.present, 6, "18:00", zone));
-  await crew.sign("henrik", "inspector", ["MF", "IX"]);
+  await crew.sign("henrik", "inspector", ["MF"]);
+  await crew.sign("jonas", "builder", ["IX"]);
+  await crew.sign("henrik", "inspector", ["IX"]);
   value(await closeFinding(crew.act("henrik"), { finding, words: "Looked at it with a mirror: ring seated, springs locked" }));
 }
 

@@ -1,11 +1,12 @@
 /** Items that nobody ticks: extinguishers, loose ends, the engine log, and the release's own conditions. Judged at `facts.at`. */
 import { type Facts, isComputed } from "#app/lib/gates/facts";
 import type { Blocker, BlockerCode, ItemResult } from "#app/lib/gates/result";
-import type { Gate, Instant, Item, Role, SystemKey } from "#app/lib/gates/snapshot";
+import type { Gate, Instant, Item, LooseEnd, Role, SystemKey } from "#app/lib/gates/snapshot";
 import { blocker, count, ownerOf } from "#app/lib/gates/who";
 
-type Finding = { code: BlockerCode; sentence: string; roles: [Role, ...Role[]]; page: Blocker["link"]["page"]; id?: string | null };
-type Judged = { no: Finding[]; until: Instant | null };
+/** A reason why a computed item does not stand. */
+export type Lack = { code: BlockerCode; sentence: string; roles: [Role, ...Role[]]; page: Blocker["link"]["page"]; id?: string | null };
+type Judged = { no: Lack[]; until: Instant | null };
 
 /** @returns the state of a computed item: `done` or `to do`, with its blockers and the instant at which time alone ends it. */
 export function computedItem(facts: Facts, gate: Gate, item: Item): ItemResult {
@@ -48,7 +49,7 @@ function extinguishers(facts: Facts): Judged {
     .sort((a, b) => b.until - a.until);
   // 5 lb as stamped on the bottle is often written 2.27 kg: a gram of rounding must not stop a run.
   const first = ends.filter((e) => e.x.agent === "clean" || (e.x.agent === "co2" && e.x.charge >= LEAST_CO2 - 0.005));
-  const no: Finding[] = [];
+  const no: Lack[] = [];
   if (ends.length < 2 || !first.length)
     no.push({
       code: "extinguishers",
@@ -63,9 +64,9 @@ function extinguishers(facts: Facts): Judged {
 function looseEnds(facts: Facts): Judged {
   const rung = facts.nextRung?.key ?? null;
   const no = facts.snapshot.looseEnds
-    .filter((l) => !l.confirmed && !acceptedFor(l.accepted, rung))
+    .filter((l) => !l.confirmed && !acceptedFor(facts, l, rung))
     .map(
-      (l): Finding => ({
+      (l): Lack => ({
         code: "loose-end",
         sentence: `Loose end not restored: ${l.what}. Restore it, and have a second person confirm it.`,
         roles: ["builder", "inspector"],
@@ -76,12 +77,17 @@ function looseEnds(facts: Facts): Judged {
   return { no, until: null };
 }
 
-export const acceptedFor = (accepted: { as: Role; rung: string }[], rung: string | null): boolean =>
-  rung !== null && accepted.some((a) => a.as === "inspector" && a.rung === rung);
+/** An inspector accepted the loose end for the rung. From its due rung on that counts no more: it must be restored. */
+export function acceptedFor(facts: Facts, end: LooseEnd, rung: string | null): boolean {
+  if (rung === null || !end.accepted.some((a) => a.as === "inspector" && a.rung === rung)) return false;
+  if (end.due.kind !== "rung") return true;
+  const orderOf = (key: string) => facts.rungs.find((r) => r.key === key)?.order ?? Number.NEGATIVE_INFINITY;
+  return orderOf(rung) < orderOf(end.due.rung);
+}
 
-function logFindings(facts: Facts, runId: string | null): Finding[] {
+function logFindings(facts: Facts, runId: string | null): Lack[] {
   const run = runId ? facts.runs.get(runId) : undefined;
-  const no: Finding[] = [];
+  const no: Lack[] = [];
   if (!run || run.endedAt === null)
     return [{ code: "run-not-ended", sentence: "The run has not ended yet.", roles: ["lead"], page: "run", id: runId }];
   if (!run.logRead && run.noLog?.as !== "inspector")
@@ -104,8 +110,9 @@ function logFindings(facts: Facts, runId: string | null): Finding[] {
   return no;
 }
 
-function releaseRecord(facts: Facts): Finding[] {
-  const no: Finding[] = [];
+/** Nothing open, and every limit and every band of a marked item confirmed with a source. */
+export function releaseRecord(facts: Facts): Lack[] {
+  const no: Lack[] = [];
   const findings = facts.snapshot.findings.filter((f) => !f.closed);
   if (findings.length)
     no.push({
@@ -150,14 +157,14 @@ function defaultBand(part: Item["parts"][number]): boolean {
 const RELEASE_SYSTEMS: SystemKey[] = ["fuelsup", "fueleng", "oil", "oilfill", "coolant", "drive", "prop"];
 
 /** Nothing that holds a fluid or turns was opened since the engine last ran: what was opened is proved tight only by a run. */
-function releaseOpenings(facts: Facts): Finding[] {
+export function releaseOpenings(facts: Facts): Lack[] {
   const since = facts.newestEnd ?? Number.NEGATIVE_INFINITY;
   return facts.snapshot.openings
     .filter(
       (o) => o.mistake?.as !== "inspector" && o.systems.some((s) => RELEASE_SYSTEMS.includes(s)) && (o.closed === null || o.closed > since),
     )
     .map(
-      (o): Finding => ({
+      (o): Lack => ({
         code: "opening-since-run",
         sentence: `Opened ${facts.when(o.opened)} and not run since: ${o.reason}. Add the leak check run, or have an inspector mark a mistaken record.`,
         roles: ["lead", "inspector"],

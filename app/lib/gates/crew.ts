@@ -3,7 +3,7 @@ import { type Facts, heldAnyRole } from "#app/lib/gates/facts";
 import type { Blocker } from "#app/lib/gates/result";
 import type { RunFacts } from "#app/lib/gates/run-facts";
 import type { Answer, Instant, Rung } from "#app/lib/gates/snapshot";
-import { blocker, count, names, ownerOf } from "#app/lib/gates/who";
+import { blocker, count, names, ownerOf, ownersAmong } from "#app/lib/gates/who";
 import type { CrewRule, PositionKey } from "#app/lib/template/types";
 
 export const POSITION_NAMES: Record<PositionKey, string> = {
@@ -96,7 +96,7 @@ export function rollCallBlockers(facts: Facts, run: RunFacts): Blocker[] {
   const out: Blocker[] = [];
   const version = run.plan?.version ?? 0;
   const crew = crewOf(run);
-  const own = (members: string[]): Blocker["owner"] => ({ role: "crew", members, next: null });
+  const own = (members: string[]) => ownersAmong(facts, members);
   const at = { page: "run" as const, id: run.run.id };
   const subject: ["run", string] = ["run", run.run.id];
 

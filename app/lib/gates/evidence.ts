@@ -122,7 +122,8 @@ function tallyMet(facts: Facts, item: Item, part: TallyPart, given: TallyEvidenc
   if (!given.places.every((p) => whole(p.in))) return no("evidence-missing", "A count is missing.");
   const step = part.of ? facts.proofsOf.get(part.of)?.at(-1) : undefined;
   const outs = step?.evidence.find((e): e is TallyEvidence => e?.kind === "tally");
-  if (!step || step.withdrawn || !outs)
+  // A count that was found wrong is no measure for another one.
+  if (!step || step.withdrawn || step.state !== "done" || !outs)
     return no(
       "tally-unequal",
       `What was taken out has no count${part.of ? ` (${facts.items.get(part.of)?.words ?? item.words})` : ""}. Count that first.`,

@@ -106,6 +106,7 @@ function inSequence(s: Snapshot): Snapshot {
     findings: bySeq(s.findings),
     looseEnds: bySeq(s.looseEnds),
     openings: bySeq(s.openings),
+    values: [...s.values].sort((a, b) => Number(b.key === "redline") - Number(a.key === "redline") || (a.key < b.key ? -1 : 1)),
   };
 }
 

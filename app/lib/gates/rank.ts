@@ -1,7 +1,7 @@
 /** "What stops us": root causes instead of chains, and their order by how soon somebody can clear them. */
 import type { Facts } from "#app/lib/gates/facts";
 import type { Blocker, BlockerCode, GateResult } from "#app/lib/gates/result";
-import { blocker, count, ownerOf } from "#app/lib/gates/who";
+import { blocker, count, inSentence, ownerOf } from "#app/lib/gates/who";
 
 /** Blockers for the gates that themselves hold up `required`: those whose own prerequisites all stand. The rest only wait. */
 export function rootsOf(facts: Facts, gates: Map<string, GateResult>, required: string[]): Blocker[] {
@@ -45,7 +45,7 @@ function gateBlocker(facts: Facts, result: GateResult): Blocker {
     return blocker({ ...base, code: "gate-lapsed", title: `${name} has lapsed`, sentence: first?.sentence ?? "" });
   const detail =
     left && result.blockers[0]?.code === "item-to-do"
-      ? `${count(left, "item")} of ${result.of} left. Next: ${lower(first?.title ?? "")}.`
+      ? `${count(left, "item")} of ${result.of} left. Next: ${inSentence(first?.title ?? "").replace(/\.$/, "")}.`
       : (first?.sentence ?? "");
   return blocker({
     ...base,
@@ -54,8 +54,6 @@ function gateBlocker(facts: Facts, result: GateResult): Blocker {
     sentence: detail,
   });
 }
-
-const lower = (s: string): string => (/^[A-Z][a-z]/.test(s) ? s[0]?.toLowerCase() + s.slice(1) : s).replace(/\.$/, "");
 
 const WEIGHT: Partial<Record<BlockerCode, number>> = {
   "review-first": 0,

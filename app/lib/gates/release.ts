@@ -1,6 +1,6 @@
 /** Release for taxi tests: every rung settled, every run reviewed, every gate it requires standing, nothing open, two signatures. */
-import type { Facts } from "#app/lib/gates/facts";
-import { heldRole } from "#app/lib/gates/facts";
+import { releaseOpenings, releaseRecord } from "#app/lib/gates/computed";
+import { type Facts, heldRole } from "#app/lib/gates/facts";
 import { soonest } from "#app/lib/gates/items";
 import { rank, rootsOf } from "#app/lib/gates/rank";
 import type { Blocker, GateResult, ItemResult, ReleaseResult } from "#app/lib/gates/result";
@@ -8,6 +8,13 @@ import { reviewBlockers } from "#app/lib/gates/runs";
 import { sameCovers } from "#app/lib/gates/signing";
 import type { Gate, Instant, ReleaseSignature } from "#app/lib/gates/snapshot";
 import { blocker, count, ownerOf } from "#app/lib/gates/who";
+
+const LACK_TITLES: Partial<Record<Blocker["code"], string>> = {
+  "finding-open": "A finding is open",
+  "loose-end": "A loose end is left",
+  unconfirmed: "A figure is still a default",
+  "opening-since-run": "Opened since the engine last ran",
+};
 
 const releaseOnly = (g: Gate) => g.requiredBy.kind === "release" && !g.lookBack;
 
@@ -43,28 +50,17 @@ export function evaluateRelease(facts: Facts, items: Map<string, ItemResult>, ga
       );
   }
   blockers.push(...rootsOf(facts, gates, required));
-  const findings = facts.snapshot.findings.filter((f) => !f.closed);
-  if (findings[0])
+  // Asked here and not only by the items that show it, so that a board without those items asks no less.
+  for (const lack of [...releaseRecord(facts), ...releaseOpenings(facts)])
     blockers.push(
       blocker({
-        code: "finding-open",
-        subject: ["finding", findings[0].id],
-        title: `${count(findings.length, "finding")} open`,
-        sentence: `${findings[0].words}. An inspector closes it when it is fixed.`,
-        owner: ownerOf(facts, ["inspector", "builder"]),
-        page: "findings",
-      }),
-    );
-  const loose = facts.snapshot.looseEnds.filter((l) => !l.confirmed);
-  if (loose[0])
-    blockers.push(
-      blocker({
-        code: "loose-end",
-        subject: ["loose-end", loose[0].id],
-        title: `${count(loose.length, "loose end")} left`,
-        sentence: `${loose[0].what}. Restore it, and have a second person confirm it.`,
-        owner: ownerOf(facts, ["builder", "inspector"]),
-        page: "loose-ends",
+        code: lack.code,
+        subject: ["release", facts.snapshot.install.id],
+        title: LACK_TITLES[lack.code] ?? "Not ready for release",
+        sentence: lack.sentence,
+        owner: ownerOf(facts, lack.roles),
+        page: lack.page,
+        id: lack.id ?? null,
       }),
     );
 
@@ -79,7 +75,7 @@ export function evaluateRelease(facts: Facts, items: Map<string, ItemResult>, ga
   let state: ReleaseResult["state"] = "not yet";
   if (stands) state = "released";
   else if (ready) state = pair.length ? "half signed" : "ready";
-  if (!stands && wasReleased(facts)) state = "lapsed";
+  else if (wasReleased(facts)) state = "lapsed";
   if (ready && !stands) {
     const missing = pair[0] ? (pair[0].as === "lead" ? "inspector" : "lead") : "lead";
     blockers.push(

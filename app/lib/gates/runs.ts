@@ -10,7 +10,7 @@ import { rank, rootsOf } from "#app/lib/gates/rank";
 import type { Blocker, GateResult, ItemResult, RunResult, RunState } from "#app/lib/gates/result";
 import { goInForce, type RunFacts } from "#app/lib/gates/run-facts";
 import type { Instant, Rung, Wind } from "#app/lib/gates/snapshot";
-import { blocker, count, ownerOf } from "#app/lib/gates/who";
+import { blocker, count, inSentence, ownerOf, ownersAmong } from "#app/lib/gates/who";
 
 interface Board {
   facts: Facts;
@@ -156,7 +156,7 @@ function findingBlockers(facts: Facts): Blocker[] {
 
 function looseEndBlockers(facts: Facts, rung: Rung): Blocker[] {
   return facts.snapshot.looseEnds
-    .filter((l) => !l.confirmed && !acceptedFor(l.accepted, rung.key))
+    .filter((l) => !l.confirmed && !acceptedFor(facts, l, rung.key))
     .map((l) =>
       blocker({
         code: "loose-end",
@@ -175,7 +175,7 @@ function looseEndBlockers(facts: Facts, rung: Rung): Blocker[] {
 function limitBlockers(facts: Facts): Blocker[] {
   const open = facts.snapshot.values.filter((v) => (v.card || v.key === "redline") && (v.value === null || v.source === null));
   if (!open.length) return [];
-  const first = open.slice(0, 3).map((v) => v.label.toLowerCase());
+  const first = open.slice(0, 3).map((v) => inSentence(v.label));
   return [
     blocker({
       code: "limit-unconfirmed",
@@ -261,7 +261,7 @@ function startBlockers(facts: Facts, run: RunFacts, called: boolean): Blocker[] 
         subject: ["run", run.run.id],
         title: `${count(old.length, "answer")} too old`,
         sentence: `Answers may be ${minutes} min old at the start. Answer the roll call again.`,
-        owner: { role: "crew", members: old, next: null },
+        owner: ownersAmong(facts, old),
         ...at,
       }),
     );

@@ -1,5 +1,5 @@
 /** Who can clear a blocker: every "no" names members, or says whom to invite or what comes first. */
-import { type Facts, heldRole } from "#app/lib/gates/facts";
+import { type Facts, heldAnyRole, heldRole } from "#app/lib/gates/facts";
 import type { Blocker, BlockerCode, SubjectKind } from "#app/lib/gates/result";
 import type { Role } from "#app/lib/gates/snapshot";
 
@@ -47,3 +47,12 @@ export function names(facts: Facts, ids: string[], most = 3): string {
 }
 
 export const count = (n: number, one: string, many = `${one}s`): string => `${n} ${n === 1 ? one : many}`;
+
+/** Those of the crew named who are still members; when nobody is, the lead comes first. */
+export function ownersAmong(facts: Facts, members: string[]): Blocker["owner"] {
+  const active = members.filter((m) => heldAnyRole(facts, m, facts.at));
+  return { role: "crew", members: active, next: active.length ? null : "They are no longer members: the lead fills their places first." };
+}
+
+/** A label inside a sentence: "Oil pressure" becomes "oil pressure", "CHT" stays. */
+export const inSentence = (label: string): string => (/^[A-Z][a-z]/.test(label) ? `${label[0]?.toLowerCase()}${label.slice(1)}` : label);

@@ -3,7 +3,13 @@ import type { z } from "zod";
 import type { InstallContext } from "#app/lib/http/install.server";
 import type { Refused } from "#app/lib/http/respond.server";
 import { commandIdSchema } from "#app/lib/schemas/act";
-import { acceptNotApplicableSchema, confirmProofSchema, keepProofSchema, recordProofSchema, withdrawProofSchema } from "#app/lib/schemas/proof";
+import {
+  acceptNotApplicableSchema,
+  confirmProofSchema,
+  keepProofSchema,
+  recordProofSchema,
+  withdrawProofSchema,
+} from "#app/lib/schemas/proof";
 import { enterNumberSchema } from "#app/lib/schemas/set-up";
 import { withdrawSignatureSchema } from "#app/lib/schemas/signing";
 import { acceptNotApplicable } from "#app/lib/services/accept-not-applicable.server";
@@ -15,7 +21,7 @@ import type { Act } from "#app/lib/services/perform.server";
 import { recordProof } from "#app/lib/services/record-proof.server";
 import { withdrawProof } from "#app/lib/services/withdraw-proof.server";
 import { withdrawSignature } from "#app/lib/services/withdraw-signature.server";
-import { type UnitSystem, format, parseEntry } from "#app/lib/units/display";
+import { format, parseEntry, type UnitSystem } from "#app/lib/units/display";
 import { type EntryError, type ReadEntry, readEntry } from "#app/lib/views/evidence-form";
 import { instantAt } from "#app/lib/views/local-time";
 
@@ -39,7 +45,12 @@ const text = (form: FormData, name: string): string => {
 export async function actOnGate(install: InstallContext, form: FormData, photosRefused: EntryError[]): Promise<GateActed> {
   const item = text(form, "item") || null;
   const command = commandIdSchema.safeParse(text(form, "commandId"));
-  const acting: Acting = { install, form, item, act: { installId: install.installId, actor: { userId: install.me.id }, commandId: command.data ?? "" } };
+  const acting: Acting = {
+    install,
+    form,
+    item,
+    act: { installId: install.installId, actor: { userId: install.me.id }, commandId: command.data ?? "" },
+  };
   if (!command.success) return back(acting, 422, [], invalid(command.error.issues[0]?.message ?? ""));
   const intent = text(form, "intent");
   switch (intent) {
@@ -59,7 +70,12 @@ export async function actOnGate(install: InstallContext, form: FormData, photosR
     case "withdraw":
       return simple(acting, withdrawProofSchema, reasoned(form), withdrawProof);
     case "unsign":
-      return simple(acting, withdrawSignatureSchema, { signature: text(form, "signature"), reason: text(form, "reason") }, withdrawSignature);
+      return simple(
+        acting,
+        withdrawSignatureSchema,
+        { signature: text(form, "signature"), reason: text(form, "reason") },
+        withdrawSignature,
+      );
     default:
       return back(acting, 422, [], invalid("This page does not know what was asked. Load it again."));
   }
@@ -67,9 +83,19 @@ export async function actOnGate(install: InstallContext, form: FormData, photosR
 
 const reasoned = (form: FormData) => ({ proof: text(form, "proof"), reason: text(form, "reason") });
 
-async function simple<S extends z.ZodType, T>(acting: Acting, schema: S, input: unknown, service: (act: Act, input: z.output<S>) => Promise<Outcome<T>>) {
+async function simple<S extends z.ZodType, T>(
+  acting: Acting,
+  schema: S,
+  input: unknown,
+  service: (act: Act, input: z.output<S>) => Promise<Outcome<T>>,
+) {
   const parsed = schema.safeParse(input);
-  if (!parsed.success) return back(acting, 400, parsed.error.issues.map((i) => ({ field: i.path.join("."), message: i.message })));
+  if (!parsed.success)
+    return back(
+      acting,
+      400,
+      parsed.error.issues.map((i) => ({ field: i.path.join("."), message: i.message })),
+    );
   return finish(acting, await service(acting.act, parsed.data));
 }
 
@@ -83,7 +109,8 @@ async function prove(acting: Acting, intent: "prove" | "preview" | "failed" | "n
   const errors = [...photosRefused, ...when.errors];
   const note = text(form, "note");
   if (intent === "prove") errors.push(...read.errors, ...read.outOfBand);
-  else if (note.length < 3) errors.push({ field: "note", message: intent === "na" ? "Say why the item does not apply." : "Say what is not right." });
+  else if (note.length < 3)
+    errors.push({ field: "note", message: intent === "na" ? "Say why the item does not apply." : "Say what is not right." });
   if (errors.length) return back(acting, 400, errors);
   const state = intent === "prove" ? "done" : intent;
   // A failing proof keeps what was entered well; what was left out does not stop bad news.
@@ -100,14 +127,20 @@ async function prove(acting: Acting, intent: "prove" | "preview" | "failed" | "n
     at: when.at,
     told: form.get("told") === "yes",
   });
-  if (!parsed.success) return back(acting, 400, parsed.error.issues.map((i) => ({ field: i.path.join("."), message: i.message })));
+  if (!parsed.success)
+    return back(
+      acting,
+      400,
+      parsed.error.issues.map((i) => ({ field: i.path.join("."), message: i.message })),
+    );
   return finish(acting, await recordProof(acting.act, parsed.data));
 }
 
 function lateOf({ form, install }: Acting): { at: number | null; errors: EntryError[] } {
   const typed = text(form, "at");
   const did = text(form, "did");
-  if (!typed) return { at: null, errors: did && did !== install.me.id ? [{ field: "at", message: "Somebody else did it: enter when." }] : [] };
+  if (!typed)
+    return { at: null, errors: did && did !== install.me.id ? [{ field: "at", message: "Somebody else did it: enter when." }] : [] };
   const at = instantAt(typed, install.snapshot.install.timeZone);
   if (at === null) return { at, errors: [{ field: "at", message: "Enter day and time, such as 3 December, 14:10." }] };
   return { at, errors: at > install.now ? [{ field: "at", message: "That time has not come yet. Enter when it was done." }] : [] };
@@ -141,9 +174,19 @@ async function number(acting: Acting): Promise<GateActed> {
   };
   const band = part?.kind === "tick" ? null : { min: end("min", install.me.units), max: end("max", install.me.units) };
   if (errors.length) return back(acting, 400, errors);
-  const parsed = enterNumberSchema.safeParse({ item: id, part: n, band, text: text(form, field("text")) || null, source: text(form, field("source")) });
+  const parsed = enterNumberSchema.safeParse({
+    item: id,
+    part: n,
+    band,
+    text: text(form, field("text")) || null,
+    source: text(form, field("source")),
+  });
   if (parsed.success) return finish(acting, await enterNumber(acting.act, parsed.data));
-  return back(acting, 400, parsed.error.issues.map((i) => ({ field: field(i.path[0] === "band" ? "min" : String(i.path[0])), message: i.message })));
+  return back(
+    acting,
+    400,
+    parsed.error.issues.map((i) => ({ field: field(i.path[0] === "band" ? "min" : String(i.path[0])), message: i.message })),
+  );
 }
 
 /** A number that was only read back keeps every digit of the one that is there, instead of the rounded text's. */

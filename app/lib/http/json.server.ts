@@ -6,7 +6,8 @@ export type Json = { ok: true; value: unknown } | { ok: false; message: string }
 
 export async function readJson(request: Request): Promise<Json> {
   if (request.method !== "POST") return { ok: false, message: "This address takes POST." };
-  if (!/^application\/json\b/i.test(request.headers.get("Content-Type") ?? "")) return { ok: false, message: "Send JSON, with Content-Type application/json." };
+  if (!/^application\/json\b/i.test(request.headers.get("Content-Type") ?? ""))
+    return { ok: false, message: "Send JSON, with Content-Type application/json." };
   const reader = request.body?.getReader();
   const chunks: Uint8Array[] = [];
   let size = 0;

@@ -1,5 +1,11 @@
 // Reads a form that may carry photos: each picture is stored as it arrives and stands in the form as its file's id.
-import { FormDataParseError, MaxFileSizeExceededError, MaxFilesExceededError, MaxTotalSizeExceededError, parseFormData } from "@remix-run/form-data-parser";
+import {
+  FormDataParseError,
+  MaxFileSizeExceededError,
+  MaxFilesExceededError,
+  MaxTotalSizeExceededError,
+  parseFormData,
+} from "@remix-run/form-data-parser";
 import { data } from "react-router";
 import { readForm } from "#app/lib/http/form.server";
 import type { Act } from "#app/lib/services/perform.server";
@@ -14,7 +20,11 @@ export interface PhotoForm {
 }
 
 /** @param commandFor id of the command that stores picture n of this form: a repeated send stores nothing twice. */
-export async function readPhotoForm(request: Request, act: Omit<Act, "commandId">, commandFor: (form: FormData, n: number) => string): Promise<PhotoForm> {
+export async function readPhotoForm(
+  request: Request,
+  act: Omit<Act, "commandId">,
+  commandFor: (form: FormData, n: number) => string,
+): Promise<PhotoForm> {
   if (!/^multipart\/form-data\b/i.test(request.headers.get("Content-Type") ?? "")) return { form: await readForm(request), refused: [] };
   const refused: PhotoForm["refused"] = [];
   const pictures: { field: string; name: string; bytes: Uint8Array }[] = [];
@@ -39,7 +49,8 @@ async function parsed(request: Request, take: (file: Upload) => Promise<void>): 
     return await parseFormData(request, limits, take);
   } catch (error) {
     const most = PHOTO_LIMITS.bytes / 1_000_000;
-    if (error instanceof MaxFilesExceededError) throw data(`At most ${FILES} photos at once. Nothing was recorded; send fewer.`, { status: 413 });
+    if (error instanceof MaxFilesExceededError)
+      throw data(`At most ${FILES} photos at once. Nothing was recorded; send fewer.`, { status: 413 });
     if (error instanceof MaxFileSizeExceededError || error instanceof MaxTotalSizeExceededError)
       throw data(`A photo may have at most ${most} MB. Nothing was recorded; send a smaller one.`, { status: 413 });
     if (error instanceof FormDataParseError && !request.signal.aborted)

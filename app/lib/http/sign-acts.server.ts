@@ -22,7 +22,10 @@ export function readSheet(form: FormData, several: boolean): ReadSheet {
   });
   if (input.success) return { ok: true, commandId: commandId.data, input: input.data };
   const [issue] = input.error.issues;
-  return { ok: false, refusal: { ...invalid(issue?.message ?? "The sheet cannot be read."), code: issue?.path[0] === "pin" ? "pin-wrong" : "invalid" } };
+  return {
+    ok: false,
+    refusal: { ...invalid(issue?.message ?? "The sheet cannot be read."), code: issue?.path[0] === "pin" ? "pin-wrong" : "invalid" },
+  };
 }
 
 function parsedJson(text: FormDataEntryValue): unknown {

@@ -56,7 +56,8 @@ function secondPersonActs(e: Evaluation, me: Viewer): ActView[] {
     if (!proof) return [];
     const roles = (["inspector", "builder", "lead"] as const).filter((r) => me.roles.includes(r));
     const confirm = roles.some((as) => mayConfirm(e, { proof: proof.id, member: me.id, as }).ok);
-    const accept = e.result.items[item.id]?.blockers.some((b) => b.code === "needs-acceptance") && mayAccept(e, { proof: proof.id, member: me.id }).ok;
+    const accept =
+      e.result.items[item.id]?.blockers.some((b) => b.code === "needs-acceptance") && mayAccept(e, { proof: proof.id, member: me.id }).ok;
     return confirm ? [{ item, verb: "Look and confirm" }] : accept ? [{ item, verb: "Accept or not" }] : [];
   });
   return waiting.map(({ item, verb }) => ({ label: `${verb}: ${item.key}`, note: item.words, href: gateOf(install, item.gate, item.id) }));
@@ -66,7 +67,8 @@ function leadActs(e: Evaluation, me: Viewer): ActView[] {
   const { next } = e.result;
   if (!next || !me.roles.includes("lead")) return [];
   const install = e.snapshot.install.id;
-  if (next.id === null) return [{ label: `Plan run ${next.label}`, note: "time, wind limit, positions", href: `${boardOf(install)}/build-up` }];
+  if (next.id === null)
+    return [{ label: `Plan run ${next.label}`, note: "time, wind limit, positions", href: `${boardOf(install)}/build-up` }];
   if (next.clear && !next.go && next.state !== "running")
     return [{ label: `Call GO for run ${next.label}`, note: "the crew is told by mail", href: runOf(install, next.id) }];
   return [];
@@ -90,6 +92,8 @@ function workActs(e: Evaluation, me: Viewer): ActView[] {
 
 /** The first item of a gate that somebody has to prove: not done, and everything that it follows stands. */
 export function nextItem(e: Evaluation, gate: string): Item | null {
-  const items = (e.facts.itemsOf.get(gate) ?? []).filter((i) => !isComputed(i) && ["to do", "lapsed"].includes(e.result.items[i.id]?.state ?? ""));
+  const items = (e.facts.itemsOf.get(gate) ?? []).filter(
+    (i) => !isComputed(i) && ["to do", "lapsed"].includes(e.result.items[i.id]?.state ?? ""),
+  );
   return items.find((i) => i.follows.every((f) => e.result.items[f]?.stands ?? true)) ?? items[0] ?? null;
 }

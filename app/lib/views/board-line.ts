@@ -55,13 +55,15 @@ export function lineOf(e: Evaluation, balloons: Map<string, number>): LineView {
   const walk = shown.find(({ gate }) => gate.eachRun);
   return {
     gates: shown.filter(({ gate }) => !gate.eachRun && !gate.lookBack && gate.requiredBy.kind !== "release").map(view),
-    walkRound: walk ? { ...view(walk), name: nextWalkRound(e, walk.gate) } : null,
+    walkRound: walk ? { ...view(walk), ...walkRoundNames(e, walk.gate) } : null,
     runs: e.facts.rungs.map((rung) => runView(e, rung, balloons)),
     release: releaseView(e),
   };
 }
 
-const nextWalkRound = (e: Evaluation, gate: Gate): string => (e.result.next ? `${gate.name}, run ${e.result.next.label}` : gate.name);
+/** The walk-round is for one run: its names say which. */
+const walkRoundNames = (e: Evaluation, gate: Gate): { name: string; short: string } =>
+  e.result.next ? { name: `${gate.name}, run ${e.result.next.label}`, short: `${gate.short} ${e.result.next.label}` } : gate;
 
 function gateView(e: Evaluation, gate: Gate, judged: GateResult, balloon: number | null): LineGateView {
   return {

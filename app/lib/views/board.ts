@@ -16,7 +16,7 @@ export interface AnswerView {
   title: string;
   /** Second line: how many things stop it, or how far it is cleared. */
   state: string;
-  then: string | null;
+  note: string | null;
   tone: "clear" | "shut" | "held" | "go" | "running";
 }
 
@@ -76,31 +76,31 @@ export function answerOf(e: Evaluation): AnswerView {
     return {
       title: `Run ${next.label} is on`,
       state: "The run card is live",
-      then: "Anyone may call STOP.",
+      note: "Anyone may call STOP.",
       tone: "running",
     };
   if (next.go)
     return {
       title: `GO stands for ${run}`,
       state: `until ${e.facts.when(next.go.ends)}`,
-      then: `Cleared to ${rpmText(next.clearance.rpm)}.${startWords(next)}`,
+      note: `Cleared to ${rpmText(next.clearance.rpm)}.${startWords(next)}`,
       tone: "go",
     };
   if (next.state === "held")
     return {
       title: `HOLD, ${run}`,
       state: next.blockers.length ? stopped : "Nothing stops it now",
-      then: holdWords(e, next),
+      note: holdWords(e, next),
       tone: "held",
     };
   if (next.clear)
     return {
       title: `Clear for ${run}`,
       state: `cleared to ${rpmText(next.clearance.rpm)}`,
-      then: `${next.until === null ? "" : `Stands until ${e.facts.when(next.until)}. `}A lead can call GO.`,
+      note: `${next.until === null ? "" : `Stands until ${e.facts.when(next.until)}. `}A lead can call GO.`,
       tone: "clear",
     };
-  return { title: `Not clear for ${run}`, state: stopped, then: waitWords(e, next), tone: "shut" };
+  return { title: `Not clear for ${run}`, state: stopped, note: waitWords(e, next), tone: "shut" };
 }
 
 function releaseAnswer(e: Evaluation): AnswerView {
@@ -108,15 +108,20 @@ function releaseAnswer(e: Evaluation): AnswerView {
   const stopped = `${count(release.blockers.length, "thing")} ${release.blockers.length === 1 ? "stops" : "stop"} it`;
   switch (release.state) {
     case "released":
-      return { title: "Released for taxi tests", state: "Every run is reviewed", then: "Ready to taxi is not ready to fly.", tone: "clear" };
+      return {
+        title: "Released for taxi tests",
+        state: "Every run is reviewed",
+        note: "Ready to taxi is not ready to fly.",
+        tone: "clear",
+      };
     case "ready":
-      return { title: "Ready for release", state: "Lead and inspector sign", then: null, tone: "clear" };
+      return { title: "Ready for release", state: "Lead and inspector sign", note: null, tone: "clear" };
     case "half signed":
-      return { title: "Release half signed", state: "One signature is left", then: null, tone: "clear" };
+      return { title: "Release half signed", state: "One signature is left", note: null, tone: "clear" };
     case "lapsed":
-      return { title: "Release has lapsed", state: stopped, then: null, tone: "shut" };
+      return { title: "Release has lapsed", state: stopped, note: null, tone: "shut" };
     default:
-      return { title: "Not released yet", state: stopped, then: "Every run is settled.", tone: "shut" };
+      return { title: "Not released yet", state: stopped, note: "Every run is settled.", tone: "shut" };
   }
 }
 

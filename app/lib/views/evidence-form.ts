@@ -123,7 +123,10 @@ function readTorque(r: Reader, part: PartOf<"torque">, n: number): Evidence | nu
   const adapter = adapterText === "" ? null : amount(r, `p${n}.adapter`, adapterText, "length");
   const wrenchLength = lengthText === "" ? null : amount(r, `p${n}.wrench`, lengthText, "length");
   if (adapter !== null && adapter !== 0 && wrenchLength === null && lengthText === "")
-    r.errors.push({ field: `p${n}.wrench`, message: "With an adapter the wrench’s own length is needed: middle of the handle to middle of the drive." });
+    r.errors.push({
+      field: `p${n}.wrench`,
+      message: "With an adapter the wrench’s own length is needed: middle of the handle to middle of the drive.",
+    });
   const first = values?.[0];
   if (first !== undefined && first > 0 && adapter !== null && wrenchLength !== null) {
     const set = wrenchSetting(first, { wrenchLength, extension: adapter, angle: 0 });
@@ -164,15 +167,20 @@ function readCrank(r: Reader, n: number): Evidence | null {
   const bursts = began.flatMap((time, row) => {
     if (!time && !seconds[row] && !pressure[row]) return [];
     const at = instantAt(`${dayAt(r.at.now, timeZone)}T${time}`, timeZone);
-    if (at === null) r.errors.push({ field: `p${n}.began.${row}`, message: `Burst ${row + 1}: enter when it began, by the clock at the install.` });
+    if (at === null)
+      r.errors.push({ field: `p${n}.began.${row}`, message: `Burst ${row + 1}: enter when it began, by the clock at the install.` });
     else if (at > r.at.now) r.errors.push({ field: `p${n}.began.${row}`, message: `Burst ${row + 1}: that time has not come yet today.` });
     const length = amount(r, `p${n}.seconds.${row}`, seconds[row] ?? "", "time");
     const seen = pressure[row] ? amount(r, `p${n}.pressure.${row}`, pressure[row], "time") : null;
     if (length !== null && seen !== null && seen > length)
-      r.errors.push({ field: `p${n}.pressure.${row}`, message: `Burst ${row + 1}: pressure is seen inside the burst, so at most after ${length} s.` });
+      r.errors.push({
+        field: `p${n}.pressure.${row}`,
+        message: `Burst ${row + 1}: pressure is seen inside the burst, so at most after ${length} s.`,
+      });
     return at === null || length === null ? [] : [{ at, seconds: length, pressureAfter: seen }];
   });
-  if (!bursts.length && r.errors.length === before) r.errors.push({ field: `p${n}.began.0`, message: "No burst is entered. Enter each one, in order." });
+  if (!bursts.length && r.errors.length === before)
+    r.errors.push({ field: `p${n}.began.0`, message: "No burst is entered. Enter each one, in order." });
   return r.errors.length === before ? { kind: "crank", bursts } : null;
 }
 

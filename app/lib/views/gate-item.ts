@@ -68,7 +68,8 @@ export function itemView(e: Evaluation, item: Item, no: number, me: Reader): Ite
   const parts = partViews(e, item, me.units);
   const prove = proveOf(e, item, me, parts);
   const following = item.follows.every((f) => e.result.items[f]?.stands ?? true);
-  const open = !computed && !result.stands && result.state !== "second eyes" && prove.ok && following && !waitsForAcceptance(result.blockers);
+  const open =
+    !computed && !result.stands && result.state !== "second eyes" && prove.ok && following && !waitsForAcceptance(result.blockers);
   const newest = [...(e.facts.proofsOf.get(item.id) ?? [])].reverse();
   return {
     id: item.id,
@@ -79,10 +80,17 @@ export function itemView(e: Evaluation, item: Item, no: number, me: Reader): Ite
     words: item.words,
     caution: item.caution,
     source: item.source ?? null,
-    marks: [...(item.killer ? ["guards a life"] : []), ...(item.secondEyes ? ["2 people"] : []), ...(item.guarded ? ["guarded"] : []), ...(item.step ? ["step"] : [])],
+    marks: [
+      ...(item.killer ? ["guards a life"] : []),
+      ...(item.secondEyes ? ["2 people"] : []),
+      ...(item.guarded ? ["guarded"] : []),
+      ...(item.step ? ["step"] : []),
+    ],
     nut: nutOf(result.state),
     word: result.state === "second eyes" ? "1 of 2" : result.state === "not applicable" ? "does not apply" : result.state,
-    reasons: result.stands ? [] : result.blockers.map((b) => ({ title: b.title, sentence: b.sentence, who: whoClears(e.snapshot, b.owner) })),
+    reasons: result.stands
+      ? []
+      : result.blockers.map((b) => ({ title: b.title, sentence: b.sentence, who: whoClears(e.snapshot, b.owner) })),
     proof: proof ? proofView(e, item, proof, me.units) : null,
     history: newest.map((p) => proofView(e, item, p, me.units)),
     parts,
@@ -93,7 +101,8 @@ export function itemView(e: Evaluation, item: Item, no: number, me: Reader): Ite
     failed: ask(mayProve(e, { item: item.id, member: me.id, as: me.roles[0] ?? "crew", state: "failed", late: false })),
     na: ask(mayProve(e, { item: item.id, member: me.id, as: prove.roles[0] ?? "builder", state: "na", late: false })),
     confirm: result.blockers.some((b) => b.code === "needs-second-eyes") && proof ? confirmOf(e, proof.id, me) : null,
-    accept: result.blockers.some((b) => b.code === "needs-acceptance") && proof ? ask(mayAccept(e, { proof: proof.id, member: me.id })) : null,
+    accept:
+      result.blockers.some((b) => b.code === "needs-acceptance") && proof ? ask(mayAccept(e, { proof: proof.id, member: me.id })) : null,
     keep: result.state === "lapsed" && proof && me.roles.includes("inspector") ? ask(mayKeep(e, { proof: proof.id, member: me.id })) : null,
     withdraw: proof ? ask(mayWithdrawProof(e, { proof: proof.id, member: me.id })) : null,
     enterNumber: ask(mayEnterNumber(e, { item: item.id, member: me.id })),

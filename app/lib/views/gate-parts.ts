@@ -56,7 +56,13 @@ export type PartView = { n: number; missing: boolean } & (
   | { kind: "tick"; asks: string | null; text: string | null; from: string | null }
   | { kind: "measure"; label: string; places: string[]; criterion: CriterionView }
   | { kind: "torque"; label: string; places: string[]; criterion: CriterionView; count: number | null; lengthUnit: string }
-  | { kind: "tally"; mode: "pairs" | "out" | "in"; places: { place: string; out: number | null }[]; expected: number | null; words: { out: string; in: string } }
+  | {
+      kind: "tally";
+      mode: "pairs" | "out" | "in";
+      places: { place: string; out: number | null }[];
+      expected: number | null;
+      words: { out: string; in: string };
+    }
   | { kind: "photo"; of: string; optional: boolean }
   | { kind: "reading"; label: string; places: string[]; quantity: Quantity; unit: string; optional: boolean }
   | { kind: "text"; asks: string }
@@ -73,7 +79,13 @@ function partView(e: Evaluation, item: Item, part: Part, n: number, units: UnitS
   const base = { n, missing: numberMissing(e.facts, part) !== null };
   switch (part.kind) {
     case "tick":
-      return { ...base, kind: "tick", asks: part.reference?.asks ?? null, text: part.reference?.text ?? null, from: part.reference?.source ?? null };
+      return {
+        ...base,
+        kind: "tick",
+        asks: part.reference?.asks ?? null,
+        text: part.reference?.text ?? null,
+        from: part.reference?.source ?? null,
+      };
     case "measure":
       return { ...base, kind: "measure", label: part.label, places: part.places, criterion: criterionView(e, part.criterion, units) };
     case "torque":
@@ -87,7 +99,14 @@ function partView(e: Evaluation, item: Item, part: Part, n: number, units: UnitS
         lengthUnit: symbolOf(displayUnit("length", units)),
       };
     case "tally":
-      return { ...base, kind: "tally", mode: part.mode, expected: part.expected ?? null, words: part.words, places: placesOf(e, item, part) };
+      return {
+        ...base,
+        kind: "tally",
+        mode: part.mode,
+        expected: part.expected ?? null,
+        words: part.words,
+        places: placesOf(e, item, part),
+      };
     case "photo":
       return { ...base, kind: "photo", of: part.of, optional: part.optional };
     case "reading":
@@ -142,7 +161,8 @@ type TallyPart = Extract<Part, { kind: "tally" }>;
 function placesOf(e: Evaluation, item: Item, part: TallyPart): { place: string; out: number | null }[] {
   const from = part.mode === "in" && part.of ? e.facts.proofsOf.get(part.of)?.at(-1) : currentProof(e.facts, item.id);
   const given = from?.evidence.find((g) => g?.kind === "tally");
-  if (given?.kind === "tally" && given.places.length) return given.places.map(({ place, out }) => ({ place, out: part.mode === "in" ? out : null }));
+  if (given?.kind === "tally" && given.places.length)
+    return given.places.map(({ place, out }) => ({ place, out: part.mode === "in" ? out : null }));
   const cylinders = part.expected ?? 0;
   return part.mode === "out" && cylinders > 0 && cylinders <= 12
     ? Array.from({ length: cylinders }, (_, i) => ({ place: `${i + 1}`, out: null }))
@@ -189,4 +209,5 @@ function sourced(e: Evaluation, prefill: Prefill): number | null {
   return plan?.rpm ?? e.facts.nextRung?.rpm ?? null;
 }
 
-const typedAmount = (field: AmountField, si: number, units: UnitSystem): string => format(field.quantity, si, units, field.as?.[units]).value;
+const typedAmount = (field: AmountField, si: number, units: UnitSystem): string =>
+  format(field.quantity, si, units, field.as?.[units]).value;

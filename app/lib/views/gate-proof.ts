@@ -11,7 +11,15 @@ import { nameIn } from "#app/lib/views/places";
 
 /** A piece of evidence to be drawn: a value on its rule, strokes of a tally, pictures, or words. */
 export type GivenView =
-  | { kind: "value"; label: string; value: string; unit: string; rule: { min: number | null; max: number | null; at: number } | null; says: string; out: boolean }
+  | {
+      kind: "value";
+      label: string;
+      value: string;
+      unit: string;
+      rule: { min: number | null; max: number | null; at: number } | null;
+      says: string;
+      out: boolean;
+    }
   | { kind: "tally"; count: number; says: string; note: string }
   | { kind: "photos"; files: string[]; of: string }
   | { kind: "words"; text: string };

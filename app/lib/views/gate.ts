@@ -41,7 +41,7 @@ export interface GateView {
   until: string | null;
   caution: { title: string; text: string; sign: "propeller" | "strap" | "fire" | "general" } | null;
   feeds: FeedView[];
-  then: Place[];
+  onward: Place[];
   waits: { title: string; sentence: string; place: Place }[];
   items: ItemView[];
   signatures: SignatureView[];
@@ -65,7 +65,7 @@ export function gateView(e: Evaluation, gateId: string, me: Reader): GateView | 
     until: result.until === null ? null : e.facts.when(result.until),
     caution: cautionOf(gate),
     feeds: result.prerequisites.map((id) => feedOf(e, id)),
-    then: thenOf(e, gateId),
+    onward: onwardOf(e, gateId),
     waits: result.blockers
       .filter((b) => ["gate-waits", "grounding", "loose-end"].includes(b.code))
       .map((b) => ({ title: b.title, sentence: b.sentence, place: placeOf(e.snapshot, b.link) })),
@@ -97,11 +97,16 @@ const missingPlace = (e: Evaluation, result: GateResult): string =>
 
 function feedOf(e: Evaluation, id: string): FeedView {
   const gate = e.facts.gates.get(id);
-  return { id, name: gate?.short ?? "Gate", state: valveOf(e.result.gates[id]?.state ?? "waiting"), href: gateOf(e.snapshot.install.id, id) };
+  return {
+    id,
+    name: gate?.short ?? "Gate",
+    state: valveOf(e.result.gates[id]?.state ?? "waiting"),
+    href: gateOf(e.snapshot.install.id, id),
+  };
 }
 
 /** Gates that wait for this one; the run where there are none. */
-function thenOf(e: Evaluation, gateId: string): Place[] {
+function onwardOf(e: Evaluation, gateId: string): Place[] {
   const install = e.snapshot.install.id;
   const after = Object.values(e.result.gates).filter((g) => g.present && g.prerequisites.includes(gateId));
   // The walk-round needs every gate; it is named only where nothing else comes first.
@@ -191,17 +196,34 @@ function footOf(e: Evaluation, gate: Gate, result: GateResult, items: ItemView[]
     return {
       says: result.holding.length ? `Signed once. ${gate.name} waits for you.` : "All items stand",
       note: "The sheet reads back what you sign.",
-      act: { label: result.holding.length ? `Countersign as ${as}` : `Sign as ${as}`, note: `${count(result.of, "item")}, with your PIN`, href: `${gateOf(e.snapshot.install.id, gate.id)}/sign` },
+      act: {
+        label: result.holding.length ? `Countersign as ${as}` : `Sign as ${as}`,
+        note: `${count(result.of, "item")}, with your PIN`,
+        href: `${gateOf(e.snapshot.install.id, gate.id)}/sign`,
+      },
     };
   const left = items.filter((i) => i.reasons.length > 0);
-  if (result.stands) return { says: `${gate.name} stands signed`, note: result.until === null ? "Nothing is left to do here." : `Until ${e.facts.when(result.until)}.`, act: toBoard(e) };
+  if (result.stands)
+    return {
+      says: `${gate.name} stands signed`,
+      note: result.until === null ? "Nothing is left to do here." : `Until ${e.facts.when(result.until)}.`,
+      act: toBoard(e),
+    };
   if (!left.length) return waitingFoot(e, result, gate);
-  const mine = left.find((i) => i.confirm?.ok || i.accept?.ok) ?? left.find((i) => i.open) ?? left.find((i) => i.prove.numberMissing && i.enterNumber.ok);
+  const mine = left.find((i) => i.confirm?.ok || i.accept?.ok) ?? left.find((i) => i.open || (i.prove.numberMissing && i.enterNumber.ok));
   const kinds = left.map((i) => `${i.no} ${i.nut === "second-eyes" ? "second eyes" : i.nut === "lapsed" ? "lapsed" : "to do"}`);
   const says = `${count(left.length, "item")} left before ${result.state === "waiting" ? "it can be signed" : "anyone can sign"}`;
   const note = kinds.length > 6 ? `${kinds.slice(0, 5).join(", ")} and ${kinds.length - 5} more` : kinds.join(", ");
-  if (!mine) return { says, note: `${left[0]?.reasons[0]?.who ? `Next: ${left[0].reasons[0].who}. ` : ""}${note}`, act: toBoard(e) };
-  const verb = mine.confirm?.ok ? "Look and confirm" : mine.accept?.ok ? "Accept or not" : mine.prove.numberMissing ? "Enter the number" : mine.nut === "lapsed" ? "Do again" : "Next";
+  if (!mine) return { says, note: `${left[0]?.reasons[0]?.who ? `${left[0].reasons[0].who} ` : ""}${note}`, act: toBoard(e) };
+  const verb = mine.confirm?.ok
+    ? "Look and confirm"
+    : mine.accept?.ok
+      ? "Accept or not"
+      : mine.prove.numberMissing
+        ? "Enter the number"
+        : mine.nut === "lapsed"
+          ? "Do again"
+          : "Next";
   return { says, note, act: { label: `${verb}: item ${mine.no}`, note: mine.words, href: `#${mine.anchor}` } };
 }
 
@@ -210,7 +232,11 @@ function waitingFoot(e: Evaluation, result: GateResult, gate: Gate): FootView {
   if (!gate.policy.length)
     return { says: "No signatures of its own", note: "It is covered by the two signatures of the release.", act: toBoard(e) };
   const who = first ? whoClears(e.snapshot, first.owner) : "";
-  return { says: first?.title ?? "Nothing for you here", note: first ? `${first.sentence}${who ? ` ${who}.` : ""}` : "", act: toBoard(e) };
+  return { says: first?.title ?? "Nothing for you here", note: first ? `${first.sentence} ${who}` : "", act: toBoard(e) };
 }
 
-const toBoard = (e: Evaluation): FootView["act"] => ({ label: "Back to the board", note: "what stops us, and what you can do", href: boardOf(e.snapshot.install.id) });
+const toBoard = (e: Evaluation): FootView["act"] => ({
+  label: "Back to the board",
+  note: "what stops us, and what you can do",
+  href: boardOf(e.snapshot.install.id),
+});

@@ -47,7 +47,7 @@ export function goView(e: Evaluation, runId: string, me: { id: string }): GoView
     endsBy: [
       byWindow
         ? `GO ends by itself ${hours} h after the planned start.`
-        : "GO ends by itself when the first thing that it stands on runs out.",
+        : `GO ends by itself when the first thing that it stands on runs out${firstOut(e, judged, ends)}.`,
       "Any change that stops the run turns GO into HOLD by itself and tells the same people. Any member may call HOLD.",
       `At the start answers and wind may be ${Math.round(settings.freshness / 60_000)} min old at most; older ones are asked again.`,
     ],

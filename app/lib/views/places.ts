@@ -54,6 +54,6 @@ export function anyOf(names: string[], most = 3): string {
 export const nameIn = (snapshot: Snapshot, member: string): string =>
   snapshot.members.find((m) => m.id === member)?.name ?? "a former member";
 
-/** Who can clear it, by name, or what comes first. */
+/** Who can clear it, by name, or what comes first: a sentence. */
 export const whoClears = (snapshot: Snapshot, owner: Blocker["owner"]): string =>
-  owner.members.length ? anyOf(owner.members.map((m) => nameIn(snapshot, m))) : (owner.next ?? "");
+  owner.members.length ? `For ${anyOf(owner.members.map((m) => nameIn(snapshot, m)))}.` : (owner.next ?? "");

@@ -20,7 +20,9 @@ const ROLES: SigningRole[] = ["builder", "inspector", "lead"];
 
 export function severalView(e: Evaluation, me: Viewer & { units: UnitSystem }, wanted: string | null): SeveralView {
   const ready = (as: SigningRole) =>
-    Object.values(e.result.gates).filter((g) => g.present && g.ready && !g.stands && maySign(e, { gate: g.id, member: me.id, as, covers: null }).ok);
+    Object.values(e.result.gates).filter(
+      (g) => g.present && g.ready && !g.stands && maySign(e, { gate: g.id, member: me.id, as, covers: null }).ok,
+    );
   const roles = ROLES.filter((r) => me.roles.includes(r)).map((role) => ({ role, gates: ready(role).length }));
   const as = (roles.find((r) => r.role === wanted) ?? roles.find((r) => r.gates > 0) ?? roles[0])?.role ?? "builder";
   return {

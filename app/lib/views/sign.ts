@@ -79,7 +79,9 @@ function sentenceOf(e: Evaluation, covers: Cover[], as: SigningRole): string {
   const people = anyOf([...new Set(proofs.map((p) => nameIn(e.snapshot, p.did)))]).replace(/ or (?=[^,]*$)/, " and ");
   const newest = proofs.length ? Math.max(...proofs.map((p) => p.counts)) : null;
   const what = `${count(done, "item")} done${na ? `, ${na} not applicable` : ""}, by ${people || "nobody"}${newest === null ? "" : `, the last on ${e.facts.when(newest)}`}`;
-  return as === "builder" ? `did this work or saw it done: ${what}.` : `did none of this work and have looked at what is recorded: ${what}.`;
+  return as === "builder"
+    ? `did this work or saw it done: ${what}.`
+    : `did none of this work and have looked at what is recorded: ${what}.`;
 }
 
 function coverView(e: Evaluation, cover: Cover, units: UnitSystem): SheetView["items"][number] {
