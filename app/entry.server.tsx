@@ -11,6 +11,7 @@ import { setSecurityHeaders } from "#app/lib/http/headers.server";
 import { currentRequest, newRequestFacts, requestContext } from "#app/lib/http/request.server";
 import { log } from "#app/lib/log.server";
 import { startMailWorker } from "#app/lib/mail/worker.server";
+import { startGoWatch } from "#app/lib/services/go-watch.server";
 
 export { createRequestHandler, RouterContextProvider } from "react-router";
 // For the server in front, which runs outside this bundle and must share its modules.
@@ -89,7 +90,11 @@ export async function boot(): Promise<() => Promise<void>> {
     );
   });
   const mail = startMailWorker();
-  return () => mail.stop();
+  const watch = startGoWatch();
+  return async () => {
+    watch.stop();
+    await mail.stop();
+  };
 }
 
 // The development server has nobody in front to call boot; it loads this module anew at each edit, and boots once.

@@ -409,3 +409,24 @@ describe("preview and release", () => {
     expect(at(board).release.state).toBe("lapsed");
   });
 });
+
+describe("what stops a run is never lost on the way", () => {
+  test("a required gate that waits for one the run does not require still stops it", () => {
+    const board = makeBoard({ X: { requiredBy: { kind: "release" }, items: { x: {} } }, W: { needs: ["X"], items: { w: {} } } });
+    board.proof("w");
+    board.sign("W");
+    board.wait().sign("W", "di", "inspector");
+    const run = board.run("1");
+    board.wait().brief(run);
+    const result = at(board).runs.find((r) => r.id === run.id);
+    expect(result).toMatchObject({ clear: false });
+    expect(result?.blockers.map((b) => b.subject.id)).toEqual(["X"]);
+  });
+
+  test("a gate that only a grounding finding stops is told by the finding alone", () => {
+    const { board, result } = briefed();
+    const finding = board.finding("grounding", { system: "oil" });
+    expect(result()?.clear).toBe(false);
+    expect(result()?.blockers.map((b) => b.subject.id)).toEqual([finding.id]);
+  });
+});

@@ -19,7 +19,7 @@ export function loader({ context }: Route.LoaderArgs) {
 export default function BuildUp({ loaderData: view }: Route.ComponentProps) {
   return (
     <main id="main">
-      <RunTitle title={view.title} state={view.state} rungs={view.ladder} />
+      <RunTitle title={view.title} state={view.state} rungs={view.ladder} gates={view.gates} />
       <CautionSlab title="up in steps." sign="propeller">
         Each run goes a little higher, after the one before was inspected and reviewed. The engine, propeller and kit maker’s manuals come
         before any speed or time on these cards.
@@ -53,7 +53,7 @@ function RungRow({ rung }: { rung: Rung }) {
             <Figure value={rung.key} /> {rung.name}
           </h2>
           <p>
-            <Figure value={rung.rpm.replace(" rpm", "")} unit={rung.rpm.endsWith(" rpm") ? "rpm" : undefined} className="text-lead" />,{" "}
+            {rung.rpm.endsWith(" rpm") ? <Figure value={rung.rpm.replace(" rpm", "")} unit="rpm" className="text-lead" /> : rung.rpm},{" "}
             <b>{rung.word}</b>
           </p>
           {rung.runs.length > 0 && (

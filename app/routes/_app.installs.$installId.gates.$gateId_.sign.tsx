@@ -11,11 +11,11 @@ import { leftOutOf } from "#app/db/queries/left-out.server";
 import { readForm } from "#app/lib/http/form.server";
 import { installContext } from "#app/lib/http/install.server";
 import { refused } from "#app/lib/http/respond.server";
-import { aboutPin, readSheet } from "#app/lib/http/sign-acts.server";
+import { readSheet } from "#app/lib/http/sign-acts.server";
 import { newId } from "#app/lib/ids";
 import { signGates } from "#app/lib/services/sign-gates.server";
 import { gateOf } from "#app/lib/views/places";
-import { sheetView } from "#app/lib/views/sign";
+import { aboutPin, sheetView } from "#app/lib/views/sign";
 import type { Route } from "./+types/_app.installs.$installId.gates.$gateId_.sign";
 
 export const meta: Route.MetaFunction = ({ loaderData }) => [

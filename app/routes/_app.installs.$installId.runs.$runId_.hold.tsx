@@ -46,8 +46,9 @@ export default function CallHold({ loaderData, actionData }: Route.ComponentProp
   const error = actionData?.result.error;
   return (
     <main id="main">
-      <RunTitle title={`HOLD, run ${view.label}`} state={view.when} rungs={view.ladder} here={view.id} held />
+      <RunTitle title={`HOLD, run ${view.label}`} state={view.when} rungs={view.ladder} gates={view.gates} here={view.id} held />
       <ReasonPage
+        after={<MailReaders title="Who is told" readers={readers} what="HOLD mail" />}
         commandId={commandId}
         label="Why"
         hint="In a few words: they stand in the mail and in the record."
@@ -62,7 +63,6 @@ export default function CallHold({ loaderData, actionData }: Route.ComponentProp
         <Notice kind="hold" title="Is the engine running? Shout STOP first, or cross your arms overhead.">
           HOLD is for the record and the mail: GO is over at once, nobody starts the engine, and everybody answers again before the next GO.
         </Notice>
-        <MailReaders title="Who is told" readers={readers} what="HOLD mail" />
       </ReasonPage>
     </main>
   );

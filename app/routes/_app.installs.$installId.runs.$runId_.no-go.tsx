@@ -46,7 +46,7 @@ export default function CallNoGo({ loaderData, actionData }: Route.ComponentProp
   const error = actionData?.result.error;
   return (
     <main id="main">
-      <RunTitle title={`Send a no-go for run ${view.label}`} state={view.when} rungs={view.ladder} here={view.id} />
+      <RunTitle title={`Send a no-go for run ${view.label}`} state={view.when} rungs={view.ladder} gates={view.gates} here={view.id} />
       <ReasonPage
         commandId={commandId}
         label="Note to the crew"

@@ -14,6 +14,7 @@ import { planRun } from "#app/lib/services/plan-run.server";
 import { lineOf } from "#app/lib/views/board-line";
 import { runOf } from "#app/lib/views/places";
 import { planRules, planView } from "#app/lib/views/plan";
+import { gatesShare } from "#app/lib/views/run-words";
 import type { Route } from "./+types/_app.installs.$installId.runs.$runId_.plan";
 
 export const meta: Route.MetaFunction = ({ loaderData }) => [
@@ -36,6 +37,7 @@ export async function loader({ context, params, url }: Route.LoaderArgs) {
     when: localOf(run.run.plannedStart ?? now, snapshot.install.timeZone),
     place: await placeOfRun(db(), installId, run.run.id),
     ladder: lineOf(e, new Map()).runs,
+    gates: gatesShare(e),
     here: run.run.id,
     back: runOf(installId, run.run.id),
     commandId: newId(),
@@ -56,10 +58,16 @@ export async function action({ context, request, params }: Route.ActionArgs) {
 }
 
 export default function ChangePlan({ loaderData, actionData }: Route.ComponentProps) {
-  const { view, why, version, called, when, place, ladder, here, back, commandId } = loaderData;
+  const { view, why, version, called, when, place, ladder, gates, here, back, commandId } = loaderData;
   return (
     <main id="main">
-      <RunTitle title={`Change the plan of run ${view.label}`} state={`run card version ${version} now`} rungs={ladder} here={here} />
+      <RunTitle
+        title={`Change the plan of run ${view.label}`}
+        state={`run card version ${version} now`}
+        rungs={ladder}
+        gates={gates}
+        here={here}
+      />
       {why ? (
         <p className="px-4 py-5 text-lead tablet:px-6">{why}</p>
       ) : (

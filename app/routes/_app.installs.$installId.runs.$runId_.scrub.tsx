@@ -45,7 +45,7 @@ export default function ScrubRun({ loaderData, actionData }: Route.ComponentProp
   const error = actionData?.result.error;
   return (
     <main id="main">
-      <RunTitle title={`Scrub run ${view.label}`} state={view.when} rungs={view.ladder} here={view.id} />
+      <RunTitle title={`Scrub run ${view.label}`} state={view.when} rungs={view.ladder} gates={view.gates} here={view.id} />
       <ReasonPage
         commandId={commandId}
         label="Why"

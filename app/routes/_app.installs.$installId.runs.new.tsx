@@ -12,7 +12,7 @@ import { planRun } from "#app/lib/services/plan-run.server";
 import { lineOf } from "#app/lib/views/board-line";
 import { boardOf, runOf } from "#app/lib/views/places";
 import { planRules, planView } from "#app/lib/views/plan";
-import { lowerFirst } from "#app/lib/views/run-words";
+import { gatesShare, lowerFirst } from "#app/lib/views/run-words";
 import type { Route } from "./+types/_app.installs.$installId.runs.new";
 
 export const meta: Route.MetaFunction = ({ loaderData }) => [{ title: `Plan run ${loaderData?.view.label ?? ""} · Bladecount` }];
@@ -29,6 +29,7 @@ export function loader({ context, url }: Route.LoaderArgs) {
     why: verdict.ok ? null : (verdict.blockers[0]?.sentence ?? ""),
     when: { date: localOf(now + DAY, snapshot.install.timeZone).date, time: "09:30" },
     ladder: lineOf(e, new Map()).runs,
+    gates: gatesShare(e),
     back: `${boardOf(installId)}/build-up`,
     commandId: newId(),
   };
@@ -47,10 +48,10 @@ export async function action({ context, request, url }: Route.ActionArgs) {
 }
 
 export default function NewRun({ loaderData, actionData }: Route.ComponentProps) {
-  const { view, why, when, ladder, back, commandId } = loaderData;
+  const { view, why, when, ladder, gates, back, commandId } = loaderData;
   return (
     <main id="main">
-      <RunTitle title={`Plan run ${view.label}`} state={lowerFirst(view.rungName)} rungs={ladder} />
+      <RunTitle title={`Plan run ${view.label}`} state={lowerFirst(view.rungName)} rungs={ladder} gates={gates} />
       {why ? (
         <p className="px-4 py-5 text-lead tablet:px-6">{why}</p>
       ) : (

@@ -9,10 +9,11 @@ import { Notice } from "#app/components/ui/Notice";
 import { readForm } from "#app/lib/http/form.server";
 import { installContext } from "#app/lib/http/install.server";
 import { refused } from "#app/lib/http/respond.server";
-import { aboutPin, readSheet } from "#app/lib/http/sign-acts.server";
+import { readSheet } from "#app/lib/http/sign-acts.server";
 import { newId } from "#app/lib/ids";
 import { signGates } from "#app/lib/services/sign-gates.server";
 import { boardOf } from "#app/lib/views/places";
+import { aboutPin } from "#app/lib/views/sign";
 import { severalView } from "#app/lib/views/sign-several";
 import type { Route } from "./+types/_app.installs.$installId.sign";
 

@@ -16,6 +16,8 @@ export interface SheetField {
   unit: string;
   options: { value: string; label: string }[];
   value: string;
+  /** Decided by the install: sent along, not asked. */
+  fixed: boolean;
 }
 
 export interface Sheet {
@@ -82,6 +84,7 @@ function FieldSet({ item, entry, prefix, fields, row, live }: FieldSetProps) {
     <div className="field-row">
       {fields.map((field) => {
         const name = `${prefix}${field.name}`;
+        if (field.fixed) return <input key={field.name} type="hidden" name={name} value={field.value} />;
         const hidden = live && field.when !== null && now(field.when.field) !== field.when.is;
         const common = {
           id: controlId(item, name, row),

@@ -20,7 +20,7 @@ export function ClearanceBlock({ figure, binds, next, limits, raise, lower }: Cl
         cleared to
       </h2>
       <p className="leading-none">
-        <Figure value={figure} className="text-fig-l font-bold tracking-[-0.05em]" /> <Figure value="rpm" className="text-h2" />
+        <Figure value={figure} className="text-fig-l font-bold tracking-[-0.05em]" /> <Figure value="rpm" className="ml-3 text-h2" />
       </p>
       <p className="mt-3 text-lead">
         <b>{binds}</b> {next}

@@ -8,6 +8,8 @@ import { Fitting } from "#app/components/ui/Fitting";
 interface ReasonPageProps {
   /** What comes before the reason: who gets it, what it means. */
   children: ReactNode;
+  /** Below the act: details that must not push it off a phone. */
+  after?: ReactNode;
   commandId: string;
   label: string;
   hint: string;
@@ -23,7 +25,7 @@ interface ReasonPageProps {
 
 /** An act that needs a reason: what it does, the reason, one big act, and the way back. */
 export function ReasonPage(props: ReasonPageProps) {
-  const { children, commandId, label, hint, act, note, stop, why, back, errors, reason } = props;
+  const { children, after, commandId, label, hint, act, note, stop, why, back, errors, reason } = props;
   const busy = useNavigation().state === "submitting";
   const wrong = [
     ...(errors.form ?? []).map((message) => ({ field: null, message })),
@@ -49,6 +51,7 @@ export function ReasonPage(props: ReasonPageProps) {
           {act}
         </Fitting>
       </Form>
+      {after}
       <p className="pt-6">
         <Fitting href={back.href} className="w-fit">
           {back.label}

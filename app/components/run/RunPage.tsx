@@ -38,6 +38,7 @@ export function RunPage(props: RunPageProps) {
           title={held ? `HOLD, ${view.title.replace(/^Run/, "run")}` : view.title}
           state={view.when}
           rungs={view.ladder}
+          gates={view.gates}
           here={view.id}
           held={held}
         />

@@ -19,6 +19,8 @@ interface RunTitleProps {
   rungs: LadderRung[];
   /** The run that this page is about. */
   here?: string;
+  /** Share of the gates before the next run that stand signed: the flow comes no further than they let it. */
+  gates: number;
   held?: boolean;
 }
 
@@ -26,7 +28,7 @@ const PITCH = 76;
 const TOP = 104;
 
 /** The run's name on the pipe, with the whole ladder of blades at its right: the flow goes as far as the reviewed runs. */
-export function RunTitle({ title, state, rungs, here, held = false }: RunTitleProps) {
+export function RunTitle({ title, state, rungs, here, gates, held = false }: RunTitleProps) {
   const width = PITCH * rungs.length;
   const ahead = rungs.findIndex((r) => r.state !== "reviewed" && r.state !== "scrubbed");
   const reached = ahead < 0 ? rungs.length : ahead;
@@ -36,7 +38,10 @@ export function RunTitle({ title, state, rungs, here, held = false }: RunTitlePr
         <span className="title-pipe-name">{title}</span> <span className="title-pipe-state">{state}</span>
       </h1>
       <div className="title-pipe-bar" aria-hidden="true">
-        <i className="w-2/3 wide:w-[calc(100%-var(--rest))]" style={{ "--rest": `${width - reached * PITCH + 4}px` }} />
+        <i
+          className="w-[calc(66.6%*var(--gates))] wide:w-[calc((100%-var(--rest))*var(--gates))]"
+          style={{ "--rest": `${width - reached * PITCH + 4}px`, "--gates": gates }}
+        />
         {held && <i className="left-2/3! w-2 bg-stop-edge! wide:hidden" />}
         <svg
           className="absolute top-[-106px]! right-6 left-auto! hidden h-auto! w-auto! wide:block"

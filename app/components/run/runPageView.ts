@@ -20,6 +20,7 @@ export interface RunPageView {
   when: string;
   state: "planned" | "called" | "held" | "running" | "ended" | "reviewed" | "scrubbed";
   ladder: LadderRung[];
+  gates: number;
   notice: { kind: "hold" | "done" | "danger" | "plain"; title: string; text: string } | null;
   clearance: Omit<ClearanceBlockProps, "lower"> & { lower: number | null };
   card: RunCardProps | null;

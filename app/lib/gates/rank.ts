@@ -41,6 +41,9 @@ function gateBlocker(facts: Facts, result: GateResult): Blocker {
       title: result.state === "half signed" ? `${name} waits for its second signature` : `${name} is ready to sign`,
       sentence: first?.sentence ?? "",
     });
+  // The finding or loose end itself says it better than "has lapsed".
+  if (first && (first.code === "grounding" || first.code === "loose-end"))
+    return blocker({ ...base, code: "gate-in-work", title: `${name} is stopped`, sentence: `${first.title}. ${first.sentence}` });
   if (result.state === "lapsed")
     return blocker({ ...base, code: "gate-lapsed", title: `${name} has lapsed`, sentence: first?.sentence ?? "" });
   const detail =
@@ -59,10 +62,10 @@ const WEIGHT: Partial<Record<BlockerCode, number>> = {
   "review-first": 0,
   "other-run": 0,
   "earlier-rung": 0,
+  grounding: 0,
   "not-signed": 1,
   "gate-lapsed": 2,
   "gate-in-work": 3,
-  grounding: 4,
   "loose-end": 4,
   "limit-unconfirmed": 5,
   "not-planned": 6,

@@ -58,7 +58,7 @@ export function evaluateRun(board: Board, rung: Rung, run: RunFacts | null): Run
   const blockers = rank(
     [
       ...ladderBlockers(board, rung, run),
-      ...rootsOf(facts, gates, required),
+      ...rootsOf(facts, gates, required).filter((b) => !onlyGrounded(gates.get(b.subject.id))),
       ...findingBlockers(facts),
       ...looseEndBlockers(facts, rung),
       ...limitBlockers(facts),
@@ -85,6 +85,10 @@ function stateOf(run: RunFacts, review: Blocker[], called: boolean): RunState {
   if (run.word === null) return "planned";
   return called ? "called" : "held";
 }
+
+/** A gate that only a grounding finding stops: the finding stands in the list by itself, and stops the run by itself. */
+const onlyGrounded = (gate: GateResult | undefined): boolean =>
+  !!gate?.blockers.length && gate.blockers.every((b) => b.code === "grounding");
 
 /** Earlier rungs, reviews, and other runs under way. */
 function ladderBlockers(board: Board, rung: Rung, run: RunFacts | null): Blocker[] {

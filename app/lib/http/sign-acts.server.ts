@@ -35,6 +35,3 @@ function parsedJson(text: FormDataEntryValue): unknown {
     return null;
   }
 }
-
-/** Whether a refusal is about the PIN: it is shown at the PIN then. */
-export const aboutPin = (code: string): boolean => code.startsWith("pin-");

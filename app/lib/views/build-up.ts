@@ -8,7 +8,7 @@ import type { Rung } from "#app/lib/gates/snapshot";
 import { count } from "#app/lib/gates/who";
 import { type LineRunView, lineOf } from "#app/lib/views/board-line";
 import { boardOf, runOf } from "#app/lib/views/places";
-import { type CardView, cardView, dayWhen } from "#app/lib/views/run-words";
+import { type CardView, cardView, dayWhen, gatesShare } from "#app/lib/views/run-words";
 
 export interface RungView {
   key: string;
@@ -28,7 +28,8 @@ export interface RungView {
 export interface BuildUpView {
   title: string;
   state: string;
-  fill: number;
+  /** Share of the next run's gates that stand. */
+  gates: number;
   ladder: LineRunView[];
   rungs: RungView[];
 }
@@ -42,7 +43,7 @@ export function buildUpView(e: Evaluation, member: string): BuildUpView {
   return {
     title: "Build-up",
     state: next ? `${settled} of ${rungs.length} rungs settled, run ${now?.label ?? next} ${cleared}` : "every rung is settled",
-    fill: rungs.length ? settled / rungs.length : 0,
+    gates: gatesShare(e),
     ladder: lineOf(e, new Map()).runs,
     rungs: rungs.map((rung) => rungView(e, rung, member)),
   };

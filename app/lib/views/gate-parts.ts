@@ -3,7 +3,7 @@
  * Pure: the item's criteria in, plain fields for the form out.
  */
 import type { AmountField, FormField, Prefill } from "#app/lib/bench/form";
-import { SHEET_FORMS } from "#app/lib/bench/sheet";
+import { SHEET_FORMS, traitInputs } from "#app/lib/bench/sheet";
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import { bandInForce, numberMissing } from "#app/lib/gates/evidence";
 import { currentProof } from "#app/lib/gates/facts";
@@ -41,6 +41,8 @@ export interface FieldView {
   unit: string;
   options: { value: string; label: string }[];
   value: string;
+  /** Decided by the install's traits: sent along, not asked. */
+  fixed: boolean;
 }
 
 export interface SheetView {
@@ -171,13 +173,14 @@ function placesOf(e: Evaluation, item: Item, part: TallyPart): { place: string; 
 
 function sheetView(e: Evaluation, sheet: SheetKey, units: UnitSystem): SheetView {
   const form = SHEET_FORMS[sheet];
+  const decided = traitInputs(sheet, e.snapshot.traits);
   const rowsOf = (key: ValueKey | null, least: number) => (key && e.facts.values.get(key)?.value) || least;
   return {
     sheet,
     title: form.title,
     formula: form.formula,
     caution: form.caution,
-    fields: form.fields.map((f) => fieldView(e, f, units)),
+    fields: form.fields.map((f) => fieldView(e, f, units, decided[f.name])),
     groups: form.groups.map((g) => ({
       name: g.name,
       label: g.label,
@@ -188,11 +191,11 @@ function sheetView(e: Evaluation, sheet: SheetKey, units: UnitSystem): SheetView
   };
 }
 
-function fieldView(e: Evaluation, field: FormField, units: UnitSystem): FieldView {
+function fieldView(e: Evaluation, field: FormField, units: UnitSystem, decided?: string): FieldView {
   const { kind, name, label, help, optional, when } = field;
   const unit = field.kind === "quantity" ? symbolOf(field.as?.[units] ?? displayUnit(field.quantity, units)) : "";
   const options = field.kind === "choice" ? field.options : [];
-  return { kind, name, label, help, optional, when, unit, options, value: prefilled(e, field, units) };
+  return { kind, name, label, help, optional, when, unit, options, value: decided ?? prefilled(e, field, units), fixed: decided !== undefined };
 }
 
 function prefilled(e: Evaluation, field: FormField, units: UnitSystem): string {

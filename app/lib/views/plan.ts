@@ -41,7 +41,7 @@ export function planView(e: Evaluation, rung: Rung, run: Run | null): PlanView {
   return {
     rung: rung.key,
     rungName: rung.name,
-    label: run?.label ?? rung.key,
+    label: run?.label ?? (e.snapshot.runs.some((r) => r.rung === rung.key) ? `${rung.key} again` : rung.key),
     zone: `Times are those at the install, ${e.snapshot.install.timeZone}.`,
     rules: rulesOf(rung),
     rpmHint: rpmHint(rung, cleared?.binds && cleared.binds.kind !== "plan" ? rpmText(cleared.rpm) : null),

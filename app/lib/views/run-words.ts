@@ -149,3 +149,9 @@ export const holdText = (seconds: number | null): string =>
 /** The run in one sentence: "Start, oil pressure, 1,100 to 1,238 rpm for 1:30, idle." */
 export const inShort = (card: RunCard): string =>
   `${upperFirst(card.steps.map((s) => [lowerFirst(s.title), stepSpeed(s)].filter(Boolean).join(" ") + (s.hold ? ` for ${holdText(s.hold)}` : "")).join(", "))}.`;
+
+/** Share of the gates that the next run requires which stand signed; 1 when every rung is settled. */
+export function gatesShare(e: Evaluation): number {
+  const required = (e.result.next?.requiredGates ?? []).filter((id) => e.result.gates[id]?.present);
+  return required.length ? required.filter((id) => e.result.gates[id]?.stands).length / required.length : 1;
+}

@@ -12,7 +12,16 @@ import { format } from "#app/lib/units/display";
 import { type LineRunView, lineOf } from "#app/lib/views/board-line";
 import { nameIn, type Place, placeOf, runOf, whoClears } from "#app/lib/views/places";
 import { type MineView, mineView, type RollView, rollView } from "#app/lib/views/run-crew";
-import { type CardView, type ClearanceView, cardView, clearanceView, dayWhen, lowerFirst, timeOrWhen } from "#app/lib/views/run-words";
+import {
+  type CardView,
+  type ClearanceView,
+  cardView,
+  clearanceView,
+  dayWhen,
+  gatesShare,
+  lowerFirst,
+  timeOrWhen,
+} from "#app/lib/views/run-words";
 
 export interface StopView {
   n: number;
@@ -36,6 +45,8 @@ export interface RunView {
   when: string;
   state: RunState;
   ladder: LineRunView[];
+  /** Share of the next run's gates that stand. */
+  gates: number;
   notice: { kind: "hold" | "done" | "danger" | "plain"; title: string; text: string } | null;
   clearance: ClearanceView;
   card: CardView | null;
@@ -83,6 +94,7 @@ export function runView(e: Evaluation, runId: string, me: Viewer, place: string)
     when: place ? `${time}, ${place}` : time,
     state: judged.state,
     ladder: lineOf(e, new Map()).runs,
+    gates: gatesShare(e),
     notice: noticeOf(e, run, judged),
     clearance: clearanceView(e, judged.clearance),
     card: run.plan ? cardView(run.plan.card, run.plan.version) : null,

@@ -112,3 +112,6 @@ function meansOf(e: Evaluation, gateId: string, me: string, last: boolean): stri
     ...(last ? [] : [`${others.length ? anyOf(others) : "An inspector"} countersigns after you. Nobody can do both.`]),
   ];
 }
+
+/** Whether a refusal is about the PIN: it is shown at the PIN then. */
+export const aboutPin = (code: string): boolean => code.startsWith("pin-");
