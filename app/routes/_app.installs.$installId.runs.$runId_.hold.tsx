@@ -46,7 +46,7 @@ export default function CallHold({ loaderData, actionData }: Route.ComponentProp
   const error = actionData?.result.error;
   return (
     <main id="main">
-      <RunTitle title={`HOLD, run ${view.label}`} state={view.when} rungs={view.ladder} gates={view.gates} here={view.id} held />
+      <RunTitle title={`Call HOLD, run ${view.label}`} state={view.when} rungs={view.ladder} gates={view.gates} here={view.id} />
       <ReasonPage
         after={<MailReaders title="Who is told" readers={readers} what="HOLD mail" />}
         commandId={commandId}

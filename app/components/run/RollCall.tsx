@@ -63,7 +63,7 @@ export function RollCall({ title, entries, empty, stations, gear, pusher, wind }
 export function StationMark({ letter, answer, large = false }: { letter: string; answer: RollRow["answer"]; large?: boolean }) {
   const size = large ? 62 : 44;
   return (
-    <svg className={cx("station flex-none", `station-${answer}`)} viewBox="-26 -26 52 52" width={size} height={size} aria-hidden="true">
+    <svg className={cx("station flex-none", `station-${answer}`)} viewBox="-28 -28 56 56" width={size} height={size} aria-hidden="true">
       {answer === "none" && <circle className="station-ring" r="24.5" />}
       <circle r="19" />
       <text textAnchor="middle" y="6.5">

@@ -11,7 +11,7 @@ import { evaluateRelease } from "#app/lib/gates/release";
 import type { BoardResult, GateResult, ItemResult, RunResult } from "#app/lib/gates/result";
 import { RULES_VERSION } from "#app/lib/gates/rules-version";
 import { evaluateRun } from "#app/lib/gates/runs";
-import type { Gate, Instant, Opening, Snapshot } from "#app/lib/gates/snapshot";
+import type { Gate, Instant, Item, Opening, Snapshot } from "#app/lib/gates/snapshot";
 import { blocker, ownerOf } from "#app/lib/gates/who";
 
 /** A board and what it was worked out from; verdicts on acts take this. */
@@ -80,12 +80,18 @@ function evaluateItems(facts: Facts, waitsFor: Map<string, string[]>): Map<strin
   for (const gate of facts.gates.values()) limits.set(gate.id, gateLimits(facts, gate, waitsFor.get(gate.id) ?? [], newest));
 
   const results = new Map<string, ItemResult>();
-  const { order, circle } = inOrder([...facts.items.keys()], (id) => facts.items.get(id)?.follows ?? []);
+  const judge = (gate: Gate, item: Item) =>
+    results.set(item.id, evaluateItem({ facts, gate, limits: limits.get(gate.id) as GateLimits, results }, item));
+  // Most items follow nothing and need no order; the others come after what they follow.
+  const following: string[] = [];
+  for (const gate of facts.gates.values())
+    for (const item of facts.itemsOf.get(gate.id) ?? [])
+      if (item.follows.length) following.push(item.id);
+      else judge(gate, item);
+  const { order, circle } = inOrder(following, (id) => facts.items.get(id)?.follows ?? []);
   for (const id of [...order, ...circle]) {
-    const item = facts.items.get(id);
-    const gate = item && facts.gates.get(item.gate);
-    if (!item || !gate) continue;
-    results.set(id, evaluateItem({ facts, gate, limits: limits.get(gate.id) as GateLimits, results }, item));
+    const item = facts.items.get(id) as Item;
+    judge(facts.gates.get(item.gate) as Gate, item);
   }
   // In a circle one item is judged before another that it follows has a result, and falls with it; the other must fall too.
   for (const id of circle) {

@@ -39,8 +39,8 @@ export function numberMissing(facts: Facts, part: Part): string | null {
 
 /** @returns whether the proof's evidence meets every part of the item, and the first part that it does not meet. */
 export function evidenceMeets(facts: Facts, item: Item, proof: Proof): Met {
-  for (const [n, part] of item.parts.entries()) {
-    const met = partMet(facts, item, part, proof.evidence[n] ?? null, proof);
+  for (let n = 0; n < item.parts.length; n++) {
+    const met = partMet(facts, item, item.parts[n] as Part, proof.evidence[n] ?? null, proof);
     if (!met.ok) return met;
   }
   return YES;
@@ -91,8 +91,8 @@ function inBand(facts: Facts, criterion: Criterion, places: number, values: numb
   const band = bandInForce(criterion, (key) => facts.values.get(key)?.value ?? null) as Band;
   if (values.length !== places || !values.every(Number.isFinite)) return no("evidence-missing", `A value is missing: ${label}.`);
   // With room for the last binary digit: a limit entered in one unit and a reading in another must meet at the boundary.
-  const out = values.filter((v) => (band.min !== null && !atLeast(v, band.min)) || (band.max !== null && !atMost(v, band.max)));
-  return out.length ? no("out-of-band", `${label} is outside its band. Put it right and measure again.`) : YES;
+  const out = values.some((v) => (band.min !== null && !atLeast(v, band.min)) || (band.max !== null && !atMost(v, band.max)));
+  return out ? no("out-of-band", `${label} is outside its band. Put it right and measure again.`) : YES;
 }
 
 type TallyPart = Extract<Part, { kind: "tally" }>;

@@ -208,7 +208,10 @@ export function currentProof(facts: Facts, item: string): Proof | null {
   return last && !last.withdrawn ? last : null;
 }
 
-export const isComputed = (item: Item): boolean => item.parts.some((p) => p.kind === "computed");
+export function isComputed(item: Item): boolean {
+  for (const part of item.parts) if (part.kind === "computed") return true;
+  return false;
+}
 
 /** Whether the member held the role at that instant. */
 export function heldRole(facts: Facts, member: string, role: Role, at: Instant): boolean {

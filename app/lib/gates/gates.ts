@@ -56,7 +56,7 @@ export function evaluateGate(
   }
   const ready = complete && missing.length === 0 && !inCircle;
 
-  const covers = coversNow(facts, own);
+  const covers = coversNow(own, items);
   const signed = fillPolicy(facts, gate, holding(facts, gate, covers));
   const stands = ready && signed.length === gate.policy.length;
   if (ready && !stands) blockers.push(signatureBlocker(facts, gate, signed.length, covers, signed[0]?.by));

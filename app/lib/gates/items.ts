@@ -66,7 +66,9 @@ export function evaluateItem(ctx: ItemContext, item: Item): ItemResult {
   if (!met.ok) return notStanding(ctx, item, proof, "to do", [met]);
 
   const lapsed: Cause[] = [];
-  const add = (cause: Cause | null) => cause && lapsed.push(cause);
+  const add = (cause: Cause | null) => {
+    if (cause) lapsed.push(cause);
+  };
   add(revisionFails(item, proof));
   add(toolFails(facts, proof));
   let until: Instant | null = null;
@@ -124,8 +126,11 @@ function newerThanFails({ facts, limits }: ItemContext, item: Item, proof: Proof
   return null;
 }
 
+const FOLLOWS_NOTHING = { causes: [], until: null } as const;
+
 /** Rule 8: what it follows stands with an older proof; a step it rests on still held; a step it ends is over. */
-function followsFail({ facts, results }: ItemContext, item: Item, proof: Proof): { causes: Cause[]; until: Instant | null } {
+function followsFail({ facts, results }: ItemContext, item: Item, proof: Proof): { causes: readonly Cause[]; until: Instant | null } {
+  if (!item.follows.length && !facts.endsSteps.has(item.id)) return FOLLOWS_NOTHING;
   const causes: Cause[] = [];
   let until: Instant | null = null;
   for (const id of item.follows) {

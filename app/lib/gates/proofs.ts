@@ -19,6 +19,7 @@ export const revisionFails = (item: Item, proof: Proof): Cause | null =>
 
 /** Rule 3: every tool named was in date when used, and no out-of-tolerance record reaches that instant. */
 export function toolFails(facts: Facts, proof: Proof): Cause | null {
+  if (!proof.tools.length) return null;
   for (const id of proof.tools) {
     const tool = facts.tools.get(id);
     const name = tool?.name ?? "The tool";
@@ -89,7 +90,7 @@ export function acceptanceFails(facts: Facts, proof: Proof): Cause | null {
 
 /** When a keep lets the proof count for openings and `after`; null = not kept. Each-run gates cannot be kept. */
 export function keptAt(facts: Facts, gate: Gate, proof: Proof): Instant | null {
-  if (gate.eachRun) return null;
+  if (gate.eachRun || !facts.keepsOf.size) return null;
   let at: Instant | null = null;
   for (const k of facts.keepsOf.get(proof.id) ?? [])
     if (
@@ -105,6 +106,7 @@ export function keptAt(facts: Facts, gate: Gate, proof: Proof): Instant | null {
 
 /** Rule 6: newer than the closing of every opening of its systems, and none still open. `counts` already minds a keep. */
 export function openingFails(facts: Facts, item: Item, counts: Instant): Cause | null {
+  if (!facts.openings.size) return null;
   for (const system of item.systems) {
     const slot = facts.openings.get(system);
     if (slot?.open)

@@ -1,12 +1,16 @@
 /** Signatures: what they cover, whether they hold, and which of them fill the places of a gate's policy. */
-import { currentProof, type Facts, heldRole, isComputed } from "#app/lib/gates/facts";
+import { type Facts, heldRole, isComputed } from "#app/lib/gates/facts";
+import type { ItemResult } from "#app/lib/gates/result";
 import type { Cover, Gate, Item, Signature } from "#app/lib/gates/snapshot";
 
-/** What a signer of these items would cover now: each item but computed ones, its revision and its current proof, standing or not. */
-export function coversNow(facts: Facts, items: Item[]): Cover[] {
-  return items
-    .filter((i) => !isComputed(i))
-    .map((i) => ({ item: i.id, revision: i.revision, proof: currentProof(facts, i.id)?.id ?? null }));
+/** What a signer would cover now: each item but computed ones, its revision and its current proof, standing or not. */
+export function coversNow(items: Item[], results: ItemResult[]): Cover[] {
+  const covers: Cover[] = [];
+  for (let n = 0; n < items.length; n++) {
+    const item = items[n] as Item;
+    if (!isComputed(item)) covers.push({ item: item.id, revision: item.revision, proof: (results[n] as ItemResult).proof });
+  }
+  return covers;
 }
 
 const equal = (a: Cover, b: Cover): boolean => a.item === b.item && a.revision === b.revision && a.proof === b.proof;
