@@ -1,4 +1,4 @@
-import { useEffect, useState } from "react";
+import { useEffect, useRef, useState } from "react";
 import { FieldErrors } from "#app/components/forms/Field";
 import { type ControlProps, wire } from "#app/components/forms/types";
 
@@ -19,10 +19,16 @@ export function PinInput(props: PinInputProps) {
   const { control, hintId, errorId, aria } = wire(props);
   const [pin, setPin] = useState("");
   const [live, setLive] = useState(false);
-  useEffect(() => setLive(true), []);
+  const field = useRef<HTMLInputElement>(null);
+  // The field keeps its own value, so that digits typed before the page came alive are not lost.
+  useEffect(() => {
+    setLive(true);
+    setPin(field.current?.value ?? "");
+  }, []);
   const enter = (text: string) => {
     const next = text.replace(/\D/g, "").slice(0, longest);
     setPin(next);
+    if (field.current && field.current.value !== next) field.current.value = next;
     onLength?.(next.length);
   };
   return (
@@ -36,6 +42,7 @@ export function PinInput(props: PinInputProps) {
       <span className="field-frame pin-frame">
         <input
           {...aria}
+          ref={field}
           id={control}
           name={name}
           type="password"
@@ -48,7 +55,6 @@ export function PinInput(props: PinInputProps) {
           // biome-ignore lint/a11y/noAutofocus: on a sign sheet the PIN is the one thing left to enter
           autoFocus={autoFocus}
           autoComplete={autoComplete}
-          value={live ? pin : undefined}
           onChange={(event) => enter(event.currentTarget.value)}
         />
       </span>
