@@ -9,7 +9,7 @@ import { ClearanceBars } from "#app/components/ui/ClearanceBars";
 import { installContext } from "#app/lib/http/install.server";
 import { boardView } from "#app/lib/views/board";
 import { boardAnswer, tagOf } from "#app/lib/views/board-answer";
-import { boardOf } from "#app/lib/views/places";
+import { boardOf, recordPlaces } from "#app/lib/views/places";
 import type { Route } from "./+types/_app.installs.$installId._index";
 
 export const meta: Route.MetaFunction = ({ loaderData }) => [
@@ -21,6 +21,7 @@ export function loader({ context, url }: Route.LoaderArgs) {
   return {
     registration: snapshot.install.registration,
     home: boardOf(installId),
+    records: recordPlaces(installId),
     view: boardView(e, me),
     whole: url.searchParams.has("whole"),
     watch: { address: `/api/v1/installs/${installId}/board`, tag: tagOf(boardAnswer(e, head)) },
@@ -28,15 +29,10 @@ export function loader({ context, url }: Route.LoaderArgs) {
 }
 
 export default function Board({ loaderData }: Route.ComponentProps) {
-  const { view, home, whole, watch } = loaderData;
+  const { view, home, whole, watch, records } = loaderData;
   useBoardWatch(watch.address, watch.tag);
   const { answer, stops, line, acts, clearance, crew } = view;
   const short = crew !== null && !whole;
-  const records = [
-    { label: "Opening", href: `${home}/openings` },
-    { label: "Loose end", href: `${home}/loose-ends` },
-    { label: "Finding", href: `${home}/findings` },
-  ];
   return (
     <main id="main">
       <section className="board-top" aria-label="Where it stands">

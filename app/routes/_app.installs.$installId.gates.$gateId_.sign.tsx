@@ -62,17 +62,21 @@ export default function Sign({ loaderData, actionData }: Route.ComponentProps) {
   const refusal = actionData?.refusal;
   const pinErrors = refusal && aboutPin(refusal.code) ? [refusal.message] : undefined;
   const stub = sheet.refusal ? (
-    <Notice kind="refused" title={sheet.refusal.title}>
-      <p>{sheet.refusal.sentence}</p>
-      {sheet.refusal.who && <p>{sheet.refusal.who}</p>}
-      <Fitting href={sheet.refusal.place.href}>{sheet.refusal.place.label}</Fitting>
-    </Notice>
+    <p>
+      <b>You cannot sign this now.</b> The reason stands on the sheet.
+    </p>
   ) : (
     <PinStub key={refusal?.message} form="sign" label={sheet.act} note={sheet.name} errors={pinErrors} busy={busy} live={live} />
   );
   return (
     <main id="main" className="sign-page">
       <SignTag kicker={kicker} title={sheet.act} stub={stub}>
+        {sheet.refusal && (
+          <Notice kind="refused" title={sheet.refusal.title} action={<Fitting href={sheet.refusal.place.href}>{sheet.refusal.place.label}</Fitting>}>
+            <p>{sheet.refusal.sentence}</p>
+            {sheet.refusal.who && <p>{sheet.refusal.who}</p>}
+          </Notice>
+        )}
         {refusal && !pinErrors && (
           <Notice kind="refused" title={refusal.blockers[0]?.title ?? "Not signed"} role="alert">
             <p>{refusal.message}</p>

@@ -16,9 +16,9 @@ export function SignTag({ kicker, title, children, stub }: SignTagProps) {
       <div className="sign-tag">
         <div className="sign-paper" aria-hidden="true" />
         <svg className="sign-wire" width="116" height="120" viewBox="0 0 116 120" aria-hidden="true">
-          <path d="M-22 10C22 14 52 40 72 66M-22 46C20 50 50 58 70 68" />
-          <circle className="sign-eyelet" cx="86" cy="80" r="27" />
-          <circle className="sign-hole" cx="86" cy="80" r="12" />
+          <path d="M-22 10C14 14 34 40 46 66M-22 46C12 50 30 58 44 68" />
+          <circle className="sign-eyelet" cx="58" cy="80" r="27" />
+          <circle className="sign-hole" cx="58" cy="80" r="12" />
         </svg>
         <div className="sign-read">
           <p className="sign-kicker">{kicker}</p>

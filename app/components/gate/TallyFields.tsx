@@ -30,20 +30,22 @@ export function TallyFields({ item, n, entry, mode, places, expected, words, liv
         return (
           // biome-ignore lint/suspicious/noArrayIndexKey: the row is the identity, its name is what is typed
           <div className="field-row" key={row}>
-            <TextInput
-              id={controlId(item, at("place"), row)}
-              name={at("place")}
-              label="Place"
-              size={12}
-              maxLength={80}
-              readOnly={mode === "in" && Boolean(known?.place)}
-              defaultValue={typedIn(entry, at("place"), row, known?.place ?? "")}
-              errors={errorsOf(entry, at("place"), row)}
-            />
-            {mode === "in" && known && known.out !== null && (
+            {mode === "in" && known?.place ? (
               <p className="tally-was">
-                {known.out} {words.out}
+                <b>{known.place}</b>
+                {known.out !== null && `${words.out}: ${known.out}`}
+                <input type="hidden" name={at("place")} value={known.place} />
               </p>
+            ) : (
+              <TextInput
+                id={controlId(item, at("place"), row)}
+                name={at("place")}
+                label="Place"
+                size={12}
+                maxLength={80}
+                defaultValue={typedIn(entry, at("place"), row, known?.place ?? "")}
+                errors={errorsOf(entry, at("place"), row)}
+              />
             )}
             {mode !== "in" && (
               <NumberInput
@@ -60,7 +62,7 @@ export function TallyFields({ item, n, entry, mode, places, expected, words, liv
               <NumberInput
                 id={controlId(item, at("in"), row)}
                 name={at("in")}
-                label={capital(words.in)}
+                label={mode === "in" ? `${known?.place ?? ""} ${words.in}`.trim() : capital(words.in)}
                 inputMode="numeric"
                 size={4}
                 defaultValue={typedIn(entry, at("in"), row)}

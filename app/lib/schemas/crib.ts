@@ -2,7 +2,7 @@
 import { z } from "zod";
 import { idSchema, noteSchema } from "#app/lib/schemas/act";
 
-const dateSchema = z.string().regex(/^\d{4}-\d{2}-\d{2}$/, "Enter a date.");
+export const dateSchema = z.string().regex(/^\d{4}-\d{2}-\d{2}$/, "Enter a date.");
 const nameSchema = z.string().trim().min(2, "Give it a name.").max(120);
 
 export const addToolSchema = z.object({ name: nameSchema, serial: z.string().trim().max(80).default("") });

@@ -21,6 +21,12 @@ export function actsOf(e: Evaluation, me: Viewer): ActView[] {
   return [...crewActs(e, me.id), ...signActs(e, me), ...secondPersonActs(e, me), ...leadActs(e, me), ...workActs(e, me)];
 }
 
+/** What others wait for this person to do: card and roll call, signatures, second eyes, and GO where the run is clear. */
+export function waitingFor(e: Evaluation, me: Viewer): ActView[] {
+  const calls = e.result.next?.clear ? leadActs(e, me) : [];
+  return [...crewActs(e, me.id), ...signActs(e, me), ...secondPersonActs(e, me), ...calls];
+}
+
 /** Gates that this person may sign now, with the role. */
 export function signable(e: Evaluation, me: Viewer): { gate: GateResult; as: SigningRole }[] {
   return Object.values(e.result.gates).flatMap((gate) => {

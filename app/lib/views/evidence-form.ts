@@ -45,7 +45,7 @@ export function readEntry(item: Item, form: FormData, at: EntryContext): ReadEnt
   const tools = [...new Set(item.parts.flatMap((part, n) => (part.kind === "torque" ? all(reader, `p${n}.tool`) : [])))].filter(Boolean);
   item.parts.forEach((part, n) => {
     if (part.kind === "torque" && !one(reader, `p${n}.tool`))
-      reader.errors.push({ field: `p${n}.tool`, message: "Choose the wrench that was used. If it is not there, add it in the crib." });
+      reader.errors.push({ field: `p${n}.tool`, message: `${part.label}: choose the wrench that was used. If it is not there, add it in the crib.` });
   });
   return { evidence, tools, errors: reader.errors, outOfBand: reader.outOfBand, sheets: reader.sheets };
 }
@@ -55,13 +55,13 @@ function readPart(r: Reader, part: Part, n: number): Evidence | null {
     case "tick":
       return { kind: "tick" };
     case "measure": {
-      const values = readValues(r, n, part.places, part.criterion.quantity);
-      if (values) tellBand(r, n, part.criterion, values);
+      const values = readValues(r, n, part, part.criterion.quantity);
+      if (values) tellBand(r, n, part, values);
       return values && { kind: "measure", values };
     }
     case "reading": {
       if (part.optional && all(r, `p${n}.value`).every((v) => v === "")) return null;
-      const values = readValues(r, n, part.places, part.quantity);
+      const values = readValues(r, n, part, part.quantity);
       return values && { kind: "reading", values };
     }
     case "torque":
@@ -93,20 +93,29 @@ function amount(r: Reader, field: string, text: string, quantity: Quantity): num
   return entry.ok ? entry.si : null;
 }
 
-function readValues(r: Reader, n: number, places: string[], quantity: Quantity): number[] | null {
+type Valued = { label: string; places: string[] };
+
+/** One value per place. A sentence about one names the place, for it also stands in a list above the fields. */
+function readValues(r: Reader, n: number, { label, places }: Valued, quantity: Quantity): number[] | null {
   const sent = all(r, `p${n}.value`);
-  const values = places.map((_, i) => amount(r, `p${n}.value.${i}`, sent[i] ?? "", quantity));
+  const values = places.map((place, i) => {
+    const entry = parseEntry(sent[i] ?? "", quantity, r.at.units);
+    if (!entry.ok) r.errors.push({ field: `p${n}.value.${i}`, message: `${place || label}: ${lowerFirst(entry.sentence)}` });
+    return entry.ok ? entry.si : null;
+  });
   return values.every((v): v is number => v !== null) ? values : null;
 }
 
-function tellBand(r: Reader, n: number, criterion: Criterion, values: number[]): void {
+const lowerFirst = (s: string): string => `${s[0]?.toLowerCase() ?? ""}${s.slice(1)}`;
+
+function tellBand(r: Reader, n: number, { criterion, places }: { criterion: Criterion; places: string[] }, values: number[]): void {
   const band = bandInForce(criterion, (key) => r.at.snapshot.values.find((v) => v.key === key)?.value ?? null);
   if (!band) return;
   values.forEach((v, i) => {
     if ((band.min !== null && v < band.min) || (band.max !== null && v > band.max))
       r.outOfBand.push({
         field: `p${n}.value.${i}`,
-        message: `${format(criterion.quantity, v, r.at.units).text} is out of the band (${formatBand(criterion.quantity, band, r.at.units)}). Put it right and measure again, or write it down as not right.`,
+        message: `${places[i] ? `${places[i]}: ` : ""}${format(criterion.quantity, v, r.at.units).text} is out of the band (${formatBand(criterion.quantity, band, r.at.units)}). Put it right and measure again, or write it down as not right.`,
       });
   });
 }
@@ -114,10 +123,10 @@ function tellBand(r: Reader, n: number, criterion: Criterion, values: number[]):
 type PartOf<K extends Part["kind"]> = Extract<Part, { kind: K }>;
 
 function readTorque(r: Reader, part: PartOf<"torque">, n: number): Evidence | null {
-  const values = readValues(r, n, part.places, part.criterion.quantity);
+  const values = readValues(r, n, part, part.criterion.quantity);
   const countText = one(r, `p${n}.count`);
   const count = /^\d{1,4}$/.test(countText) ? Number(countText) : null;
-  if (!count) r.errors.push({ field: `p${n}.count`, message: "Count the fasteners that were torqued and enter how many." });
+  if (!count) r.errors.push({ field: `p${n}.count`, message: `${part.label}: count the fasteners that were torqued and enter how many.` });
   const adapterText = one(r, `p${n}.adapter`);
   const lengthText = one(r, `p${n}.wrench`);
   const adapter = adapterText === "" ? null : amount(r, `p${n}.adapter`, adapterText, "length");
@@ -132,7 +141,7 @@ function readTorque(r: Reader, part: PartOf<"torque">, n: number): Evidence | nu
     const set = wrenchSetting(first, { wrenchLength, extension: adapter, angle: 0 });
     if (!set.ok) r.errors.push({ field: `p${n}.adapter`, message: set.errors[0]?.sentence ?? "The adapter does not fit this wrench." });
   }
-  if (values) tellBand(r, n, part.criterion, values);
+  if (values) tellBand(r, n, part, values);
   return values && count ? { kind: "torque", values, count, adapter, wrenchLength } : null;
 }
 

@@ -29,6 +29,15 @@ const PAGES: Record<Exclude<Blocker["link"]["page"], "gate" | "run">, [path: str
   openings: ["/openings", "Openings"],
 };
 
+/** Pages that have a route; a link to another one leads to the board, which names who can clear it. */
+const ROUTED = new Set<keyof typeof PAGES>(["crib", "crew", "set-up", "build-up", "board"]);
+
+/** Where bad news is written down: taken from any member at any time. */
+export const recordPlaces = (installId: string): Place[] =>
+  (["openings", "loose-ends", "findings"] as const)
+    .filter((page) => ROUTED.has(page))
+    .map((page) => ({ href: `${boardOf(installId)}${PAGES[page][0]}`, label: PAGES[page][1] }));
+
 /** Where a blocker is cleared. */
 export function placeOf(snapshot: Snapshot, link: Blocker["link"]): Place {
   const { id: install } = snapshot.install;
@@ -41,7 +50,7 @@ export function placeOf(snapshot: Snapshot, link: Blocker["link"]): Place {
     return { href: runOf(install, link.id), label: run ? `Run ${run.label}` : "Run" };
   }
   const page = link.page === "gate" ? "board" : link.page === "run" ? "build-up" : link.page;
-  const [path, label] = PAGES[page];
+  const [path, label] = PAGES[ROUTED.has(page) ? page : "board"];
   return { href: `${boardOf(install)}${path}`, label };
 }
 

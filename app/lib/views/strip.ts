@@ -14,6 +14,7 @@ export function stripOf(e: Evaluation, now: Instant): StripView {
     links: [
       { label: "Board", href: home },
       { label: "Build-up", href: `${home}/build-up` },
+      { label: "Crew", href: `${home}/crew` },
       { label: "Crib", href: `${home}/crib` },
       { label: "Set-up", href: `${home}/set-up` },
       { label: "Mail", href: `${home}/mail` },

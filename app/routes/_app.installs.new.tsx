@@ -1,0 +1,126 @@
+import { useEffect, useState } from "react";
+import { redirect } from "react-router";
+import { ErrorSummary } from "#app/components/forms/ErrorSummary";
+import { Select } from "#app/components/forms/Select";
+import { TextInput } from "#app/components/forms/TextInput";
+import { ANSWERS, AnswersForm } from "#app/components/new-install/AnswersForm";
+import { NewInstallPage } from "#app/components/new-install/NewInstallPage";
+import { WhatItMakes } from "#app/components/new-install/WhatItMakes";
+import { Fitting } from "#app/components/ui/Fitting";
+import { Foot } from "#app/components/ui/Foot";
+import { actorOf } from "#app/lib/auth/actor.server";
+import { LONGEST_REGISTRATION } from "#app/lib/schemas/new-install";
+import { type Errors, firstQuestions, judgeFirst, PAGES, placeOfPage, plainest, readDraft, writeDraft } from "#app/lib/views/new-install";
+import { whatItMakes } from "#app/lib/views/new-install-makes";
+import type { Route } from "./+types/_app.installs.new";
+
+export const meta = () => [{ title: "New install, page 1 of 3 · Bladecount" }];
+
+export function loader({ context, url }: Route.LoaderArgs) {
+  const draft = readDraft(url.searchParams);
+  const judged = judgeFirst(draft);
+  const goOn = url.searchParams.has("next");
+  if (goOn && judged.ready) throw redirect(placeOfPage(2, draft));
+  const questions = firstQuestions(draft);
+  const here = new Set<string>(["registration", "name", "zone", ...questions.map((q) => q.key)]);
+  return {
+    person: actorOf(context).name,
+    draft,
+    questions,
+    carried: [...writeDraft(draft)].filter(([name]) => !here.has(name)),
+    left: judged.open.length,
+    ready: judged.ready,
+    errors: goOn ? { ...Object.fromEntries(judged.open.map((key) => [key, ["Choose an answer."]])), ...judged.errors } : judged.errors,
+    identity: goOn ? judged.identity : {},
+    goOn,
+    makes: whatItMakes(plainest(draft)),
+    zones: [...new Set([...Intl.supportedValuesOf("timeZone"), "UTC"])].sort(),
+    serverZone: Intl.DateTimeFormat().resolvedOptions().timeZone,
+  };
+}
+
+export default function NewInstall({ loaderData: page }: Route.ComponentProps) {
+  const { draft, questions, errors, identity, left } = page;
+  const total = questions.length;
+  return (
+    <NewInstallPage
+      page={1}
+      person={page.person}
+      about="what hangs on it"
+      fill={(total - left) / total / 3}
+      side={<WhatItMakes makes={page.makes} open={left} />}
+      foot={
+        <Foot
+          says={<span role="status">{left === 0 ? "All answered" : left === 1 ? "1 question left" : `${left} questions left`}</span>}
+          note="The answers stand in this page’s address: keep it to go on later."
+        >
+          <Fitting
+            form={ANSWERS}
+            name="next"
+            value="details"
+            size="act"
+            variant={page.ready ? "filled" : "outline"}
+            note={`when all ${total} and the name are there`}
+          >
+            Next: details
+          </Fitting>
+        </Foot>
+      }
+    >
+      {page.goOn && <ErrorSummary errors={listed(identity, errors, questions)} />}
+      <AnswersForm action={PAGES[0]} questions={questions} errors={errors} carried={page.carried}>
+        <div className="flex flex-wrap items-start gap-x-4 gap-y-3 border-b border-line pb-4">
+          <TextInput
+            name="registration"
+            label="Registration"
+            figures
+            size={LONGEST_REGISTRATION}
+            maxLength={LONGEST_REGISTRATION}
+            autoComplete="off"
+            defaultValue={draft.registration}
+            errors={identity.registration}
+          />
+          <TextInput
+            name="name"
+            label="Name"
+            size={16}
+            maxLength={80}
+            autoComplete="off"
+            defaultValue={draft.name}
+            errors={identity.name}
+          />
+          <Zone chosen={draft.timeZone} zones={page.zones} server={page.serverZone} errors={identity.timeZone} />
+        </div>
+      </AnswersForm>
+    </NewInstallPage>
+  );
+}
+
+/** Preset to the server's zone, or the tablet's once it can be asked. */
+function Zone({ chosen, zones, server, errors }: { chosen: string; zones: string[]; server: string; errors?: string[] }) {
+  const [zone, setZone] = useState(chosen || server);
+  useEffect(() => {
+    const own = Intl.DateTimeFormat().resolvedOptions().timeZone;
+    if (!chosen && zones.includes(own)) setZone(own);
+  }, [chosen, zones]);
+  return (
+    <Select
+      name="zone"
+      label="Time zone of the place where it runs"
+      options={zones.map((name) => ({ value: name, label: name }))}
+      value={zone}
+      onChange={setZone}
+      errors={errors}
+    />
+  );
+}
+
+function listed(identity: Errors, errors: Errors, questions: { key: string; no: number; label: string }[]) {
+  const own = Object.entries(identity).flatMap(([key, list]) =>
+    list.map((message) => ({ field: key === "timeZone" ? "zone" : key, message })),
+  );
+  const asked = questions.flatMap((q) =>
+    (errors[q.key as keyof Errors] ?? []).map((message) => ({ field: q.key, message: `${q.no}. ${q.label} ${message}` })),
+  );
+  return [...own, ...asked];
+}
