@@ -9,6 +9,9 @@ export default defineConfig({
   // The tests share one instance and one database file.
   workers: 1,
   fullyParallel: false,
+  // Journeys sign in (a hash of a quarter of a second) as several people; a busy machine with two cores takes its time.
+  timeout: 90_000,
+  expect: { timeout: 10_000 },
   reporter: [["list"]],
   use: {
     baseURL: `http://127.0.0.1:${port}`,

@@ -60,6 +60,7 @@ const screens = [
   ["hold", "Priya", `${run(a, "1")}/hold`],
   ["mail", "Adaeze", `${at(b)}/mail`],
   ["set-up", "Sefa", `${at(c)}/set-up`],
+  ["people", "Odalys", `${at(a)}/crew`],
   ["crib", "Odalys", `${at(a)}/crib`],
 ];
 const sizes = [

@@ -2,6 +2,7 @@ import { parseWithZod } from "@conform-to/zod/v4";
 import { data, redirect } from "react-router";
 import { AddMember } from "#app/components/crew/AddMember";
 import { MemberItem } from "#app/components/crew/MemberItem";
+import { ItemNut } from "#app/components/ui/ItemNut";
 import { StateRow } from "#app/components/ui/StateRow";
 import { TitlePipe } from "#app/components/ui/TitlePipe";
 import { readForm } from "#app/lib/http/form.server";
@@ -61,12 +62,26 @@ export default function Crew({ loaderData, actionData }: Route.ComponentProps) {
           What the runs and signatures need
         </h2>
         <ul>
-          {view.needs.map((need) => (
-            <StateRow key={need.key} nut={need.met ? "done" : "todo"} word={need.met ? "enough" : "too few"} open={!need.met}>
-              <h3 className={need.met ? "text-lead font-medium" : "text-lead"}>{need.title}</h3>
-              <p className="text-ink-2">{need.says}</p>
-            </StateRow>
-          ))}
+          {view.needs
+            .filter((need) => !need.met)
+            .map((need) => (
+              <StateRow key={need.key} nut="todo" word="too few" open>
+                <h3 className="text-lead">{need.title}</h3>
+                <p className="text-ink-2">{need.says}</p>
+              </StateRow>
+            ))}
+        </ul>
+        <ul className="grid gap-x-6 gap-y-2 px-4 py-3 tablet:grid-cols-2 tablet:px-6">
+          {view.needs
+            .filter((need) => need.met)
+            .map((need) => (
+              <li key={need.key} className="grid grid-cols-[36px_minmax(0,1fr)] gap-x-3">
+                <ItemNut state="done" size={36} />
+                <p>
+                  {need.title}, <b>enough</b>: <span className="text-ink-2">{need.says}</span>
+                </p>
+              </li>
+            ))}
         </ul>
       </section>
       <section aria-labelledby="members">

@@ -7,6 +7,9 @@ const sorrel = placeOf("N0382L");
 const teasel = placeOf("N0526P");
 const tansy = placeOf("N0719T");
 
+const NEW =
+  "registration=N0834S&name=Sundew&zone=UTC&delivery=gravity&metering=carb&ignition=mag&computers=0&cooling=air&lubrication=wet&drive=direct&propeller=fixed&gear=nose&starter=estart&history=new";
+
 /** Every kind of page, as somebody for whom it is full. */
 const PAGES: [name: string, first: string, path: string][] = [
   ["hangar", "Jonas", "/hangar"],
@@ -32,6 +35,11 @@ const PAGES: [name: string, first: string, path: string][] = [
   ["HOLD", "Priya", `${sorrel.run("1")}/hold`],
   ["mail", "Adaeze", `${teasel.board}/mail`],
   ["set-up", "Sefa", `${tansy.board}/set-up`],
+  ["details of a new install", "Sefa", `/installs/new/details?${NEW}`],
+  ["ratings of a new install", "Sefa", `/installs/new/ratings?${NEW}`],
+  ["people", "Odalys", `${sorrel.board}/crew`],
+  ["scrub", "Adaeze", `${teasel.run("3")}/scrub`],
+  ["plan of a new run", "Sefa", `${tansy.board}/runs/new?rung=1`],
   ["crib", "Odalys", `${sorrel.board}/crib`],
 ];
 
@@ -40,7 +48,6 @@ for (const [name, first, path] of PAGES) {
     visit,
     instance,
   }) => {
-    test.slow();
     const page = await visit(first, "tablet");
     const found: string[] = [];
     for (const theme of ["apron", "hangar"]) {

@@ -35,7 +35,7 @@ async function answerFirstPage(page: Page): Promise<void> {
   for (const [question, answer] of ANSWERS) await choose(page, question, answer);
 }
 
-test("answering the questions makes the board that they promised", async ({ visit }) => {
+test("answering the questions makes the board that they promised", async ({ visit, complaints }) => {
   const page = await visit("Sefa", "tablet");
   await answerFirstPage(page);
   const makes = await page.getByRole("complementary").textContent();
@@ -51,6 +51,11 @@ test("answering the questions makes the board that they promised", async ({ visi
   const redline = page.getByRole("group", { name: "Redline" });
   await redline.getByLabel(/^Value in rpm/).fill("2,850");
   await redline.getByLabel("Where it was read").fill("engine maker’s manual p. 6");
+  await page.getByRole("button", { name: /^Make the board/ }).click();
+  await expect(page.getByRole("alert")).toContainText("can be read two ways");
+  expect(complaints.splice(0)).toEqual([expect.stringContaining("status of 400")]);
+  await expect(redline.getByLabel("Where it was read")).toHaveValue("engine maker’s manual p. 6");
+  await redline.getByLabel(/^Value in rpm/).fill("2850");
   await page.getByRole("button", { name: /^Make the board/ }).click();
   await page.waitForURL(/\/installs\/[0-9A-Za-z]{22}$/);
   await expect(page.getByRole("heading", { level: 1 })).toContainText("Not clear for run 1");

@@ -29,7 +29,7 @@ export interface CheckFormProps {
 export function CheckForm({ id, intent, subject, opens, act, actNote, says, on, due, note, commandId, reply }: CheckFormProps) {
   const { field, back, faults } = fieldsOf(id, reply);
   return (
-    <details open={back}>
+    <details open={back} className="open:basis-full">
       <summary className="min-h-hit py-3 font-semibold text-fitting-ink">
         {opens}
         <span className="sr-only">: {subject.name}</span>

@@ -36,7 +36,7 @@ export function CribItem({ row, ticks, away = false, children }: CribItemProps) 
         </div>
         <p>{row.hangs}</p>
       </div>
-      {children}
+      <div className="flex flex-wrap gap-x-8">{children}</div>
     </StateRow>
   );
 }

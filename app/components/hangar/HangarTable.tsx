@@ -49,9 +49,8 @@ export function HangarTable({ rows, search, newHref }: HangarTableProps) {
             name="q"
             type="search"
             label="Registration, name, role or what waits"
-            value={live ? text : undefined}
-            defaultValue={live ? undefined : search}
-            onChange={live ? find : undefined}
+            value={text}
+            onChange={find}
             className="min-w-0 flex-1"
           />
           {!live && <Fitting>Find</Fitting>}

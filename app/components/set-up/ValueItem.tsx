@@ -53,7 +53,7 @@ export function ValueItem({ row, commandId, reply, next, may }: ValueItemProps) 
             <HiddenIds commandId={commandId} also={{ key: row.key }} />
             {row.note && <p className="max-w-[62ch]">{row.note}</p>}
             <div className="flex w-full flex-wrap items-start gap-x-4 gap-y-3">
-              <NumberInput {...field("value", row.value ?? "")} label="Value" unit={row.unit} size={8} />
+              <NumberInput {...field("value", row.typed)} label="Value" unit={row.unit} size={8} />
               <TextInput
                 {...field("source", row.typedSource)}
                 label="Where it was read: paper, issue, page"

@@ -80,11 +80,20 @@ function leadActs(e: Evaluation, me: Viewer): ActView[] {
   return [];
 }
 
+/** Whether work on the gate would count now: what looks back on a run waits for its end, the release's own items for the last run. */
+function countsNow(e: Evaluation, id: string): boolean {
+  const gate = e.facts.gates.get(id);
+  if (!gate) return false;
+  const run = gate.lookBack?.kind === "run" ? gate.lookBack.run : gate.lookBack ? e.facts.settledBy.get(gate.lookBack.rung) : null;
+  if (gate.lookBack) return !!run && e.facts.runs.get(run)?.endedAt != null;
+  return gate.requiredBy.kind !== "release" || e.facts.allSettled;
+}
+
 /** Gates with work for a builder or inspector: those that stop the next run first, then the others whose prerequisites stand. */
 function workActs(e: Evaluation, me: Viewer): ActView[] {
   if (!me.roles.some((r) => r === "builder" || r === "inspector")) return [];
   const roots = (e.result.next ?? e.result.release).blockers.flatMap((b) => (b.subject.kind === "gate" ? [b.subject.id] : []));
-  const order = [...new Set([...roots, ...e.facts.gates.keys()])];
+  const order = [...new Set([...roots, ...e.facts.gates.keys()])].filter((id) => countsNow(e, id));
   const install = e.snapshot.install.id;
   return order.flatMap((id): ActView[] => {
     const gate = e.result.gates[id];

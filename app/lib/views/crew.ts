@@ -6,7 +6,6 @@ import type { Member, Role } from "#app/lib/gates/snapshot";
 import { mayInvite } from "#app/lib/gates/verdicts";
 import { count } from "#app/lib/gates/who";
 import type { Viewer } from "#app/lib/views/board";
-import { anyOf } from "#app/lib/views/places";
 
 export interface MemberView {
   id: string;
@@ -96,8 +95,8 @@ function roleNeeds(e: Evaluation, here: Member[]): NeedView[] {
     return {
       key: role,
       met: names.length > 0,
-      title: names.length ? `${role === "inspector" ? "An" : "A"} ${role} is here` : `No ${role}`,
-      says: names.length ? `${anyOf(names)}: ${ROLE_DOES[role]}.` : missing[role],
+      title: names.length ? count(names.length, role) : `No ${role}`,
+      says: names.length ? `${listOf(names)}.` : missing[role],
     };
   });
 }
@@ -128,4 +127,4 @@ function formerWords(e: Evaluation, m: Member): string {
   return m.roles.map((r) => `${r.role}${r.to === null ? "" : ` until ${e.facts.when(r.to)}`}`).join(", ");
 }
 
-const listOf = (keys: string[]): string => (keys.length < 2 ? (keys[0] ?? "") : `${keys.slice(0, -1).join(", ")} and ${keys.at(-1)}`);
+const listOf = (words: string[]): string => (words.length < 2 ? (words[0] ?? "") : `${words.slice(0, -1).join(", ")} and ${words.at(-1)}`);

@@ -45,7 +45,10 @@ export function readEntry(item: Item, form: FormData, at: EntryContext): ReadEnt
   const tools = [...new Set(item.parts.flatMap((part, n) => (part.kind === "torque" ? all(reader, `p${n}.tool`) : [])))].filter(Boolean);
   item.parts.forEach((part, n) => {
     if (part.kind === "torque" && !one(reader, `p${n}.tool`))
-      reader.errors.push({ field: `p${n}.tool`, message: `${part.label}: choose the wrench that was used. If it is not there, add it in the crib.` });
+      reader.errors.push({
+        field: `p${n}.tool`,
+        message: `${part.label}: choose the wrench that was used. If it is not there, add it in the crib.`,
+      });
   });
   return { evidence, tools, errors: reader.errors, outOfBand: reader.outOfBand, sheets: reader.sheets };
 }

@@ -195,7 +195,18 @@ function fieldView(e: Evaluation, field: FormField, units: UnitSystem, decided?:
   const { kind, name, label, help, optional, when } = field;
   const unit = field.kind === "quantity" ? symbolOf(field.as?.[units] ?? displayUnit(field.quantity, units)) : "";
   const options = field.kind === "choice" ? field.options : [];
-  return { kind, name, label, help, optional, when, unit, options, value: decided ?? prefilled(e, field, units), fixed: decided !== undefined };
+  return {
+    kind,
+    name,
+    label,
+    help,
+    optional,
+    when,
+    unit,
+    options,
+    value: decided ?? prefilled(e, field, units),
+    fixed: decided !== undefined,
+  };
 }
 
 function prefilled(e: Evaluation, field: FormField, units: UnitSystem): string {

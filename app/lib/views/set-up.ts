@@ -15,8 +15,10 @@ export interface ValueRow {
   state: "confirmed" | "default" | "missing";
   /** "read", "not confirmed", "not entered" */
   word: string;
-  /** The figure alone; null = not entered. */
+  /** The figure alone, "2,700"; null = not entered. */
   value: string | null;
+  /** The same as it is typed, "2700". */
+  typed: string;
   unit: string;
   /** Where it was read, or where the starting point comes from. */
   source: string;
@@ -103,7 +105,8 @@ function valueRow(e: Evaluation, me: Viewer, v: Entered, units: UnitSystem): Val
     help: v.help,
     state,
     word: WORDS[state],
-    value: shown?.value ?? null,
+    value: shown && grouped(shown.value),
+    typed: shown?.value ?? "",
     unit: shown?.unit ?? symbolOf(v.shownIn ?? displayUnit(v.quantity, units)),
     source: v.source ?? (v.value === null ? "Only the maker can say." : `A starting point: ${basisWords(v.basis)}.`),
     typedSource: v.source ?? "",
@@ -121,3 +124,6 @@ function basisWords(basis: Basis): string {
       return "entered without a source";
   }
 }
+
+/** "13.5" stays, "2700" becomes "2,700". */
+const grouped = (figure: string): string => figure.replace(/^\d{4,}/, (whole) => whole.replace(/\d(?=(\d{3})+$)/g, "$&,"));
