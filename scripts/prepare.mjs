@@ -21,7 +21,7 @@ export function installPackages() {
 export function buildIfStale() {
   const sources = ["app", "public", "package.json", "package-lock.json", "vite.config.ts", "vite.imports.ts", "react-router.config.ts"];
   const fresh = existsSync("build/server/index.js") && newest(sources) <= newest(["build/server/index.js"]);
-  if (!fresh && !run(tool("react-router"), ["build"])) throw new Error("The build failed: see above.");
+  if (!fresh && !run(tool("react-router"), ["build"], { NODE_ENV: "production" })) throw new Error("The build failed: see above.");
 }
 
 /** The newest change under these files and folders, in milliseconds since 1970. */

@@ -72,7 +72,11 @@ export default function Sign({ loaderData, actionData }: Route.ComponentProps) {
     <main id="main" className="sign-page">
       <SignTag kicker={kicker} title={sheet.act} stub={stub}>
         {sheet.refusal && (
-          <Notice kind="refused" title={sheet.refusal.title} action={<Fitting href={sheet.refusal.place.href}>{sheet.refusal.place.label}</Fitting>}>
+          <Notice
+            kind="refused"
+            title={sheet.refusal.title}
+            action={<Fitting href={sheet.refusal.place.href}>{sheet.refusal.place.label}</Fitting>}
+          >
             <p>{sheet.refusal.sentence}</p>
             {sheet.refusal.who && <p>{sheet.refusal.who}</p>}
           </Notice>
@@ -94,20 +98,24 @@ export default function Sign({ loaderData, actionData }: Route.ComponentProps) {
         <Form method="post" id="sign" action={`?as=${sheet.as}`}>
           <HiddenIds commandId={commandId} also={{ as: sheet.as, sheet: JSON.stringify({ gate: sheet.id, covers: sheet.covers }) }} />
         </Form>
-        <blockquote>
-          I, <b>{person}</b>, {sheet.sentence}
-        </blockquote>
-        <h2>What it means</h2>
-        <ul className="sign-means">
-          <li>{sheet.meaning}</li>
-          {sheet.means.map((line) => (
-            <li key={line}>{line}</li>
-          ))}
-          {sheet.earlier.map((line) => (
-            <li key={line}>{line}.</li>
-          ))}
-        </ul>
-        <details className="sign-items" open={sheet.as !== "builder"}>
+        {!sheet.refusal && (
+          <>
+            <blockquote>
+              I, <b>{person}</b>, {sheet.sentence}
+            </blockquote>
+            <h2>What it means</h2>
+            <ul className="sign-means">
+              <li>{sheet.meaning}</li>
+              {sheet.means.map((line) => (
+                <li key={line}>{line}</li>
+              ))}
+              {sheet.earlier.map((line) => (
+                <li key={line}>{line}.</li>
+              ))}
+            </ul>
+          </>
+        )}
+        <details className="sign-items" open={sheet.as !== "builder" && !sheet.refusal}>
           <summary>What is signed: {sheet.items.length} items</summary>
           <dl>
             {sheet.items.map((item) => (

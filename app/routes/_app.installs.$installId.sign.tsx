@@ -86,9 +86,11 @@ export default function SignSeveral({ loaderData, actionData }: Route.ComponentP
             ))}
           </nav>
         )}
-        <blockquote>
-          I, <b>{person}</b>, sign each gate that is marked here. {meaning}
-        </blockquote>
+        {sheets.length > 0 && (
+          <blockquote>
+            I, <b>{person}</b>, sign each gate that is marked here. {meaning}
+          </blockquote>
+        )}
         <Form method="post" id="sign" action={`?as=${as}`} className="sign-gates">
           <HiddenIds commandId={commandId} also={{ as }} />
           {sheets.map((sheet) => (

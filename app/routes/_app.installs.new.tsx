@@ -10,7 +10,17 @@ import { Fitting } from "#app/components/ui/Fitting";
 import { Foot } from "#app/components/ui/Foot";
 import { actorOf } from "#app/lib/auth/actor.server";
 import { LONGEST_REGISTRATION } from "#app/lib/schemas/new-install";
-import { type Errors, firstQuestions, judgeFirst, PAGES, placeOfPage, plainest, readDraft, writeDraft } from "#app/lib/views/new-install";
+import {
+  type Errors,
+  firstQuestions,
+  judgeFirst,
+  PAGES,
+  placeOfPage,
+  plainest,
+  readDraft,
+  type ShownQuestion,
+  writeDraft,
+} from "#app/lib/views/new-install";
 import { whatItMakes } from "#app/lib/views/new-install-makes";
 import type { Route } from "./+types/_app.installs.new";
 
@@ -51,7 +61,7 @@ export default function NewInstall({ loaderData: page }: Route.ComponentProps) {
       side={<WhatItMakes makes={page.makes} open={left} />}
       foot={
         <Foot
-          says={<span role="status">{left === 0 ? "All answered" : left === 1 ? "1 question left" : `${left} questions left`}</span>}
+          says={<output>{left === 0 ? "All answered" : left === 1 ? "1 question left" : `${left} questions left`}</output>}
           note="The answers stand in this page’s address: keep it to go on later."
         >
           <Fitting
@@ -67,7 +77,11 @@ export default function NewInstall({ loaderData: page }: Route.ComponentProps) {
         </Foot>
       }
     >
-      {page.goOn && <ErrorSummary errors={listed(identity, errors, questions)} />}
+      {page.goOn && (
+        <div className="pb-4">
+          <ErrorSummary errors={listed(identity, errors, questions)} />
+        </div>
+      )}
       <AnswersForm action={PAGES[0]} questions={questions} errors={errors} carried={page.carried}>
         <div className="flex flex-wrap items-start gap-x-4 gap-y-3 border-b border-line pb-4">
           <TextInput
@@ -115,12 +129,15 @@ function Zone({ chosen, zones, server, errors }: { chosen: string; zones: string
   );
 }
 
-function listed(identity: Errors, errors: Errors, questions: { key: string; no: number; label: string }[]) {
+function listed(identity: Errors, errors: Errors, questions: ShownQuestion[]) {
   const own = Object.entries(identity).flatMap(([key, list]) =>
     list.map((message) => ({ field: key === "timeZone" ? "zone" : key, message })),
   );
-  const asked = questions.flatMap((q) =>
-    (errors[q.key as keyof Errors] ?? []).map((message) => ({ field: q.key, message: `${q.no}. ${q.label} ${message}` })),
+  const wrong = questions.flatMap((q) =>
+    q.answer === null ? [] : (errors[q.key] ?? []).map((message) => ({ field: q.key, message: `${q.no}. ${message}` })),
   );
-  return [...own, ...asked];
+  const [open, ...more] = questions.filter((q) => q.answer === null);
+  const left =
+    more.length === 0 ? `${open?.no}. ${open?.label}` : `${more.length + 1} questions have no answer yet. The first is ${open?.no}.`;
+  return [...own, ...wrong, ...(open ? [{ field: open.key, message: left }] : [])];
 }

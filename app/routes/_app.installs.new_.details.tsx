@@ -63,11 +63,11 @@ export default function NewInstallDetails({ loaderData: page }: Route.ComponentP
       foot={
         <Foot
           says={
-            <span role="status">
+            <output>
               {wrong.length > 0
                 ? `${wrong.length === 1 ? "1 answer contradicts" : `${wrong.length} answers contradict`} another`
                 : `${questions.length} details, ${changed === 0 ? "all as preset" : `${changed} changed by you`}`}
-            </span>
+            </output>
           }
           note="Look at each: a preset is the likeliest answer, not yours."
         >
@@ -84,7 +84,11 @@ export default function NewInstallDetails({ loaderData: page }: Route.ComponentP
         </Foot>
       }
     >
-      {page.goOn && <ErrorSummary errors={wrong} />}
+      {page.goOn && (
+        <div className="pb-4">
+          <ErrorSummary errors={wrong} />
+        </div>
+      )}
       <p className="max-w-[62ch] pb-2 text-lead">
         Each is preset to the likeliest answer for what page 1 says. Change what is different on this aircraft.
       </p>

@@ -22,7 +22,7 @@ export function Answer({ title, state, note, tone }: AnswerProps) {
       </h1>
       <div className="answer-pipe" aria-hidden="true">
         <i className={passes ? "answer-full" : undefined} />
-        <svg viewBox="-48 -62 96 124">
+        <svg viewBox="-48 -62 96 124" aria-hidden="true">
           {tone === "held" ? <Spade length={88} width={15} /> : <Valve state={VALVE[tone]} scale={1.9} lever={31} fed />}
         </svg>
       </div>

@@ -37,10 +37,18 @@ export function CrewBoard({ places, runHref, when, highest, steps, stop, read }:
           {steps.join(", ")}. Never above <b className="fig">{highest}</b>.
         </p>
       </section>
-      <p className="crew-stop">
-        <b>Shout STOP, or cross your arms overhead,</b> for {stop.length ? stop.join(", ").replace(/\.$/, "") : "anything that looks wrong"}
-        . Never walk into the propeller’s arc. The maker’s manual and the run lead’s word come first.
-      </p>
+      <div className="crew-stop">
+        <p>
+          <b>Shout STOP, or cross your arms overhead.</b>
+        </p>
+        {stop.length > 0 && <p>{stop[0]}</p>}
+        <ul>
+          {stop.slice(1).map((reason) => (
+            <li key={reason}>{reason}</li>
+          ))}
+        </ul>
+        <p>Never walk into the propeller’s arc. The maker’s manual and the run lead’s word come first.</p>
+      </div>
       {read && (
         <p className="crew-read">
           <ItemNut state="done" size={44} /> {read}

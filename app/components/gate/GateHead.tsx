@@ -33,9 +33,9 @@ export function GateHead({ name, state, valve, part, feeds, onward }: GateHeadPr
       <svg className="gate-head-inlet" width="420" height={height} viewBox={`0 0 420 ${height}`} aria-hidden="true">
         <Inlet feeds={shown} fed={fed} height={height} />
         <path className="pipe-wall pipe-title" d={`M250 ${height / 2}H430`} />
-        <path className="pipe-bore pipe-title" d={`M${shown.length ? 240 : 250} ${height / 2}H430`} />
+        <path className="pipe-bore pipe-title" d={`M${shown.length ? 258 : 250} ${height / 2}H430`} />
         {fed && (
-          <path className="pipe-flow pipe-title" d={`M${shown.length ? 240 : 250} ${height / 2}H${valve === "signed" ? 430 : 330}`} />
+          <path className="pipe-flow pipe-title" d={`M${shown.length ? 258 : 250} ${height / 2}H${valve === "signed" ? 430 : 330}`} />
         )}
         <g transform={`translate(350 ${height / 2})`}>
           <Valve state={valve} part={part} fed={fed} scale={1.9} lever={31} />
@@ -43,7 +43,7 @@ export function GateHead({ name, state, valve, part, feeds, onward }: GateHeadPr
       </svg>
       <div className={valve === "signed" ? "gate-head-pipe gate-head-full" : "gate-head-pipe"} aria-hidden="true">
         <i className={fed ? "gate-head-fed" : undefined} />
-        <svg viewBox="-48 -62 96 124">
+        <svg viewBox="-48 -62 96 124" aria-hidden="true">
           <Valve state={valve} part={part} scale={1.9} lever={31} fed={fed} />
         </svg>
       </div>

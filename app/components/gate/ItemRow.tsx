@@ -1,6 +1,6 @@
 import type { SelectOption } from "#app/components/forms/Select";
 import { type Entry, NO_ENTRY } from "#app/components/gate/entry";
-import { Given, type GivenModel } from "#app/components/gate/Given";
+import { Given } from "#app/components/gate/Given";
 import { ItemHistory, type ProofModel } from "#app/components/gate/ItemHistory";
 import { NumberEntry } from "#app/components/gate/NumberEntry";
 import type { PartModel } from "#app/components/gate/PartFields";

@@ -88,7 +88,14 @@ export function ProveForm(props: ProveFormProps) {
         <input type="hidden" name="as" value={prove.roles[0] ?? ""} />
       )}
       <div className="prove-acts">
-        <Fitting size={item.tickOnly ? "normal" : "act"} name="intent" value="prove" reason={prove.ok ? undefined : prove.reason} busy={busy} note={actNote(item)}>
+        <Fitting
+          size={item.tickOnly ? "normal" : "act"}
+          name="intent"
+          value="prove"
+          reason={prove.ok ? undefined : prove.reason}
+          busy={busy}
+          note={actNote(item)}
+        >
           {item.nut === "lapsed" ? "Done again" : item.tickOnly ? "Done" : "Record it"}
         </Fitting>
         {hasSheet && (

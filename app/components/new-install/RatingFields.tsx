@@ -31,7 +31,7 @@ export function RatingFields({ group, initial, errors }: RatingFieldsProps) {
           className="grid items-center gap-x-4 gap-y-2 border-t border-line px-4 py-3 tablet:grid-cols-[minmax(0,1fr)_190px_minmax(0,1fr)] tablet:pr-6 tablet:pl-0 wide:grid-cols-[minmax(0,1fr)_220px_minmax(0,380px)]"
         >
           <legend className="sr-only">{row.label}</legend>
-          <div className="grid grid-cols-[52px_minmax(0,1fr)] items-center gap-x-3 tablet:grid-cols-[104px_minmax(0,1fr)]">
+          <div className="grid grid-cols-[80px_minmax(0,1fr)] items-center gap-x-3 tablet:grid-cols-[104px_minmax(0,1fr)]">
             <State row={row} />
             <p>
               <b aria-hidden="true">{row.label}</b> <span className="block text-note text-ink-2">{row.help}</span>
@@ -67,8 +67,8 @@ export function RatingFields({ group, initial, errors }: RatingFieldsProps) {
 function State({ row }: { row: RatingRow }) {
   return (
     <p className="flex flex-col items-center text-center text-note leading-tight font-[600]">
-      <ItemNut state={row.preset ? "todo" : "na"} size={40} />
-      {row.preset ? "not confirmed" : "empty"}
+      <ItemNut state="todo" size={40} />
+      <span className="max-w-[80px]">{row.preset ? "not confirmed" : "empty"}</span>
     </p>
   );
 }

@@ -173,7 +173,8 @@ async function number(acting: Acting): Promise<GateActed> {
     return entry.ok ? same(entry.si, part.criterion.band?.[name] ?? null, part.criterion.quantity, units) : null;
   };
   const band = part?.kind === "tick" ? null : { min: end("min", install.me.units), max: end("max", install.me.units) };
-  if (band && band.min === null && band.max === null && !errors.length) errors.push({ field: field("min"), message: "Enter the least, the most, or both." });
+  if (band && band.min === null && band.max === null && !errors.length)
+    errors.push({ field: field("min"), message: "Enter the least, the most, or both." });
   if (errors.length) return back(acting, 400, errors);
   const parsed = enterNumberSchema.safeParse({
     item: id,

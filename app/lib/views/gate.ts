@@ -137,7 +137,7 @@ function cautionOf(gate: Gate): GateView["caution"] {
   const [, title = gate.caution, rest = ""] = /^(.+?[.:])\s*(.*)$/s.exec(gate.caution) ?? [];
   return {
     title: `${title.replace(/[.:]$/, "")}.`,
-    text: rest && rest[0] ? `${rest[0].toUpperCase()}${rest.slice(1)}` : "",
+    text: rest?.[0] ? `${rest[0].toUpperCase()}${rest.slice(1)}` : "",
     sign: SIGNS[gate.key] ?? "general",
   };
 }

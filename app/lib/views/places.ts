@@ -29,14 +29,13 @@ const PAGES: Record<Exclude<Blocker["link"]["page"], "gate" | "run">, [path: str
   openings: ["/openings", "Openings"],
 };
 
-/** Pages that have a route; a link to another one leads to the board, which names who can clear it. */
-const ROUTED = new Set<keyof typeof PAGES>(["crib", "crew", "set-up", "build-up", "board"]);
+/** Their rows have a fragment each. */
+const ROWS = { openings: "opening", "loose-ends": "loose-end", findings: "finding" } as const;
+export const rowAnchor = (page: keyof typeof ROWS, id: string): string => `${ROWS[page]}-${id}`;
 
 /** Where bad news is written down: taken from any member at any time. */
 export const recordPlaces = (installId: string): Place[] =>
-  (["openings", "loose-ends", "findings"] as const)
-    .filter((page) => ROUTED.has(page))
-    .map((page) => ({ href: `${boardOf(installId)}${PAGES[page][0]}`, label: PAGES[page][1] }));
+  (["openings", "loose-ends", "findings"] as const).map((page) => ({ href: `${boardOf(installId)}${PAGES[page][0]}`, label: PAGES[page][1] }));
 
 /** Where a blocker is cleared. */
 export function placeOf(snapshot: Snapshot, link: Blocker["link"]): Place {
@@ -50,8 +49,9 @@ export function placeOf(snapshot: Snapshot, link: Blocker["link"]): Place {
     return { href: runOf(install, link.id), label: run ? `Run ${run.label}` : "Run" };
   }
   const page = link.page === "gate" ? "board" : link.page === "run" ? "build-up" : link.page;
-  const [path, label] = PAGES[ROUTED.has(page) ? page : "board"];
-  return { href: `${boardOf(install)}${path}`, label };
+  const [path, label] = PAGES[page];
+  const row = link.id && (page === "openings" || page === "loose-ends" || page === "findings") ? `#${rowAnchor(page, link.id)}` : "";
+  return { href: `${boardOf(install)}${path}${row}`, label };
 }
 
 /** "Mirela Tansen", "Mirela Tansen or Osei Brandt", "Mirela Tansen, Osei Brandt or 2 more". */

@@ -61,7 +61,12 @@ export function sheetView(e: Evaluation, gateId: string, me: Viewer & { units: U
     means: meansOf(e, gateId, me.id, last),
     covers: result.covers,
     refusal: first
-      ? { title: first.title, sentence: first.sentence, who: whoClears(e.snapshot, first.owner), place: placeOf(e.snapshot, first.link) }
+      ? {
+          title: first.title,
+          sentence: first.sentence,
+          who: first.code === "already" ? "" : whoClears(e.snapshot, first.owner),
+          place: placeOf(e.snapshot, first.link),
+        }
       : null,
     earlier: result.holding.flatMap((id) => {
       const s = e.snapshot.signatures.find((x) => x.id === id);

@@ -10,10 +10,13 @@ export interface StripView {
 
 export function stripOf(e: Evaluation, now: Instant): StripView {
   const home = boardOf(e.snapshot.install.id);
+  const loose = e.snapshot.looseEnds.filter((l) => !l.confirmed).length;
   return {
     links: [
       { label: "Board", href: home },
       { label: "Build-up", href: `${home}/build-up` },
+      { label: "Findings", href: `${home}/findings` },
+      { label: "Loose ends", href: `${home}/loose-ends`, count: loose, countLabel: " not restored" },
       { label: "Crew", href: `${home}/crew` },
       { label: "Crib", href: `${home}/crib` },
       { label: "Set-up", href: `${home}/set-up` },

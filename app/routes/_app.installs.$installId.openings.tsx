@@ -1,0 +1,68 @@
+import { data, redirect } from "react-router";
+import { OpeningForm } from "#app/components/happenings/OpeningForm";
+import { OpeningItem } from "#app/components/happenings/OpeningItem";
+import { TitlePipe } from "#app/components/ui/TitlePipe";
+import { db } from "#app/db/client.server";
+import { closingsOf } from "#app/db/queries/happening-details.server";
+import { readForm } from "#app/lib/http/form.server";
+import { installContext } from "#app/lib/http/install.server";
+import { actOnOpenings } from "#app/lib/http/opening-acts.server";
+import { newId } from "#app/lib/ids";
+import { openingsView } from "#app/lib/views/openings";
+import { boardOf } from "#app/lib/views/places";
+import type { Route } from "./+types/_app.installs.$installId.openings";
+
+export const meta: Route.MetaFunction = () => [{ title: "Openings · Bladecount" }];
+
+export async function loader({ context }: Route.LoaderArgs) {
+  const { e, me, installId } = context.get(installContext);
+  return { view: openingsView(e, me, await closingsOf(db(), installId)), formId: newId() };
+}
+
+export async function action({ context, request }: Route.ActionArgs) {
+  const install = context.get(installContext);
+  const acted = await actOnOpenings(install, await readForm(request));
+  if (!acted) throw data("This page does not know that form. Load it again; nothing was changed.", { status: 400 });
+  if (!acted.done) return data(acted.reply, { status: acted.status });
+  return redirect(`${boardOf(install.installId)}/openings#${acted.anchor}`, 303);
+}
+
+export default function Openings({ loaderData, actionData }: Route.ComponentProps) {
+  const { view, formId } = loaderData;
+  const item = { commandId: formId, reply: actionData };
+  const count = view.open.length + view.past.length;
+  return (
+    <>
+      <main id="main">
+        <TitlePipe
+          title="Openings"
+          state={view.state}
+          fill={view.fill}
+          then="What was opened up or disturbed. Every proof of it lapses and is done again once it is closed."
+        />
+        {view.open.length > 0 && (
+          <section aria-label="Open now">
+            <ul>
+              {view.open.map((row) => (
+                <OpeningItem key={`${row.id} ${row.state}`} row={row} {...item} />
+              ))}
+            </ul>
+          </section>
+        )}
+        <OpeningForm key={count} view={view} commandId={`${formId}-open`} reply={actionData} />
+        {view.past.length > 0 && (
+          <section aria-labelledby="past" className="border-t-2 border-ink">
+            <h2 id="past" className="px-4 pt-5 pb-3 text-h3 tablet:px-6">
+              Closed
+            </h2>
+            <ul className="border-t border-line">
+              {view.past.map((row) => (
+                <OpeningItem key={`${row.id} ${row.state}`} row={row} {...item} />
+              ))}
+            </ul>
+          </section>
+        )}
+      </main>
+    </>
+  );
+}
