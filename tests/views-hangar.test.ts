@@ -1,162 +1,229 @@
+import { parseWithZod } from "@conform-to/zod/v4";
 import { describe, expect, it } from "vitest";
-import { rpmText } from "#app/lib/gates/clearance";
 import { evaluate } from "#app/lib/gates/evaluate";
-import type { Role } from "#app/lib/gates/snapshot";
-import { answerOf } from "#app/lib/views/board";
-import { type HangarRow, hangarRow, hangarView, rolesText } from "#app/lib/views/hangar";
-import { type Board, makeBoard, signAll } from "./support/snapshots";
+import { addExtinguisherForm, badCheckForm, goodCheckForm } from "#app/lib/schemas/crib-forms";
+import { fieldsOf, replyOf } from "#app/lib/schemas/form-reply";
+import { addMemberForm, valueForm } from "#app/lib/schemas/set-up-forms";
+import { valueDefs } from "#app/lib/template/values";
+import { crewPageView } from "#app/lib/views/crew";
+import { cribView } from "#app/lib/views/crib";
+import { dateAfter, dueView, monthTicks } from "#app/lib/views/crib-dates";
+import { hangarRow, hangarView } from "#app/lib/views/hangar";
+import { setUpView } from "#app/lib/views/set-up";
+import { SAMPLES } from "./support/sample-traits";
+import { type Board, makeBoard, signAll, torque } from "./support/snapshots";
 
-const gates = () =>
-  makeBoard({
-    MF: { name: "Mount", short: "Mount", items: { m1: { systems: ["mount"] } } },
-    FP: { name: "Fuel prime", short: "Fuel prime", needs: ["MF"], items: { f1: { secondEyes: true }, f2: {} } },
-    WR: { name: "Walk-round", short: "Walk-round", eachRun: true, requiredBy: { kind: "runs" }, needs: ["MF", "FP"], items: { w1: {} } },
-  });
-const viewer = (id: string, ...roles: Role[]) => ({ id, roles });
-const builder = viewer("bo", "builder");
-const inspector = viewer("di", "inspector");
-const lead = viewer("la", "lead", "builder");
-const crew = viewer("fi", "crew");
-const row = (board: Board, me: { id: string; roles: Role[] }, changedAt = board.now): HangarRow =>
-  hangarRow(evaluate(board.s, board.now), me, changedAt);
-const labels = (board: Board, me: { id: string; roles: Role[] }) => row(board, me).waits.map((w) => w.label);
-
-/** Everything signed, run 1 planned, acknowledged, answered and the wind read. */
-function clearForRun1() {
-  const board = signAll(gates());
-  board.wait();
-  const run = board.run("1");
-  board.brief(run);
-  return { board, run };
-}
+const DAY = 86_400_000;
+const COMMAND = "0123456789abcdefghij";
+const formOf = (fields: Record<string, string>) => {
+  const form = new FormData();
+  for (const [name, value] of Object.entries({ commandId: COMMAND, ...fields })) form.set(name, value);
+  return form;
+};
+const evaluated = (board: Board) => evaluate(board.s, board.now);
+const oneGate = () => makeBoard({ FP: { name: "Fuel prime", short: "Fuel", items: { FP1: { secondEyes: true } } } });
 
 describe("a row of the hangar", () => {
-  it("says where the install stands in the board's own words", () => {
-    const board = gates();
-    const made = row(board, lead);
-    const { title, state } = answerOf(evaluate(board.s, board.now));
-    expect(made.answer).toEqual({ title, state, held: false });
-    expect(title).toBe("Not clear for run 1");
-    expect(made).toMatchObject({ registration: "N0TEST", href: "/installs/install", roles: "lead and builder" });
+  it("tells the second person, and nobody else, that an item waits", () => {
+    const board = oneGate();
+    board.proof("FP1");
+    const row = (id: string, roles: ("builder" | "crew")[]) => hangarRow(evaluated(board), { id, roles }, board.now);
+    expect(row("cy", ["builder"]).waits.map((w) => w.label)).toEqual(["Look and confirm: FP1"]);
+    expect(row("bo", ["builder"]).waits).toEqual([]);
+    expect(row("fi", ["crew"]).waits).toEqual([]);
+    expect(row("fi", ["crew"]).first).toMatch(/^First: /);
   });
 
-  it("draws the small Line: each gate once, the walk-round last, and says how many are signed", () => {
-    const board = gates();
-    board.work(board.s.gates.find((g) => g.id === "MF") as Board["s"]["gates"][number]);
-    const { line, progress } = row(board, builder);
-    expect(line.gates.map((g) => g.state)).toEqual(["signed", "in-work", "waiting"]);
-    expect(line.label).toBe("1 of 3 gates signed, 0 of 1 run settled");
-    expect(progress).toBe(1);
-    expect(line.released).toBe(false);
+  it("asks for the signature, then for the countersignature of another", () => {
+    const board = makeBoard({ FP: { name: "Fuel prime", items: { FP1: {} } } });
+    board.proof("FP1");
+    const waits = (id: string, role: "builder" | "inspector") =>
+      hangarRow(evaluated(board), { id, roles: [role] }, board.now).waits.map((w) => w.label);
+    expect(waits("bo", "builder")).toEqual(["Sign Fuel prime"]);
+    expect(waits("di", "inspector")).toEqual([]);
+    board.wait().sign("FP", "bo", "builder");
+    expect(waits("bo", "builder")).toEqual([]);
+    expect(waits("di", "inspector")).toEqual(["Countersign Fuel prime"]);
   });
 
-  it("says GO and its end, then HOLD in words of its own", () => {
-    const { board, run } = clearForRun1();
-    expect(row(board, crew).answer.title).toBe("Clear for run 1a");
-    board.act(run, "go");
-    const go = row(board, crew);
-    expect(go.answer.title).toBe("GO stands for run 1a");
-    expect(go.answer.state).toMatch(/^until \d+ May \d\d:\d\d UTC$/);
-    expect(go.clearance).toContain(rpmText(20));
-    board.wait();
-    board.act(run, "hold");
-    expect(row(board, crew).answer).toMatchObject({ title: "HOLD, run 1a", held: true });
-  });
-
-  it("names the time of the next run with its zone, or says that it has none", () => {
-    const board = gates();
-    board.rung("2");
-    expect(row(board, lead).planned).toBe("Run 1 has no time yet.");
-    const run = board.run("1", { plannedStart: Date.UTC(2031, 4, 10, 7, 30) });
-    board.plan(run);
-    expect(row(board, lead).planned).toBe("Run 1a is planned for Sat 10 May 07:30 UTC.");
-  });
-
-  it("can be found by registration, name, role and what waits, in small letters", () => {
-    const board = gates();
-    for (const id of ["m1"]) board.proof(id);
-    const { words } = row(board, builder);
-    expect(words).toBe(words.toLowerCase());
-    for (const part of ["n0test", "test install", "builder", "not clear for run 1", "sign mount"]) expect(words).toContain(part);
-  });
-});
-
-describe("what waits for a person", () => {
-  it("is the first signature for the builder, then the countersignature for the inspector", () => {
-    const board = gates();
-    board.proof("m1");
-    expect(labels(board, builder)).toEqual(["Sign Mount"]);
-    expect(labels(board, inspector)).toEqual([]);
-    board.sign("MF");
-    expect(labels(board, builder)).toEqual([]);
-    expect(labels(board, inspector)).toEqual(["Countersign Mount"]);
-  });
-
-  it("is second eyes for everybody but the one who did it", () => {
-    const board = gates();
-    board.work(board.s.gates.find((g) => g.id === "MF") as Board["s"]["gates"][number]);
-    board.wait();
-    board.proof("f1", { by: "bo" });
-    expect(labels(board, builder)).toEqual([]);
-    expect(labels(board, viewer("cy", "builder"))).toEqual(["Look and confirm: f1"]);
-    expect(labels(board, crew)).toEqual([]);
-  });
-
-  it("is the card, then the roll call, for whoever stands at the run, and GO for the lead once it is clear", () => {
-    const board = signAll(gates());
-    board.wait();
+  it("asks the crew to read the card, then to answer, and says run, time and clearance", () => {
+    const board = signAll(makeBoard({ FP: { items: { FP1: {} } } }));
     const run = board.run("1");
-    const plan = board.plan(run);
-    expect(labels(board, crew)).toEqual(["Read the run card"]);
-    run.acks.push({ ...board.record("ack", { by: "fi", as: "crew" }), version: plan.version });
-    expect(labels(board, crew)).toEqual(["Answer the roll call"]);
-    board.answer(run, "fi");
-    expect(labels(board, crew)).toEqual([]);
-    expect(labels(board, viewer("ed", "inspector"))).toEqual([]);
-    for (const by of ["la", "cy"]) {
-      run.acks.push({ ...board.record("ack", { by, as: "crew" }), version: plan.version });
-      board.answer(run, by);
-    }
-    expect(labels(board, lead)).toEqual([]);
-    board.wind(run);
-    expect(labels(board, lead)).toEqual(["Call GO for run 1a"]);
-    expect(labels(board, crew)).toEqual([]);
+    const row = () => hangarRow(evaluated(board), { id: "fi", roles: ["crew"] }, board.now);
+    const waits = () => row().waits.map((w) => w.label);
+    expect(waits()).toEqual([]);
+    board.brief(run);
+    expect(waits()).toEqual([]);
+    const { acks, answers } = run;
+    run.answers = [];
+    expect(waits()).toEqual(["Answer the roll call"]);
+    run.acks = [];
+    expect(waits()).toEqual(["Read the run card"]);
+    Object.assign(run, { acks, answers });
+    expect(row().planned).toMatch(/^Run 1a is planned for \w{3} \d+ \w{3} \d\d:\d\d \S+\.$/);
+    expect(row().clearance).toMatch(/^Cleared to [\d,]+ rpm\.$/);
+    expect(row().answer.title).toBe("Clear for run 1a");
+    const lead = hangarRow(evaluated(board), { id: "la", roles: ["lead", "builder"] }, board.now);
+    expect(lead.waits.map((w) => w.label)).toEqual(["Call GO for run 1a"]);
+    expect(lead.roles).toBe("lead and builder");
   });
 
-  it("is nothing where only work is to be done; then it says what comes first, and for whom", () => {
-    const made = row(gates(), builder);
-    expect(made.waits).toEqual([]);
-    expect(made.first).toMatch(/^First: Mount.* For Member/);
+  it("stands the one that waits most first, the newest change first among equals", () => {
+    const e = evaluated(oneGate());
+    const made = (id: string, waits: number, changedAt: number) => ({
+      ...hangarRow(e, { id: "fi", roles: ["crew"] }, changedAt),
+      id,
+      waits: Array.from({ length: waits }, () => ({ label: "", note: "", href: "" })),
+    });
+    const view = hangarView([made("a", 0, 5), made("b", 2, 1), made("c", 0, 9), made("d", 1, 3)]);
+    expect(view.rows.map((r) => r.id)).toEqual(["b", "d", "c", "a"]);
+    expect([view.title, view.state]).toEqual(["3 things wait for you", "on 2 of your 4 installs"]);
+    expect(hangarView([made("a", 1, 1)]).title).toBe("1 thing waits for you");
+    expect(hangarView([made("a", 0, 1)])).toMatchObject({ title: "Nothing waits for you", state: "on your install" });
+    expect(hangarView([]).title).toBe("No installs yet");
   });
 });
 
-describe("the order of the hangar", () => {
-  const blank = row(gates(), builder);
-  const wait = { label: "Sign", note: "", href: "/" };
-  const named = (registration: string, waits: number, changedAt: number): HangarRow => ({
-    ...blank,
-    registration,
-    changedAt,
-    waits: Array.from({ length: waits }, () => wait),
+describe("the set-up", () => {
+  const board = makeBoard();
+  board.s.values = valueDefs(SAMPLES.boostedConstantSpeed).map((def) => ({ ...def, value: def.preset, source: null }));
+  const redline = board.s.values.find((v) => v.key === "redline");
+  if (!redline) throw new Error("no redline");
+  redline.value = 2712.5 / 60;
+  const view = () => setUpView(evaluated(board), { id: "la", roles: ["lead", "builder"] }, "si");
+
+  it("names first what the evaluator lets stop the runs, the redline before all", () => {
+    const stop = evaluated(board).result.next?.blockers.find((b) => b.code === "limit-unconfirmed");
+    const open = view().groups[0]?.rows.filter((r) => r.state !== "confirmed") ?? [];
+    expect(stop?.title).toBe(`${open.length} limits not confirmed`);
+    expect(view().groups.map((g) => g.key)).toEqual(["runs", "release", "ratings"]);
+    expect(view().next?.label).toBe("Redline");
+    expect(view().groups.flatMap((g) => g.rows)).toHaveLength(board.s.values.length);
   });
 
-  it("puts first where most waits, then what changed last, then the registration", () => {
-    const rows = [named("N0555E", 0, 5), named("N0444D", 0, 9), named("N0333C", 2, 1), named("N0222B", 1, 3), named("N0111A", 0, 5)];
-    const view = hangarView(rows);
-    expect(view.rows.map((r) => r.registration)).toEqual(["N0333C", "N0222B", "N0444D", "N0111A", "N0555E"]);
-    expect(rows[0]?.registration).toBe("N0555E");
-    expect(view).toMatchObject({ waits: 3, title: "3 things wait for you", state: "on 2 of your 5 installs" });
+  it("says of each whether it is a default, missing or read", () => {
+    const rows = view().groups.flatMap((g) => g.rows);
+    expect(rows.find((r) => r.key === "redline")).toMatchObject({ word: "not confirmed", value: "2,713", typed: "2713", unit: "rpm" });
+    expect(rows.find((r) => r.key === "oilPressureMax")).toMatchObject({ word: "not entered", value: null, unit: "kPa" });
+    redline.source = "engine manual p. 12";
+    expect(view().groups[0]?.rows[0]).toMatchObject({ word: "read", source: "engine manual p. 12" });
+    redline.source = null;
   });
 
-  it("says one thing, nothing and no installs as they are", () => {
-    expect(hangarView([named("N0111A", 1, 1)])).toMatchObject({ title: "1 thing waits for you", state: "on 1 of your 1 install" });
-    expect(hangarView([named("N0111A", 0, 1)])).toMatchObject({ title: "Nothing waits for you", state: "on your install" });
-    expect(hangarView([named("N0111A", 0, 1), named("N0222B", 0, 1)]).state).toBe("on any of your 2 installs");
-    expect(hangarView([])).toMatchObject({ title: "No installs yet", waits: 0, rows: [] });
+  it("lets nobody confirm who is crew only, and says who may", () => {
+    expect(setUpView(evaluated(board), { id: "fi", roles: ["crew"] }, "si").may).toMatchObject({ ok: false });
+    expect(view().may.ok).toBe(true);
   });
 
-  it("lists roles as people say them", () => {
-    expect(rolesText(["crew"])).toBe("crew");
-    expect(rolesText(["lead", "builder", "crew"])).toBe("lead, builder and crew");
+  it("takes a figure left as shown for the value itself, and another for what it says", () => {
+    const read = (value: string, source = "manual p. 12") =>
+      parseWithZod(formOf({ key: "redline", value, source }), { schema: valueForm(redline, "si") });
+    const kept = read("2713");
+    expect(kept.status === "success" && kept.value.value).toBe(redline.value);
+    const typed = read("2700");
+    expect(typed.status === "success" && typed.value.value).toBeCloseTo(45, 9);
+    expect(read("fast", "").error).toMatchObject({
+      value: [expect.stringContaining("not a number")],
+      source: [expect.stringContaining("where it was read")],
+    });
+  });
+
+  it("keeps the text of the form that came back, and of no other", () => {
+    const sent = formOf({ key: "redline", value: "fast", source: "p. 12" });
+    const reply = replyOf("value-redline", sent, { value: ["no"], source: null });
+    const mine = fieldsOf("value-redline", reply);
+    expect(mine.field("value", "2713")).toMatchObject({ id: "value-redline-value", defaultValue: "fast", errors: ["no"] });
+    expect(mine.field("source").errors).toBeUndefined();
+    expect(fieldsOf("value-idleRpm", reply).field("value", "800")).toMatchObject({ defaultValue: "800", errors: undefined });
+    expect(reply.typed).not.toHaveProperty("commandId");
+  });
+});
+
+describe("the crew", () => {
+  it("counts who is missing for the runs and for the signatures", () => {
+    const board = makeBoard();
+    const rung = board.s.rungs[0];
+    if (!rung) throw new Error("no rung");
+    const here = board.s.members.length;
+    rung.crew = { ...rung.crew, people: here + 2 };
+    const view = () => crewPageView(evaluated(board), { id: "la", roles: ["lead", "builder"] });
+    expect(view().needs[0]).toMatchObject({ met: false, title: `Run 1 needs ${here + 2} people` });
+    expect(view().needs[0]?.says).toContain("bring in 2 more");
+    rung.crew = { ...rung.crew, people: here };
+    expect(view().needs.every((n) => n.met)).toBe(true);
+    for (const m of board.s.members) m.roles = m.roles.map((r) => (r.role === "inspector" ? { ...r, to: board.now } : r));
+    expect(view().needs.find((n) => n.key === "inspector")).toMatchObject({ met: false, title: "No inspector" });
+    expect(view().former.length).toBeGreaterThan(0);
+  });
+
+  it("takes an address as people type it, and asks what they do", () => {
+    const good = parseWithZod(formOf({ email: " Noor@Demo.Example ", role: "crew" }), { schema: addMemberForm });
+    expect(good.status === "success" && good.value.email).toBe("noor@demo.example");
+    const bad = parseWithZod(formOf({ email: "noor" }), { schema: addMemberForm });
+    expect(bad.error).toMatchObject({ email: [expect.stringContaining("mail address")], role: ["Choose what they do here."] });
+  });
+});
+
+describe("the crib", () => {
+  const crib = (board: Board) => cribView(evaluated(board), "la", "si", { wrench: "4471" });
+
+  it("names the proofs that fall when the tool is found out of tolerance, as the evaluator then judges", () => {
+    const board = makeBoard({ OP: { items: { OP1: { parts: [torque()] }, OP2: {} } } });
+    board.wait();
+    board.proof("OP1");
+    board.proof("OP2");
+    const [row] = crib(board).tools;
+    const tool = board.s.tools[0];
+    if (!row || !tool) throw new Error("no tool");
+    expect(row).toMatchObject({ state: "in date", detail: "serial 4471", reach: "OP1" });
+    tool.checks.push({ id: "bad", at: board.now, good: false, due: null });
+    board.wait();
+    const after = evaluated(board).result.items;
+    expect([after.OP1?.stands, after.OP2?.stands]).toEqual([false, true]);
+    expect(crib(board).tools[0]).toMatchObject({ state: "out", word: "out of tolerance", reach: null });
+    expect(crib(board).tools[0]?.hangs).toContain("1 proof to do again: OP1");
+  });
+
+  it.each([
+    [null, "out", "never done"],
+    [0, "out", "past its date"],
+    [1, "due soon", "last day"],
+    [30 * DAY, "due soon", "30 days left"],
+    [30 * DAY + 1, "in date", "in date"],
+  ])("a date that ends %s ms from now is %s: %s", (left, state, word) => {
+    const now = Date.UTC(2026, 11, 1, 12);
+    expect(dueView("calibration", left === null ? null : now + left, 30, now, "UTC")).toMatchObject({ state, word });
+  });
+
+  it("offers days that exist, and shows the last day that is in date", () => {
+    const now = Date.UTC(2027, 0, 31, 12);
+    expect([dateAfter(now, 0, "UTC"), dateAfter(now, 1, "UTC"), dateAfter(now, 12, "UTC")]).toEqual([
+      "2027-01-31",
+      "2027-02-28",
+      "2028-01-31",
+    ]);
+    expect(dateAfter(Date.UTC(2026, 11, 31, 23, 30), 0, "Europe/Berlin")).toBe("2027-01-01");
+    expect(dueView("look", Date.UTC(2027, 2, 1), 7, now, "UTC").until).toBe("28 Feb 2027");
+    const ticks = monthTicks(now, "UTC");
+    expect(ticks).toHaveLength(12);
+    expect(ticks[0]?.label).toBe("Feb");
+    expect(ticks.every((t) => t.share > 0 && t.share <= 1)).toBe(true);
+  });
+
+  it("asks a good check for its last day, and a bad one for what was found", () => {
+    const good = parseWithZod(formOf({ intent: "good-check", tool: "t", on: "2026-12-01" }), { schema: goodCheckForm });
+    expect(good.error).toEqual({ due: ["Enter the last day in date, as the label or certificate says."] });
+    const bad = parseWithZod(formOf({ intent: "bad-check", tool: "t", on: "2026-12-01" }), { schema: badCheckForm });
+    expect(bad.error).toEqual({ note: ["Say what was found, in a few words."] });
+  });
+
+  it("takes a bottle's charge in the person's unit", () => {
+    const read = (units: "si" | "us", charge: string) =>
+      parseWithZod(formOf({ intent: "add-extinguisher", name: "EX-1", agent: "co2", charge }), { schema: addExtinguisherForm(units) });
+    const us = read("us", "5");
+    // 1 lb = 0.45359237 kg exactly (international yard and pound agreement of 1959).
+    expect(us.status === "success" && us.value.charge).toBeCloseTo(5 * 0.45359237, 9);
+    expect(us.status === "success" && us.value.classB).toBe(false);
+    expect(read("si", "0").error).toMatchObject({ charge: [expect.stringContaining("above zero")] });
   });
 });

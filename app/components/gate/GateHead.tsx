@@ -32,8 +32,8 @@ export function GateHead({ name, state, valve, part, feeds, onward }: GateHeadPr
     <div className="gate-head" style={{ "--head": `${height}px` }}>
       <svg className="gate-head-inlet" width="420" height={height} viewBox={`0 0 420 ${height}`} aria-hidden="true">
         <Inlet feeds={shown} fed={fed} height={height} />
-        <path className="pipe-wall pipe-title" d={`M250 ${height / 2}H430`} />
-        <path className="pipe-bore pipe-title" d={`M${shown.length ? 258 : 250} ${height / 2}H430`} />
+        <path className="pipe-wall pipe-title" d={`M${shown.length ? 263 : 250} ${height / 2}H430`} />
+        <path className="pipe-bore pipe-title" d={`M${shown.length ? 268 : 250} ${height / 2}H430`} />
         {fed && (
           <path className="pipe-flow pipe-title" d={`M${shown.length ? 258 : 250} ${height / 2}H${valve === "signed" ? 430 : 330}`} />
         )}

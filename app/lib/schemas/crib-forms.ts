@@ -6,7 +6,8 @@ import { parseEntry, type UnitSystem } from "#app/lib/units/display";
 
 const commandId = commandIdSchema;
 const date = (message: string) => z.string(message).pipe(dateSchema);
-const name = (message: string) => z.string().default("").pipe(z.string().trim().min(2, message).max(120));
+const name = (message: string) => z.string(message).trim().min(2, message).max(120);
+const said = (message: string) => z.string(message).pipe(noteSchema.unwrap().min(3, message));
 
 export const addToolForm = z.object({
   intent: z.literal("add-tool"),
@@ -27,7 +28,7 @@ export const badCheckForm = z.object({
   commandId,
   tool: idSchema,
   on: date("Enter the day on which it was found."),
-  note: z.string().default("").pipe(noteSchema.unwrap().min(3, "Say what was found, in a few words.")),
+  note: said("Say what was found, in a few words."),
 });
 export const addExtinguisherForm = (units: UnitSystem) =>
   z.object({
@@ -56,5 +57,5 @@ export const serviceForm = z.object({ intent: z.literal("service"), ...bottle, d
 export const withdrawForm = z.object({
   intent: z.literal("withdrawn"),
   ...bottle,
-  note: z.string().default("").pipe(noteSchema.unwrap().min(3, "Say why, such as discharged or gauge low.")),
+  note: said("Say why, such as discharged or gauge low."),
 });

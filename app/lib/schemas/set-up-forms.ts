@@ -23,17 +23,17 @@ export function valueForm(def: ValueDef & Value, units: UnitSystem) {
         context.addIssue({ code: "custom", message: read.sentence });
         return z.NEVER;
       }),
-    source: z.string().default("").pipe(sourceSchema),
+    source: z.string("Say where it was read, such as the manual and its page.").pipe(sourceSchema),
   });
 }
 
+const ADDRESS = "Enter the mail address with which they sign in.";
 export const addMemberForm = z.object({
   commandId: commandIdSchema,
   email: z
-    .string()
-    .default("")
+    .string(ADDRESS)
     .transform((text) => text.trim().toLowerCase())
-    .pipe(z.email("Enter the mail address with which they sign in.")),
+    .pipe(z.email(ADDRESS)),
   role: z.enum(["lead", "builder", "inspector", "crew"], "Choose what they do here."),
 });
 
