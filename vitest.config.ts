@@ -8,6 +8,9 @@ export default defineConfig({
   test: {
     // Secrets that tests cause to be made do not land in the developer's data folder.
     env: { DATA_DIR: join(tmpdir(), "bladecount-test-data") },
+    // Properties over thousands of boards take their time on a busy machine; nothing here tests speed.
+    testTimeout: 120_000,
+    hookTimeout: 120_000,
     projects: [
       { extends: true, test: { name: "node", environment: "node", include: ["tests/**/*.test.ts"] } },
       {

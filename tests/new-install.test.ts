@@ -6,7 +6,7 @@ import { identitySchema, ratingsForm } from "#app/lib/schemas/new-install";
 import { holds, parseCondition } from "#app/lib/template/condition";
 import { gateOf, TEMPLATE } from "#app/lib/template/template";
 import { traitWords } from "#app/lib/template/trait-words";
-import { PAGE_ONE } from "#app/lib/template/traits";
+import { PAGE_ONE, PAGE_TWO, traitsSchema } from "#app/lib/template/traits";
 import type { Traits } from "#app/lib/template/types";
 import { valueDefs } from "#app/lib/template/values";
 import { toSI } from "#app/lib/units/convert";
@@ -103,6 +103,39 @@ describe("answers that cannot be true together", () => {
     const draft = draftOf({ ...pageOne(SAMPLES.handStartedTaildragger), lithium: true, pump2: true, return: true });
     expect(traitsOf(draft)).toMatchObject({ elsys: false, lithium: false, pump2: false, return: false });
     expect(changedOf({ ...SAMPLES.boostedConstantSpeed, turbo: true, low: true })).toBe(2);
+  });
+});
+
+describe("any answers that radios can send, sensible or not", () => {
+  const anyAnswers = fc.record(
+    Object.fromEntries([...PAGE_ONE, ...PAGE_TWO].map(({ key, options }) => [key, fc.constantFrom(...options.map((o) => o.value))])),
+  ) as unknown as fc.Arbitrary<Traits>;
+
+  it("go on from page one exactly where its own answers make sense, and else are faulted at a question of it", () => {
+    fc.assert(
+      fc.property(anyAnswers, (answers) => {
+        const draft = draftOf(pageOne(answers));
+        const judged = judgeFirst(draft);
+        expect(judged.ready).toBe(traitsSchema.safeParse(traitsOf(draft)).success);
+        expect(Object.keys(judged.errors).length > 0).toBe(!judged.ready);
+        const asked: string[] = PAGE_ONE.map((q) => q.key);
+        for (const key of Object.keys(judged.errors)) expect(asked).toContain(key);
+      }),
+    );
+  });
+
+  it("go on from page two exactly where the traits make sense, and else are faulted at a question that it asks", () => {
+    fc.assert(
+      fc.property(anyAnswers, (answers) => {
+        const traits = traitsOf(draftOf(answers));
+        if (!traits) throw new Error("every question was answered");
+        const judged = judgeSecond(traits);
+        expect(judged.ready).toBe(traitsSchema.safeParse(traits).success);
+        const asked = secondQuestions(traits);
+        for (const key of Object.keys(judged.errors)) expect(asked.map((q) => q.key)).toContain(key);
+        for (const q of asked) expect([...q.options.map((o) => o.value), "not-one"]).toContain(q.answer);
+      }),
+    );
   });
 });
 

@@ -68,6 +68,20 @@ describe("a row of the hangar", () => {
     expect(lead.roles).toBe("lead and builder");
   });
 
+  it("never says cleared beside a run that is not clear, and tells those who can clear what comes first", () => {
+    const board = makeBoard({ FP: { name: "Fuel prime", items: { FP1: {} } } });
+    board.plan(board.run("1"));
+    const row = (id: string, role: "builder" | "crew") => hangarRow(evaluated(board), { id, roles: [role] }, board.now);
+    expect(row("cy", "builder").answer.title).toBe("Not clear for run 1a");
+    expect(row("bo", "builder").clearance).toBe("Once nothing stops it: cleared to 1,200 rpm.");
+    const ran = hangarRow(evaluate({ ...board.s, values: [] }, board.now), { id: "bo", roles: ["builder"] }, board.now);
+    expect(ran.clearance).toBe("Not cleared to any speed yet.");
+    // One who waits for nobody: not on the run, and the first thing is a builder's.
+    board.s.runs = [];
+    expect(row("bo", "builder").first).toMatch(/^You can clear what comes first: Fuel prime/);
+    expect(row("fi", "crew").first).toMatch(/^First: Fuel prime.* For Member /);
+  });
+
   it("stands the one that waits most first, the newest change first among equals", () => {
     const e = evaluated(oneGate());
     const made = (id: string, waits: number, changedAt: number) => ({
@@ -79,7 +93,7 @@ describe("a row of the hangar", () => {
     expect(view.rows.map((r) => r.id)).toEqual(["b", "d", "c", "a"]);
     expect([view.title, view.state]).toEqual(["3 things wait for you", "on 2 of your 4 installs"]);
     expect(hangarView([made("a", 1, 1)]).title).toBe("1 thing waits for you");
-    expect(hangarView([made("a", 0, 1)])).toMatchObject({ title: "Nothing waits for you", state: "on your install" });
+    expect(hangarView([made("a", 0, 1)])).toMatchObject({ title: "Nothing to sign or answer", state: "on your install" });
     expect(hangarView([]).title).toBe("No installs yet");
   });
 });
@@ -122,7 +136,7 @@ describe("the set-up", () => {
     expect(kept.status === "success" && kept.value.value).toBe(redline.value);
     const typed = read("2700");
     expect(typed.status === "success" && typed.value.value).toBeCloseTo(45, 9);
-    expect(read("fast", "").error).toMatchObject({
+    expect(read("fast", "").reply().error).toMatchObject({
       value: [expect.stringContaining("not a number")],
       source: [expect.stringContaining("where it was read")],
     });
@@ -160,7 +174,7 @@ describe("the crew", () => {
     const good = parseWithZod(formOf({ email: " Noor@Demo.Example ", role: "crew" }), { schema: addMemberForm });
     expect(good.status === "success" && good.value.email).toBe("noor@demo.example");
     const bad = parseWithZod(formOf({ email: "noor" }), { schema: addMemberForm });
-    expect(bad.error).toMatchObject({ email: [expect.stringContaining("mail address")], role: ["Choose what they do here."] });
+    expect(bad.reply().error).toMatchObject({ email: [expect.stringContaining("mail address")], role: ["Choose what they do here."] });
   });
 });
 
@@ -212,9 +226,9 @@ describe("the crib", () => {
 
   it("asks a good check for its last day, and a bad one for what was found", () => {
     const good = parseWithZod(formOf({ intent: "good-check", tool: "t", on: "2026-12-01" }), { schema: goodCheckForm });
-    expect(good.error).toEqual({ due: ["Enter the last day in date, as the label or certificate says."] });
+    expect(good.reply().error).toEqual({ due: ["Enter the last day in date, as the label or certificate says."] });
     const bad = parseWithZod(formOf({ intent: "bad-check", tool: "t", on: "2026-12-01" }), { schema: badCheckForm });
-    expect(bad.error).toEqual({ note: ["Say what was found, in a few words."] });
+    expect(bad.reply().error).toEqual({ note: ["Say what was found, in a few words."] });
   });
 
   it("takes a bottle's charge in the person's unit", () => {
@@ -224,6 +238,6 @@ describe("the crib", () => {
     // 1 lb = 0.45359237 kg exactly (international yard and pound agreement of 1959).
     expect(us.status === "success" && us.value.charge).toBeCloseTo(5 * 0.45359237, 9);
     expect(us.status === "success" && us.value.classB).toBe(false);
-    expect(read("si", "0").error).toMatchObject({ charge: [expect.stringContaining("above zero")] });
+    expect(read("si", "0").reply().error).toMatchObject({ charge: [expect.stringContaining("above zero")] });
   });
 });

@@ -65,7 +65,7 @@ export default function Crew({ loaderData, actionData }: Route.ComponentProps) {
           {view.needs
             .filter((need) => !need.met)
             .map((need) => (
-              <StateRow key={need.key} nut="todo" word="too few" open>
+              <StateRow key={need.key} nut="todo" word={need.word} open>
                 <h3 className="text-lead">{need.title}</h3>
                 <p className="text-ink-2">{need.says}</p>
               </StateRow>
@@ -78,7 +78,7 @@ export default function Crew({ loaderData, actionData }: Route.ComponentProps) {
               <li key={need.key} className="grid grid-cols-[36px_minmax(0,1fr)] gap-x-3">
                 <ItemNut state="done" size={36} />
                 <p>
-                  {need.title}, <b>enough</b>: <span className="text-ink-2">{need.says}</span>
+                  {need.title}, <b>{need.word}</b>: <span className="text-ink-2">{need.says}</span>
                 </p>
               </li>
             ))}

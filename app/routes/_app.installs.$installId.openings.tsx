@@ -32,37 +32,35 @@ export default function Openings({ loaderData, actionData }: Route.ComponentProp
   const item = { commandId: formId, reply: actionData };
   const count = view.open.length + view.past.length;
   return (
-    <>
-      <main id="main">
-        <TitlePipe
-          title="Openings"
-          state={view.state}
-          fill={view.fill}
-          then="What was opened up or disturbed. Every proof of it lapses and is done again once it is closed."
-        />
-        {view.open.length > 0 && (
-          <section aria-label="Open now">
-            <ul>
-              {view.open.map((row) => (
-                <OpeningItem key={`${row.id} ${row.state}`} row={row} {...item} />
-              ))}
-            </ul>
-          </section>
-        )}
-        <OpeningForm key={count} view={view} commandId={`${formId}-open`} reply={actionData} />
-        {view.past.length > 0 && (
-          <section aria-labelledby="past" className="border-t-2 border-ink">
-            <h2 id="past" className="px-4 pt-5 pb-3 text-h3 tablet:px-6">
-              Closed
-            </h2>
-            <ul className="border-t border-line">
-              {view.past.map((row) => (
-                <OpeningItem key={`${row.id} ${row.state}`} row={row} {...item} />
-              ))}
-            </ul>
-          </section>
-        )}
-      </main>
-    </>
+    <main id="main">
+      <TitlePipe
+        title="Openings"
+        state={view.state}
+        fill={view.fill}
+        then="What was opened up or disturbed. Every proof of it lapses and is done again once it is closed."
+      />
+      {view.open.length > 0 && (
+        <section aria-label="Open now">
+          <ul>
+            {view.open.map((row) => (
+              <OpeningItem key={`${row.id} ${row.state}`} row={row} {...item} />
+            ))}
+          </ul>
+        </section>
+      )}
+      <OpeningForm key={count} view={view} commandId={`${formId}-open`} reply={actionData} />
+      {view.past.length > 0 && (
+        <section aria-labelledby="past" className="border-t-2 border-ink">
+          <h2 id="past" className="px-4 pt-5 pb-3 text-h3 tablet:px-6">
+            Closed
+          </h2>
+          <ul className="border-t border-line">
+            {view.past.map((row) => (
+              <OpeningItem key={`${row.id} ${row.state}`} row={row} {...item} />
+            ))}
+          </ul>
+        </section>
+      )}
+    </main>
   );
 }

@@ -14,8 +14,19 @@ export async function loader({ request, params, context }: Route.LoaderArgs) {
   const answer = boardAnswer(install.e, install.head);
   const tag = tagOf(answer);
   const headers = { ETag: tag, "Cache-Control": "private, no-cache" };
+  // For a page that only asks whether anything has changed: no body worth the name when nothing has.
+  if (new URL(request.url).searchParams.get("since") === tag) return Response.json({ unchanged: true }, { headers });
   const known = request.headers.get("If-None-Match")?.split(/\s*,\s*/) ?? [];
   // A proxy that compresses makes the tag a weak one: W/"...".
   if (known.some((k) => k.replace(/^W\//, "") === tag)) return new Response(null, { status: 304, headers });
   return Response.json(answer, { headers });
+}
+
+/** The page's own fetcher: where the network is gone, nothing is known to have changed, and the board stays on the screen. */
+export async function clientLoader({ serverLoader }: Route.ClientLoaderArgs) {
+  try {
+    return await serverLoader();
+  } catch {
+    return { unchanged: true };
+  }
 }

@@ -1,5 +1,5 @@
 import { useEffect, useRef } from "react";
-import { useRevalidator } from "react-router";
+import { useFetcher, useRevalidator } from "react-router";
 
 const EVERY = 15_000;
 
@@ -14,31 +14,28 @@ function handsBusy(): boolean {
 
 /**
  * Looks every 15 s, while the page is seen and on coming back to it, whether the board's answer has changed, and only then loads
- * the page's data again. The address answers "not changed" without a body for the tag that the page was drawn from.
+ * the page's data again. `tag` is that of the answer which the page was drawn from: while it is the same, no board is sent.
  */
 export function useBoardWatch(address: string, tag: string): void {
-  const { revalidate, state } = useRevalidator();
-  const loading = useRef(false);
-  loading.current = state === "loading";
+  const { revalidate } = useRevalidator();
+  const { load, data, state } = useFetcher<{ unchanged?: true }>();
+  const busy = useRef(false);
+  busy.current = state !== "idle";
   useEffect(() => {
-    const stop = new AbortController();
-    const look = async () => {
-      if (document.visibilityState !== "visible" || loading.current || handsBusy()) return;
-      try {
-        const answer = await fetch(address, { headers: { "If-None-Match": tag }, cache: "no-store", signal: stop.signal });
-        if (answer.status === 401 || (answer.ok && answer.headers.get("ETag") !== tag)) await revalidate();
-      } catch {
-        // No network: the page stays as it was, and says as of when.
-      }
+    const look = () => {
+      if (document.visibilityState !== "visible" || busy.current || handsBusy()) return;
+      void load(`${address}?since=${encodeURIComponent(tag)}`);
     };
     const timer = setInterval(look, EVERY);
     document.addEventListener("visibilitychange", look);
     window.addEventListener("focus", look);
     return () => {
-      stop.abort();
       clearInterval(timer);
       document.removeEventListener("visibilitychange", look);
       window.removeEventListener("focus", look);
     };
-  }, [address, tag, revalidate]);
+  }, [address, tag, load]);
+  useEffect(() => {
+    if (data && !data.unchanged && !handsBusy()) void revalidate();
+  }, [data, revalidate]);
 }

@@ -15,7 +15,7 @@ export function YearRule({ due, ticks }: YearRuleProps) {
   return (
     <svg viewBox="0 0 360 42" className="block h-auto w-full max-w-[420px]" aria-hidden="true">
       {due.state === "out" ? (
-        <path className="seal-mark" d={`M${LEFT} ${Y - 7}l9-8 10 5 8-8`} />
+        <path className="seal-mark" d={`M${LEFT} ${Y - 5}l9-7 10 5 8-8`} />
       ) : (
         <>
           <path d={`M${LEFT} ${Y - 13}H${x(due.share)}V${Y}H${LEFT}Z`} className="fill-flow" />

@@ -29,7 +29,7 @@ export function HangarTable({ rows, search, newHref }: HangarTableProps) {
     features,
     columns,
     data: rows,
-    initialState: { globalFilter: search },
+    initialState: { globalFilter: search, sorting: [{ id: "waits", desc: true }] },
     getRowId: (row) => row.id,
     globalFilterFn: (row, _column, sought: string) => row.original.words.includes(sought.trim().toLowerCase()),
   });

@@ -81,7 +81,7 @@ function Waits({ waits, first, href, registration }: HangarRow) {
   if (!waits.length)
     return (
       <div className="max-w-[34ch]">
-        <p className="font-semibold text-ink-2">Nothing</p>
+        <p className="font-semibold text-ink-2">Nothing to sign or answer</p>
         {first && <p className="text-ink-2">{first}</p>}
       </div>
     );

@@ -20,10 +20,7 @@ export function LapsePanel({ lapses, staysOpen, changed, focus }: LapsePanelProp
     if (focus) heading.current?.focus();
   }, [focus]);
   return (
-    <section
-      aria-labelledby="lapses"
-      className="border-t-2 border-ink bg-plate px-4 py-5 tablet:px-6 wide:border-t-0 wide:border-l-2"
-    >
+    <section aria-labelledby="lapses" className="border-t-2 border-ink bg-plate px-4 py-5 tablet:px-6 wide:border-t-0 wide:border-l-2">
       <h2 id="lapses" ref={heading} tabIndex={-1} className="scroll-mt-4 text-h3">
         What will lapse
       </h2>

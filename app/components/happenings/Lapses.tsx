@@ -10,10 +10,7 @@ export function Lapses({ gates }: { gates: LapsedGate[] }) {
   return (
     <ul>
       {gates.map((gate) => (
-        <li
-          key={gate.id}
-          className="grid items-center gap-x-4 gap-y-1 border-t border-line py-3 tablet:grid-cols-[216px_minmax(0,1fr)]"
-        >
+        <li key={gate.id} className="grid items-center gap-x-4 gap-y-1 border-t border-line py-3 tablet:grid-cols-[216px_minmax(0,1fr)]">
           <Flip before={gate.before} after={gate.after} />
           <div className="min-w-0">
             <h3 className="text-lead leading-tight">

@@ -8,7 +8,7 @@ import { LapsePanel } from "#app/components/happenings/LapsePanel";
 import { Fitting } from "#app/components/ui/Fitting";
 import { Foot } from "#app/components/ui/Foot";
 import { type FormReply, fieldsOf } from "#app/lib/schemas/form-reply";
-import { type OpenShown, type OpeningsView, openWords } from "#app/lib/views/openings";
+import { type OpeningsView, type OpenShown, openWords } from "#app/lib/views/openings";
 
 interface OpeningFormProps {
   view: OpeningsView;
@@ -103,7 +103,7 @@ function Systems({ view, chosen, errors }: { view: OpeningsView; chosen: string[
           ))}
         </div>
       </fieldset>
-      <div className="system-choices">
+      <div className="tablet:[&_.choices-row]:grid tablet:[&_.choices-row]:grid-cols-2">
         <ChoiceGroup
           id="open-systems"
           name="systems"
@@ -132,7 +132,16 @@ function OpeningFoot({ view, shown, busy }: { view: OpeningsView; shown: OpenSho
   if (!shown)
     return (
       <Foot says="Nothing is recorded until you confirm" note="First look at what it makes lapse.">
-        <Fitting form="open" size="act" name="intent" value="preview" formAction="#lapses" note="before it counts" reason={reason} busy={busy}>
+        <Fitting
+          form="open"
+          size="act"
+          name="intent"
+          value="preview"
+          formAction="#lapses"
+          note="before it counts"
+          reason={reason}
+          busy={busy}
+        >
           See what will lapse
         </Fitting>
       </Foot>

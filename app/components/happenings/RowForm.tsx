@@ -50,7 +50,14 @@ export function RowForm(props: RowFormProps) {
           {act}
         </Fitting>
         {other && may.ok && (
-          <Fitting size={size} variant="outline" name="intent" value={other.intent} note={other.note} label={`${other.act}: ${about}. ${other.note}`}>
+          <Fitting
+            size={size}
+            variant="outline"
+            name="intent"
+            value={other.intent}
+            note={other.note}
+            label={`${other.act}: ${about}. ${other.note}`}
+          >
             {other.act}
           </Fitting>
         )}

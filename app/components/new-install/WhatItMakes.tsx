@@ -35,7 +35,11 @@ export function WhatItMakes({ makes, open }: { makes: Makes; open: number }) {
       <noscript>
         <Fitting form={ANSWERS}>Show what my answers make</Fitting>
       </noscript>
-      <Reasons title="Added by your answers" list={makes.added} none="Nothing yet beyond what every install has." />
+      <Reasons
+        title={open > 0 ? "Added by these answers" : "Added by your answers"}
+        list={makes.added}
+        none="Nothing yet beyond what every install has."
+      />
       <Reasons title="Left out" list={makes.leftOut} none="Nothing." />
       <p className="text-note text-ink-2">
         What is left out stays listed, with its reason, in the record and for the inspector who countersigns first.

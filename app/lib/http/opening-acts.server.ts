@@ -96,4 +96,3 @@ const NOT_SHOWN = "What you chose, or the GO in force, has changed since this wa
 
 const errorsOf = (error: Record<string, string[] | null> | null | undefined): FormReply["errors"] =>
   Object.fromEntries(Object.entries(error ?? {}).flatMap(([field, list]) => (list?.length ? [[field.replace(/\[\d+\]$/, ""), list]] : [])));
-

@@ -20,6 +20,8 @@ export interface MemberView {
 export interface NeedView {
   key: string;
   met: boolean;
+  /** "enough", "too few", "nobody" */
+  word: string;
   title: string;
   says: string;
 }
@@ -50,7 +52,7 @@ export function crewPageView(e: Evaluation, me: Viewer): CrewPageView {
   const most = Math.max(0, ...openRungs(e).map((r) => r.crew.people));
   const short = most - here.length;
   return {
-    state: `${count(here.length, "person", "people")}${most === 0 ? "" : short > 0 ? `, ${short} too few for every run` : ", enough for every run"}`,
+    state: `${count(here.length, "person", "people")}${most === 0 ? "" : short > 0 ? `, ${short} more needed for every run` : ", enough for every run"}`,
     fill: most ? Math.min(1, here.length / most) : 1,
     needs: [...peopleNeeds(e, here.length), ...roleNeeds(e, here)],
     members: here.map((m) => memberView(e, m, me.id)).sort((a, b) => a.name.localeCompare(b.name)),
@@ -77,6 +79,7 @@ function peopleNeeds(e: Evaluation, here: number): NeedView[] {
     .map(([key, { people, runs, swinger }]) => ({
       key,
       met: here >= people,
+      word: here >= people ? "enough" : "too few",
       title: `${runs.length === 1 ? `Run ${runs[0]} needs` : `Runs ${listOf(runs)} need`} ${count(people, "person", "people")}`,
       says: `${here >= people ? `${here} are here` : `${here} ${here === 1 ? "is" : "are"} here: bring in ${people - here} more`}${swinger ? ", the swinger counted" : ""}.`,
     }));
@@ -95,6 +98,7 @@ function roleNeeds(e: Evaluation, here: Member[]): NeedView[] {
     return {
       key: role,
       met: names.length > 0,
+      word: names.length ? "enough" : "nobody",
       title: names.length ? count(names.length, role) : `No ${role}`,
       says: names.length ? `${listOf(names)}.` : missing[role],
     };

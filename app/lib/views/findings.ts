@@ -81,7 +81,13 @@ export function findingsView(e: Evaluation, me: Viewer, told: Record<string, Fin
   const rows = e.facts.snapshot.findings.map((f, i) => ({ f, row: rowOf(e, f, `F-${i + 1}`, me, told[f.id]) }));
   const open = rows
     .filter(({ f }) => !f.closed)
-    .sort((a, b) => Number(!!a.f.fixed) - Number(!!b.f.fixed) || WEIGHT[a.f.severity] - WEIGHT[b.f.severity] || capOf(a.f) - capOf(b.f) || b.f.seq - a.f.seq)
+    .sort(
+      (a, b) =>
+        Number(!!a.f.fixed) - Number(!!b.f.fixed) ||
+        WEIGHT[a.f.severity] - WEIGHT[b.f.severity] ||
+        capOf(a.f) - capOf(b.f) ||
+        b.f.seq - a.f.seq,
+    )
     .map(({ row }) => row);
   const closed = rows.filter(({ f }) => f.closed).reverse();
   const grounding = rows.some(({ f }) => !f.closed && f.severity === "grounding");
@@ -158,7 +164,10 @@ function waitsFor(e: Evaluation, fixer: string): string {
 
 /** What it does now, in words. Fixed counts as open. */
 function effectOf(e: Evaluation, f: Finding): string {
-  if (f.closed) return f.severity === "limiting" && f.cap !== null ? `Capped the runs at ${rpmText(f.cap)} while it was open.` : "Stops nothing any more.";
+  if (f.closed)
+    return f.severity === "limiting" && f.cap !== null
+      ? `Capped the runs at ${rpmText(f.cap)} while it was open.`
+      : "Stops nothing any more.";
   const next = e.result.next;
   if (f.severity === "watch") return "Stops no run; looked at again after each one, and closed before the release.";
   if (f.severity === "grounding") {

@@ -20,7 +20,7 @@ export interface HangarRow {
   /** "lead and builder" */
   roles: string;
   answer: { title: string; state: string; held: boolean };
-  /** "Cleared to 1,375 rpm." Null where no run is asked about any more. */
+  /** "Cleared to 1,375 rpm." where the run is clear, else what it would be. Null where no run is asked about any more. */
   clearance: string | null;
   /** "Run 1 is planned for Sat 5 Dec 09:30 CET." */
   planned: string | null;
@@ -51,7 +51,6 @@ export interface HangarView {
 /** @param changedAt when the newest event of the record was written. */
 export function hangarRow(e: Evaluation, me: Viewer, changedAt: Instant): HangarRow {
   const { install } = e.snapshot;
-  const { next } = e.result;
   const { title, state, tone } = answerOf(e);
   const line = lineOf(e, new Map());
   const gates = [...line.gates, ...(line.walkRound ? [line.walkRound] : [])].map(({ state, part }) => ({ state, part }));
@@ -66,7 +65,7 @@ export function hangarRow(e: Evaluation, me: Viewer, changedAt: Instant): Hangar
     name: install.name,
     roles,
     answer: { title, state, held: tone === "held" },
-    clearance: next && (next.clearance.rpm > 0 ? `Cleared to ${rpmText(next.clearance.rpm)}.` : "Not cleared to any speed yet."),
+    clearance: clearanceWords(e),
     planned: plannedWords(e),
     line: {
       gates,
@@ -75,7 +74,7 @@ export function hangarRow(e: Evaluation, me: Viewer, changedAt: Instant): Hangar
       label: `${signed} of ${count(gates.length, "gate")} signed, ${settled} of ${count(e.facts.rungs.length, "run")} settled`,
     },
     waits,
-    first: waits.length ? null : firstOf(e),
+    first: waits.length ? null : firstOf(e, me.id),
     changed: e.facts.when(changedAt),
     changedAt,
     progress: signed + settled,
@@ -91,7 +90,7 @@ export function hangarView(rows: HangarRow[]): HangarView {
   const on = rows.filter((row) => row.waits.length).length;
   if (!rows.length) return { title: "No installs yet", state: "yours will stand here", waits, rows: sorted };
   return {
-    title: waits ? `${count(waits, "thing")} ${waits === 1 ? "waits" : "wait"} for you` : "Nothing waits for you",
+    title: waits ? `${count(waits, "thing")} ${waits === 1 ? "waits" : "wait"} for you` : "Nothing to sign or answer",
     state: waits
       ? `on ${on} of your ${count(rows.length, "install")}`
       : `on any of your ${count(rows.length, "install")}`.replace("any of your 1 install", "your install"),
@@ -104,6 +103,14 @@ export function hangarView(rows: HangarRow[]): HangarView {
 export const rolesText = (roles: Role[]): string =>
   roles.length < 2 ? (roles[0] ?? "no role") : `${roles.slice(0, -1).join(", ")} and ${roles.at(-1)}`;
 
+/** Beside "not clear" a bare figure would read as leave to run. */
+function clearanceWords({ result: { next } }: Evaluation): string | null {
+  if (!next) return null;
+  if (next.clearance.rpm <= 0) return "Not cleared to any speed yet.";
+  const speed = rpmText(next.clearance.rpm);
+  return next.clear || next.go || next.state === "running" ? `Cleared to ${speed}.` : `Once nothing stops it: cleared to ${speed}.`;
+}
+
 function plannedWords(e: Evaluation): string | null {
   const { next } = e.result;
   const start = next?.id ? e.facts.runs.get(next.id)?.run.plannedStart : null;
@@ -111,7 +118,9 @@ function plannedWords(e: Evaluation): string | null {
   return `Run ${next.label} is planned for ${dayWhen(start, e.snapshot.install.timeZone)}.`;
 }
 
-function firstOf(e: Evaluation): string | null {
+function firstOf(e: Evaluation, me: string): string | null {
   const first = (e.result.next ?? e.result.release).blockers[0];
-  return first ? `First: ${first.title}. ${whoClears(e.snapshot, first.owner)}`.trim() : null;
+  if (!first) return null;
+  if (first.owner.members.includes(me)) return `You can clear what comes first: ${first.title}.`;
+  return `First: ${first.title}. ${whoClears(e.snapshot, first.owner)}`.trim();
 }

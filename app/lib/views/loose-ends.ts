@@ -70,14 +70,23 @@ export function looseEndsView(e: Evaluation, me: Viewer, details: LooseEndDetail
   const past = all.filter(({ l }) => l.confirmed).reverse();
   return {
     title: open.length ? count(open.length, "loose end") : "No loose ends",
-    state: open.length ? stateOf(e, open.map(({ blocks }) => blocks)) : past.length ? `${past.length} put back, each seen by two` : "none so far",
+    state: open.length
+      ? stateOf(
+          e,
+          open.map(({ blocks }) => blocks),
+        )
+      : past.length
+        ? `${past.length} put back, each seen by two`
+        : "none so far",
     fill: open.length ? 0.06 : 1,
     ends: open.map(({ l, tag, blocks }) => rowOf(e, l, tag, blocks, me, details[l.id])),
     past: past.map(({ l, tag }) => ({ id: l.id, anchor: anchorOfLooseEnd(l.id), says: pastWords(e, l, tag, details[l.id]?.count ?? 1) })),
     systems: systemsOn(e),
     due: dueChoices(e),
     asking: [...e.facts.items.values()].flatMap((i) =>
-      i.offersLooseEnd ? [{ value: i.id, label: `${i.key}: ${lowerFirst(i.offersLooseEnd.what)} (${systemWords([i.offersLooseEnd.system])})` }] : [],
+      i.offersLooseEnd
+        ? [{ value: i.id, label: `${i.key}: ${lowerFirst(i.offersLooseEnd.what)} (${systemWords([i.offersLooseEnd.system])})` }]
+        : [],
     ),
     may: mayOf(mayRaise(e, { member: me.id })),
   };
@@ -109,7 +118,14 @@ function stateOf(e: Evaluation, blocks: Blocks[]): string {
   return [stops, later ? `${later} ${later === 1 ? "is" : "are"} due later` : ""].filter(Boolean).join(", ");
 }
 
-function rowOf(e: Evaluation, l: LooseEnd, tag: string, blocks: Blocks, me: Viewer, detail: LooseEndDetails[string] | undefined): LooseEndRow {
+function rowOf(
+  e: Evaluation,
+  l: LooseEnd,
+  tag: string,
+  blocks: Blocks,
+  me: Viewer,
+  detail: LooseEndDetails[string] | undefined,
+): LooseEndRow {
   const n = detail?.count ?? 1;
   const rungs = acceptable(e, l);
   const opens = detail?.askedBy ? null : lapsesByOpening(e, me, [l.system], true);
@@ -128,7 +144,10 @@ function rowOf(e: Evaluation, l: LooseEnd, tag: string, blocks: Blocks, me: View
     restored: l.restored && `Put back ${by(l.restored)}. It counts once a second person has looked.`,
     restore: mayOf(mayRestore(e, { looseEnd: l.id, member: me.id })),
     confirm: mayOf(mayConfirmRestored(e, { looseEnd: l.id, member: me.id })),
-    accept: { may: mayOf(mayAcceptLooseEnd(e, { looseEnd: l.id, member: me.id, rung: rungs[0]?.value ?? e.facts.rungs.at(-1)?.key ?? "" })), rungs },
+    accept: {
+      may: mayOf(mayAcceptLooseEnd(e, { looseEnd: l.id, member: me.id, rung: rungs[0]?.value ?? e.facts.rungs.at(-1)?.key ?? "" })),
+      rungs,
+    },
     lapses: opens && { hold: holdWords(opens), says: lapseWords(opens) },
   };
 }
@@ -167,7 +186,7 @@ function ladderOf(e: Evaluation, l: LooseEnd): DueLadderView {
   const key = l.due.kind === "rung" ? l.due.rung : null;
   const next = rungs.findIndex((r) => !settledBy.has(r.key));
   const at = rungs.findIndex((r) => r.key === key);
-  const bar = key === null ? (next < 0 ? rungs.length : next) : at < 0 ? 0 : at;
+  const bar = key === null ? (next < 0 ? rungs.length : next) : Math.max(at, 0);
   return { runs: rungs.map((r, i) => ({ key: r.key, share: r.share, settled: settledBy.has(r.key), due: i === bar })), bar };
 }
 

@@ -35,7 +35,10 @@ export const rowAnchor = (page: keyof typeof ROWS, id: string): string => `${ROW
 
 /** Where bad news is written down: taken from any member at any time. */
 export const recordPlaces = (installId: string): Place[] =>
-  (["openings", "loose-ends", "findings"] as const).map((page) => ({ href: `${boardOf(installId)}${PAGES[page][0]}`, label: PAGES[page][1] }));
+  (["openings", "loose-ends", "findings"] as const).map((page) => ({
+    href: `${boardOf(installId)}${PAGES[page][0]}`,
+    label: PAGES[page][1],
+  }));
 
 /** Where a blocker is cleared. */
 export function placeOf(snapshot: Snapshot, link: Blocker["link"]): Place {

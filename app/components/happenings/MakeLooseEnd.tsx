@@ -1,0 +1,85 @@
+import { Form } from "react-router";
+import { FormFaults } from "#app/components/forms/FormFaults";
+import { HiddenIds } from "#app/components/forms/HiddenIds";
+import { NumberInput } from "#app/components/forms/NumberInput";
+import { Select } from "#app/components/forms/Select";
+import { TextInput } from "#app/components/forms/TextInput";
+import { Fitting } from "#app/components/ui/Fitting";
+import { Notice } from "#app/components/ui/Notice";
+import { type FormReply, fieldsOf } from "#app/lib/schemas/form-reply";
+import type { LooseEndsView, MakingShown } from "#app/lib/views/loose-ends";
+
+interface MakeLooseEndProps {
+  view: LooseEndsView;
+  commandId: string;
+  reply: (FormReply & { making?: MakingShown }) | undefined;
+}
+
+/** Something off, capped or locked out for now. Where making it undoes something, that is shown once, then confirmed. */
+export function MakeLooseEnd({ view, commandId, reply }: MakeLooseEndProps) {
+  const { field, faults } = fieldsOf("make", reply);
+  const making = reply?.form === "make" ? reply.making : undefined;
+  return (
+    <section aria-labelledby="new" className="border-t-2 border-ink px-4 py-5 tablet:px-6">
+      <h2 id="new" className="scroll-mt-4 text-h3">
+        New loose end
+      </h2>
+      <p className="max-w-[66ch] text-ink-2">
+        Something removed, disconnected, capped, locked out or left off for now. Write it down before you walk away from it.
+      </p>
+      <Form method="post" className="mt-4 flex max-w-[860px] flex-col items-start gap-4" preventScrollReset>
+        <FormFaults faults={faults} />
+        <HiddenIds commandId={commandId} intent="make" also={making ? { seen: making.seen } : {}} />
+        <div className="flex w-full flex-wrap items-start gap-4">
+          <NumberInput {...field("count", "1")} label="How many" inputMode="numeric" size={4} />
+          <TextInput
+            {...field("what")}
+            label="What"
+            hint="As somebody else would look for it: vent caps, plug leads, the pitch breaker."
+            maxLength={200}
+            className="min-w-0 flex-1 basis-[300px]"
+          />
+        </div>
+        <TextInput {...field("why")} label="Why it is off" rows={2} maxLength={1000} className="w-full" />
+        <div className="flex w-full flex-wrap items-start gap-4">
+          <Select
+            {...field("system")}
+            label="System"
+            empty="choose a system"
+            options={view.systems}
+            className="min-w-0 flex-1 basis-[300px]"
+          />
+          <Select
+            {...field("due")}
+            label="Back before"
+            empty="choose a run or gate"
+            options={view.due}
+            className="min-w-0 flex-1 basis-[300px]"
+          />
+        </div>
+        {view.asking.length > 0 && (
+          <Select
+            {...field("askedBy")}
+            label="Does an item of the board ask for it?"
+            hint="Then making it and putting it back are no openings. Otherwise each is an opening of its system."
+            options={[{ value: "", label: "no: it counts as an opening" }, ...view.asking]}
+            className="w-full"
+          />
+        )}
+        {making && (
+          <Notice kind={making.hold ? "hold" : "lapsed"} title={making.hold ?? "Look before it counts."} role="status">
+            {making.says}
+          </Notice>
+        )}
+        <Fitting
+          size="act"
+          className="tablet:min-w-96"
+          note={making ? "you have read what lapses" : "what it makes lapse is shown first"}
+          reason={view.may.ok ? undefined : view.may.why}
+        >
+          {making ? "Write it down now" : "Write it down"}
+        </Fitting>
+      </Form>
+    </section>
+  );
+}
