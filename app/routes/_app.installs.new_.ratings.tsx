@@ -100,7 +100,7 @@ export default function NewInstallRatings({ loaderData: page, actionData }: Rout
         </Foot>
       }
     >
-      <CautionSlab title="numbers here come from the maker.">
+      <CautionSlab title="Numbers come from the maker.">
         Bladecount never replaces the engine, propeller or kit maker’s manual, the authority’s rules, or the judgement of a licensed person.
         Where they differ from what stands here, they count.
       </CautionSlab>

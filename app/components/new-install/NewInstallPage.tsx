@@ -23,7 +23,7 @@ export function NewInstallPage({ page, person, about, fill, side, foot, children
       <main id="main" className="flex flex-col">
         <TitlePipe title="New install" state={`page ${page} of 3: ${about}`} fill={fill} />
         {side ? (
-          <div className="grid flex-1 wide:grid-cols-[minmax(0,1fr)_390px]">
+          <div className="grid flex-1 grid-cols-[minmax(0,1fr)] wide:grid-cols-[minmax(0,1fr)_390px]">
             <div className="px-4 py-5 tablet:px-6">{children}</div>
             <aside aria-labelledby="makes" className="border-ink bg-plate px-4 py-5 max-wide:border-t-2 tablet:px-6 wide:border-l-2">
               {side}

@@ -28,10 +28,10 @@ export function RatingFields({ group, initial, errors }: RatingFieldsProps) {
       {group.rows.map((row) => (
         <fieldset
           key={row.key}
-          className="grid items-center gap-x-4 gap-y-2 border-t border-line px-4 py-3 tablet:grid-cols-[minmax(0,1fr)_190px_minmax(0,1fr)] tablet:pr-6 tablet:pl-0 wide:grid-cols-[minmax(0,1fr)_220px_minmax(0,380px)]"
+          className="grid grid-cols-[150px_minmax(0,1fr)] items-start gap-x-4 gap-y-2 border-t border-line px-4 py-3 tablet:grid-cols-[minmax(0,1fr)_190px_minmax(0,1fr)] tablet:items-center tablet:pr-6 tablet:pl-0 wide:grid-cols-[minmax(0,1fr)_220px_minmax(0,380px)]"
         >
           <legend className="sr-only">{row.label}</legend>
-          <div className="grid grid-cols-[80px_minmax(0,1fr)] items-center gap-x-3 tablet:grid-cols-[104px_minmax(0,1fr)]">
+          <div className="col-span-2 grid grid-cols-[80px_minmax(0,1fr)] items-center gap-x-3 tablet:col-span-1 tablet:grid-cols-[104px_minmax(0,1fr)]">
             <State row={row} />
             <p>
               <b aria-hidden="true">{row.label}</b> <span className="block text-note text-ink-2">{row.help}</span>

@@ -63,8 +63,7 @@ export function ratingsForm(defs: ValueDef[], units: UnitSystem) {
         const top = defs.find((def) => def.key === high);
         if (least === null || most === null || !top || least <= most) continue;
         const text = format(top.quantity, most, units, top.shownIn).text;
-        const name = `${top.label.charAt(0).toLowerCase()}${top.label.slice(1)}`;
-        issue(low, "value", `This is above the ${name} of ${text}: change one of the two.`);
+        issue(low, "value", `This is above “${top.label}”, which stands at ${text}: change one of the two.`);
       }
       return { commandId, values: out };
     });
