@@ -38,37 +38,39 @@ export default function Findings({ loaderData, actionData }: Route.ComponentProp
   const { open, closed } = view;
   const item = { commandId: formId, reply: actionData };
   return (
-    <>
-      <main id="main">
-        <TitlePipe
-          title={view.title}
-          state={view.state}
-          fill={view.fill}
-          held={view.held}
-          valve={open.length && !view.held ? "shut" : undefined}
-        />
-        {open.length + closed.length === 0 && <WhatTheyAre />}
-        {open.length > 0 && (
-          <section aria-label="Not closed">
-            <ul>
-              {open.map((row) => (
-                <FindingItem key={`${row.id} ${row.told.length}`} row={row} {...item} />
-              ))}
-            </ul>
-          </section>
-        )}
-        {closed.length > 0 && (
-          <details className="border-b border-line">
-            <summary className="min-h-hit px-4 py-4 text-lead font-semibold text-fitting-ink tablet:px-6">{closed.length} closed</summary>
-            <ul className="border-t border-line">
-              {closed.map((row) => (
-                <FindingItem key={row.id} row={row} {...item} />
-              ))}
-            </ul>
-          </details>
-        )}
-        <RaiseFinding key={open.length + closed.length} view={view} commandId={`${formId}-raise`} reply={actionData} />
-      </main>
+    <main id="main">
+      <TitlePipe
+        title={view.title}
+        state={view.state}
+        fill={view.fill}
+        held={view.held}
+        valve={open.length && !view.held ? "shut" : undefined}
+      />
+      {open.length + closed.length === 0 && <WhatTheyAre />}
+      {open.length > 0 && (
+        <section aria-labelledby="not-closed">
+          <h2 id="not-closed" className="sr-only">
+            Not closed
+          </h2>
+          <ul>
+            {open.map((row) => (
+              <FindingItem key={`${row.id} ${row.told.length}`} row={row} {...item} />
+            ))}
+          </ul>
+        </section>
+      )}
+      {closed.length > 0 && (
+        <details className="border-b border-line">
+          <summary className="min-h-hit px-4 py-4 text-lead font-semibold text-fitting-ink tablet:px-6">
+            <h2 className="inline text-lead">{closed.length} closed</h2>
+          </summary>
+          <ul className="border-t border-line">
+            {closed.map((row) => (
+              <FindingItem key={row.id} row={row} {...item} />
+            ))}
+          </ul>
+        </details>
+      )}
       {open.length + closed.length > 0 && (
         <Foot says="See something? Write it down" note="Anyone may raise a finding. Bad news always counts.">
           <Fitting href="#new" size="act" note="words, how bad, a photo">
@@ -76,7 +78,8 @@ export default function Findings({ loaderData, actionData }: Route.ComponentProp
           </Fitting>
         </Foot>
       )}
-    </>
+      <RaiseFinding key={open.length + closed.length} view={view} commandId={`${formId}-raise`} reply={actionData} />
+    </main>
   );
 }
 

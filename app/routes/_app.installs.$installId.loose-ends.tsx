@@ -33,34 +33,31 @@ export default function LooseEnds({ loaderData, actionData }: Route.ComponentPro
   const { view, formId } = loaderData;
   const { ends, past } = view;
   return (
-    <>
-      <main id="main">
-        <TitlePipe title={view.title} state={view.state} fill={view.fill} valve={ends.length ? "shut" : undefined} />
-        {ends.length === 0 && (
-          <p className="max-w-[66ch] px-4 py-5 text-lead tablet:px-6">
-            What is off, capped or locked out for now stands here with the gate or run before which it must be back. Until a second person
-            has seen it back it stops that gate, and every run for which no inspector has accepted it.
-          </p>
-        )}
-        <ol>
-          {ends.map((row) => (
-            <LooseEndItem key={`${row.id} ${row.restored ?? ""}${row.accepted ?? ""}`} row={row} commandId={formId} reply={actionData} />
-          ))}
-        </ol>
-        {past.length > 0 && (
-          <details className="border-b border-line px-4 tablet:px-6">
-            <summary className="min-h-hit py-3 font-semibold text-fitting-ink">{past.length} put back</summary>
-            <ul className="pb-4">
-              {past.map((p) => (
-                <li key={p.id} id={p.anchor} className="py-1">
-                  {p.says}
-                </li>
-              ))}
-            </ul>
-          </details>
-        )}
-        <MakeLooseEnd key={ends.length + past.length} view={view} commandId={`${formId}-make`} reply={actionData} />
-      </main>
+    <main id="main">
+      <TitlePipe title={view.title} state={view.state} fill={view.fill} valve={ends.length ? "shut" : undefined} />
+      {ends.length === 0 && (
+        <p className="max-w-[66ch] px-4 py-5 text-lead tablet:px-6">
+          What is off, capped or locked out for now stands here with the gate or run before which it must be back. Until a second person has
+          seen it back it stops that gate, and every run for which no inspector has accepted it.
+        </p>
+      )}
+      <ol>
+        {ends.map((row) => (
+          <LooseEndItem key={`${row.id} ${row.restored ?? ""}${row.accepted ?? ""}`} row={row} commandId={formId} reply={actionData} />
+        ))}
+      </ol>
+      {past.length > 0 && (
+        <details className="border-b border-line px-4 tablet:px-6">
+          <summary className="min-h-hit py-3 font-semibold text-fitting-ink">{past.length} put back</summary>
+          <ul className="pb-4">
+            {past.map((p) => (
+              <li key={p.id} id={p.anchor} className="py-1">
+                {p.says}
+              </li>
+            ))}
+          </ul>
+        </details>
+      )}
       {ends.length > 0 && (
         <Foot says="Something off, capped or locked out?" note="Write it down before you walk away from it.">
           <Fitting href="#new" size="act" note="what, how many, due before what">
@@ -68,6 +65,7 @@ export default function LooseEnds({ loaderData, actionData }: Route.ComponentPro
           </Fitting>
         </Foot>
       )}
-    </>
+      <MakeLooseEnd key={ends.length + past.length} view={view} commandId={`${formId}-make`} reply={actionData} />
+    </main>
   );
 }

@@ -40,7 +40,10 @@ export default function Openings({ loaderData, actionData }: Route.ComponentProp
         then="What was opened up or disturbed. Every proof of it lapses and is done again once it is closed."
       />
       {view.open.length > 0 && (
-        <section aria-label="Open now">
+        <section aria-labelledby="open-now" className="border-b-2 border-ink">
+          <h2 id="open-now" className="sr-only">
+            Open now
+          </h2>
           <ul>
             {view.open.map((row) => (
               <OpeningItem key={`${row.id} ${row.state}`} row={row} {...item} />

@@ -26,7 +26,9 @@ export default function Install({ loaderData }: Route.ComponentProps) {
   const { registration, ship, person, role, home, links, asOf } = loaderData;
   const { pathname } = useLocation();
   const under = (href: string) =>
-    href === home ? pathname === home || pathname.startsWith(`${home}/gates`) || pathname === `${home}/sign` : pathname.startsWith(href);
+    href === home
+      ? pathname === home || pathname.startsWith(`${home}/gates`) || pathname === `${home}/openings` || pathname === `${home}/sign`
+      : pathname.startsWith(href);
   return (
     <div className="page">
       <Strip

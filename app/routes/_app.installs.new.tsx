@@ -93,6 +93,7 @@ export default function NewInstall({ loaderData: page }: Route.ComponentProps) {
             autoComplete="off"
             defaultValue={draft.registration}
             errors={identity.registration}
+            className={SHRINKS}
           />
           <TextInput
             name="name"
@@ -102,6 +103,7 @@ export default function NewInstall({ loaderData: page }: Route.ComponentProps) {
             autoComplete="off"
             defaultValue={draft.name}
             errors={identity.name}
+            className={SHRINKS}
           />
           <Zone chosen={draft.timeZone} zones={page.zones} server={page.serverZone} errors={identity.timeZone} />
         </div>
@@ -109,6 +111,9 @@ export default function NewInstall({ loaderData: page }: Route.ComponentProps) {
     </NewInstallPage>
   );
 }
+
+/** A field is as wide as what it holds, and no wider than the page. */
+const SHRINKS = "min-w-0 max-w-full";
 
 /** Preset to the server's zone, or the tablet's once it can be asked. */
 function Zone({ chosen, zones, server, errors }: { chosen: string; zones: string[]; server: string; errors?: string[] }) {
@@ -124,6 +129,7 @@ function Zone({ chosen, zones, server, errors }: { chosen: string; zones: string
       options={zones.map((name) => ({ value: name, label: name }))}
       value={zone}
       onChange={setZone}
+      className={SHRINKS}
       errors={errors}
     />
   );

@@ -10,7 +10,10 @@ export function Lapses({ gates }: { gates: LapsedGate[] }) {
   return (
     <ul>
       {gates.map((gate) => (
-        <li key={gate.id} className="grid items-center gap-x-4 gap-y-1 border-t border-line py-3 tablet:grid-cols-[216px_minmax(0,1fr)]">
+        <li
+          key={gate.id}
+          className="grid grid-cols-[150px_minmax(0,1fr)] items-center gap-x-4 gap-y-1 border-t border-line py-3 tablet:grid-cols-[180px_minmax(0,1fr)]"
+        >
           <Flip before={gate.before} after={gate.after} />
           <div className="min-w-0">
             <h3 className="text-lead leading-tight">
@@ -19,9 +22,9 @@ export function Lapses({ gates }: { gates: LapsedGate[] }) {
               </Anchor>
             </h3>
             <p className="text-note text-ink-2">{gate.words}</p>
-            {gate.items.length > 0 && <LapsedItems items={gate.items} />}
             {gate.waits && <p>waits for {gate.waits}</p>}
           </div>
+          {gate.items.length > 0 && <LapsedItems items={gate.items} />}
         </li>
       ))}
     </ul>
@@ -31,7 +34,7 @@ export function Lapses({ gates }: { gates: LapsedGate[] }) {
 function LapsedItems({ items }: { items: LapsedGate["items"] }) {
   const rest = items.slice(MOST);
   return (
-    <ul className="leading-snug">
+    <ul className="col-span-2 leading-snug">
       {items.slice(0, MOST).map((item) => (
         <li key={item.id}>
           <b>{item.key}</b> {item.words}
@@ -50,7 +53,7 @@ type Shown = { state: ValveState; part: number };
 
 function Flip({ before, after }: { before: Shown; after: Shown }) {
   return (
-    <svg viewBox="0 -46 216 66" className="block h-auto w-[180px] max-w-full tablet:w-[216px]" aria-hidden="true">
+    <svg viewBox="0 -46 216 66" className="block h-auto w-full" aria-hidden="true">
       <OnPipe at={45} {...before} />
       <path className="fill-none stroke-ink" strokeWidth="3" d="M98 0h20M110-7l8 7-8 7" />
       <OnPipe at={171} {...after} />

@@ -27,7 +27,7 @@ export function OpeningForm({ view, commandId, reply }: OpeningFormProps) {
   const busy = useNavigation().state === "submitting";
   return (
     <>
-      <div className="grid border-t-2 border-ink wide:grid-cols-[minmax(0,1fr)_520px]">
+      <div className="grid wide:grid-cols-[minmax(0,1fr)_520px]">
         <Form
           method="post"
           id="open"

@@ -1,33 +1,30 @@
+import { cx } from "#app/components/ui/cx";
 import type { TrailStep } from "#app/lib/views/findings";
 
 const HEX = "M-20 0 -10-17.3H10L20 0 10 17.3H-10Z";
-const X = [22, 150, 278];
 
 /** Raised, fixed, closed: three nuts on a pipe, filled as far as it has come; who and when stand below each. */
 export function Trail({ steps }: { steps: TrailStep[] }) {
-  const reached = steps.filter((s) => s.done).length;
   return (
-    <div className="max-w-[760px]">
-      <svg viewBox="0 0 384 44" preserveAspectRatio="xMinYMid meet" className="pipe-small block h-[44px] w-full" aria-hidden="true">
-        <path className="pipe-wall" d={`M${X[0]} 22H${X[2]}`} />
-        <path className="pipe-bore" d={`M${X[0]} 22H${X[2]}`} />
-        {reached > 1 && <path className="pipe-flow" d={`M${X[0]} 22H${X[reached - 1]}`} />}
-        {steps.map((step, i) => (
-          <g key={step.name} transform={`translate(${X[i]} 22)`} className={step.done ? "nut-done" : undefined}>
-            <path className="nut-hex" d={HEX} />
-            <circle className="nut-bolt" r="8.5" />
-          </g>
-        ))}
-      </svg>
-      <ol className="grid grid-cols-3 gap-x-3 leading-snug">
-        {steps.map((step) => (
-          <li key={step.name}>
+    <ol className="grid max-w-[760px] grid-cols-3 leading-snug">
+      {steps.map((step, i) => (
+        <li key={step.name}>
+          <div className="flex items-center" aria-hidden="true">
+            <svg width="44" height="40" viewBox="-22 -20 44 40" className={cx("flex-none", step.done && "nut-done")}>
+              <path className="nut-hex" d={HEX} />
+              <circle className="nut-bolt" r="8.5" />
+            </svg>
+            {i < steps.length - 1 && (
+              <span className={cx("h-3 flex-1 border-y-2 border-pipe", steps[i + 1]?.done ? "bg-flow" : "bg-bore")} />
+            )}
+          </div>
+          <div className="pr-3">
             <b className={step.done ? "text-primer-ink" : undefined}>{step.name}</b>
             <span className="block">{step.who}</span>
             <span className="block text-note text-ink-2">{step.when}</span>
-          </li>
-        ))}
-      </ol>
-    </div>
+          </div>
+        </li>
+      ))}
+    </ol>
   );
 }

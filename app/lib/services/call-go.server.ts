@@ -9,7 +9,7 @@ import { stale } from "#app/lib/services/parts.server";
 import { type Act, evaluateIn, perform } from "#app/lib/services/perform.server";
 
 export async function callGo(act: Act, { pin, ...input }: CallGo): Promise<Outcome<{ go: string; ends: number }>> {
-  const wrongPin = await pinRefusal(act.actor.userId, pin);
+  const wrongPin = await pinRefusal(act, pin);
   if (wrongPin) return wrongPin;
   return perform({ ...act, kind: "call-go", input }, async (d) => {
     const refusal = refusalOf(mayCallGo(d.e, { run: input.run, member: d.member.id }));

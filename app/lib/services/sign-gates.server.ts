@@ -10,7 +10,7 @@ import { done, invalid, type Outcome, refusalOf } from "#app/lib/services/outcom
 import { type Act, perform } from "#app/lib/services/perform.server";
 
 export async function signGates(act: Act, { pin, ...input }: SignGates): Promise<Outcome<{ signatures: string[] }>> {
-  const wrongPin = await pinRefusal(act.actor.userId, pin);
+  const wrongPin = await pinRefusal(act, pin);
   if (wrongPin) return wrongPin;
   return perform({ ...act, kind: "sign-gates", input }, async (d) => {
     const { as, gates } = input;

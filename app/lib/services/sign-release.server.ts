@@ -14,7 +14,7 @@ import { stale } from "#app/lib/services/parts.server";
 import { type Act, type Doing, perform } from "#app/lib/services/perform.server";
 
 export async function signRelease(act: Act, { pin, ...input }: SignRelease): Promise<Outcome<{ signature: string }>> {
-  const wrongPin = await pinRefusal(act.actor.userId, pin);
+  const wrongPin = await pinRefusal(act, pin);
   if (wrongPin) return wrongPin;
   return perform({ ...act, kind: "sign-release", input }, async (d) => {
     const refusal = forbidden(d, input);

@@ -32,7 +32,8 @@ export function goView(e: Evaluation, runId: string, me: { id: string }): GoView
   if (!run?.plan || !judged || !rung) return null;
   const { install, settings } = e.snapshot;
   const verdict = mayCallGo(e, { run: runId, member: me.id });
-  const ends = judged.go ? judged.go.ends : goEnds(e, runId);
+  // A GO that cannot be called has no end to speak of.
+  const ends = judged.go ? judged.go.ends : verdict.ok ? goEnds(e, runId) : null;
   const start = run.run.plannedStart;
   const byWindow = ends !== null && start !== null && ends === start + settings.goWindow;
   const hours = settings.goWindow / 3_600_000;
@@ -45,7 +46,7 @@ export function goView(e: Evaluation, runId: string, me: { id: string }): GoView
     also: `${lowerFirst(clearanceView(e, judged.clearance).binds).replace(/\.$/, "")}, wind ${windView(e, run).short}, ${lowerFirst(rollView(e, run, me.id).title.replace("Roll call: ", ""))}`,
     ends: ends === null ? null : dayWhen(ends, install.timeZone),
     endsBy: [
-      byWindow
+      byWindow || ends === null
         ? `GO ends by itself ${hours} h after the planned start.`
         : `GO ends by itself when the first thing that it stands on runs out${firstOut(e, judged, ends)}.`,
       "Any change that stops the run turns GO into HOLD by itself and tells the same people. Any member may call HOLD.",

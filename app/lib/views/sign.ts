@@ -101,6 +101,8 @@ function coverView(e: Evaluation, cover: Cover, units: UnitSystem): SheetView["i
 function meansOf(e: Evaluation, gateId: string, me: string, last: boolean): string[] {
   const result = e.result.gates[gateId];
   const gate = e.facts.gates.get(gateId);
+  // A sheet that cannot be signed must not say that it stands.
+  if (!result?.ready) return [];
   const until = (result?.covers ?? []).flatMap((c) => e.result.items[c.item]?.until ?? []);
   const systems = [...new Set((e.facts.itemsOf.get(gateId) ?? []).flatMap((i) => i.systems))].length;
   const next = gate?.policy[(result?.holding.length ?? 0) + 1] ?? [];

@@ -1,0 +1,7 @@
+/** `npm run bench`: what the product costs, as ratios within one run. The figures are of this machine at this moment; the ratios travel. */
+import { benchEvaluator } from "./evaluator";
+
+const rows = await benchEvaluator(25);
+const line = (cells: string[]) => cells.map((cell, n) => (n ? cell.padStart(12) : cell.padEnd(44))).join("");
+console.log(line(["gate evaluation, median", "items", "gates", "ms", "µs an item"]));
+for (const r of rows) console.log(line([r.what, String(r.items), String(r.gates), r.ms.toFixed(2), r.perItem.toFixed(2)]));
