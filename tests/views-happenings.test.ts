@@ -1,6 +1,15 @@
+import { parseWithZod } from "@conform-to/zod/v4";
 import { beforeAll, describe, expect, it, vi } from "vitest";
 import { type Evaluation, evaluate } from "#app/lib/gates/evaluate";
-import { openForm, raiseFindingForm } from "#app/lib/schemas/happening-forms";
+import {
+  acceptLooseEndForm,
+  fixFindingForm,
+  gradeFindingForm,
+  makeLooseEndForm,
+  markMistakeForm,
+  openForm,
+  raiseFindingForm,
+} from "#app/lib/schemas/happening-forms";
 import { makeLooseEnd } from "#app/lib/services/make-loose-end.server";
 import { openSystem } from "#app/lib/services/open-system.server";
 import type { SystemKey } from "#app/lib/template/types";
@@ -270,6 +279,35 @@ describe("the findings", () => {
     const { board } = called();
     expect(findingsView(judged(board), crew, {}).goWarning).toContain("3 people get a mail");
     expect(findingsView(judged(gates()), crew, {}).goWarning).toBeNull();
+  });
+
+  it("and every other form say what to write where nothing is", () => {
+    const forms = {
+      open: openForm("Europe/Berlin", 0),
+      mistake: markMistakeForm,
+      make: makeLooseEndForm,
+      accept: acceptLooseEndForm,
+      raise: raiseFindingForm("si"),
+      grade: gradeFindingForm("si"),
+      fix: fixFindingForm,
+    };
+    for (const [name, schema] of Object.entries(forms)) {
+      const empty = new FormData();
+      for (const field of ["reason", "words", "what", "why", "count", "due", "system", "severity", "cap", "happened", "rung"])
+        empty.append(field, "");
+      for (const [field, value] of [
+        ["commandId", "c".repeat(22)],
+        ["opening", "o"],
+        ["looseEnd", "l"],
+        ["finding", "f"],
+      ] as const)
+        empty.append(field, value);
+      const submission = parseWithZod(empty, { schema: schema as typeof fixFindingForm });
+      const errors = Object.entries(submission.reply().error ?? {});
+      expect(errors.length, name).toBeGreaterThan(0);
+      for (const [field, said] of errors)
+        expect(said?.join(), `${name} ${field}`).toMatch(/^(Say|Choose|Count|Type|Enter|Nothing is entered)/);
+    }
   });
 
   it("take a cap on a limiting one alone, with the fault at its field", () => {

@@ -27,8 +27,7 @@ export function FindingItem({ row, commandId, reply }: FindingItemProps) {
         <div className="flex flex-wrap items-start justify-between gap-x-6 gap-y-2">
           <div className="min-w-0 flex-1 basis-[320px]">
             <h3 className="text-lead leading-tight">
-              <span className="fig mr-2">{row.tag}</span>
-              {row.words}
+              <span className="fig mr-1">{row.tag}</span> {row.words}
             </h3>
             <p>
               {row.system}. <b>{row.effect}</b>

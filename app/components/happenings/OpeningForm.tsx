@@ -7,6 +7,7 @@ import { TextInput } from "#app/components/forms/TextInput";
 import { LapsePanel } from "#app/components/happenings/LapsePanel";
 import { Fitting } from "#app/components/ui/Fitting";
 import { Foot } from "#app/components/ui/Foot";
+import { count } from "#app/lib/gates/who";
 import { type FormReply, fieldsOf } from "#app/lib/schemas/form-reply";
 import { type OpeningsView, type OpenShown, openWords } from "#app/lib/views/openings";
 
@@ -147,14 +148,18 @@ function OpeningFoot({ view, shown, busy }: { view: OpeningsView; shown: OpenSho
       </Foot>
     );
   const { lapses, systems } = shown;
-  const says = [
-    systems.length === 1 ? "1 system" : `${systems.length} systems`,
-    lapses.gates.length === 1 ? "1 gate" : `${lapses.gates.length} gates`,
-    lapses.hold ? "HOLD" : null,
-  ];
+  const says = `${count(systems.length, "system")}, ${lapses.gates.length ? count(lapses.gates.length, "gate") : "no gate changes"}`;
   return (
     <Foot
-      says={says.filter(Boolean).join(", ")}
+      says={
+        lapses.hold ? (
+          <>
+            <strong className="text-stop-ink">HOLD for run {lapses.hold.run}</strong>, {says}
+          </>
+        ) : (
+          says
+        )
+      }
       note={`${view.person}, ${view.now}. It cannot be taken back; an inspector can keep a proof that is still true.`}
     >
       <Fitting form="open" size="act" name="intent" value="open" note="the record says so from now" reason={reason} busy={busy}>

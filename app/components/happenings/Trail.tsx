@@ -9,8 +9,8 @@ export function Trail({ steps }: { steps: TrailStep[] }) {
     <ol className="grid max-w-[760px] grid-cols-3 leading-snug">
       {steps.map((step, i) => (
         <li key={step.name}>
-          <div className="flex items-center" aria-hidden="true">
-            <svg width="44" height="40" viewBox="-22 -20 44 40" className={cx("flex-none", step.done && "nut-done")}>
+          <div className="flex items-center">
+            <svg width="44" height="40" viewBox="-22 -20 44 40" className={cx("flex-none", step.done && "nut-done")} aria-hidden="true">
               <path className="nut-hex" d={HEX} />
               <circle className="nut-bolt" r="8.5" />
             </svg>

@@ -94,13 +94,16 @@ function passThrough(targets: string[], present: Map<string, Gate>, every: Map<s
   return [...found];
 }
 
+const compare = (a: number, b: number): number => (a < b ? -1 : a > b ? 1 : 0);
+const joined = (m: Member): Instant => m.roles.reduce((first, r) => Math.min(first, r.from), Number.POSITIVE_INFINITY);
+
 /** Records in the order in which they were made, so that the order in which they arrive cannot show in any answer. */
 function inSequence(s: Snapshot): Snapshot {
   const bySeq = <T extends { seq: number }>(rows: T[]) => [...rows].sort((a, b) => a.seq - b.seq);
   const byId = <T extends { id: string }>(rows: T[]) => [...rows].sort((a, b) => (a.id < b.id ? -1 : 1));
   return {
     ...s,
-    members: byId(s.members),
+    members: [...s.members].sort((a, b) => compare(joined(a), joined(b)) || (a.id < b.id ? -1 : 1)),
     extinguishers: byId(s.extinguishers),
     runs: byId(s.runs),
     findings: bySeq(s.findings),

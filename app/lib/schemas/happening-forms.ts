@@ -1,14 +1,14 @@
 /** The forms of openings, loose ends and findings as a page sends them: text in, the services' input out. Speeds are typed in rpm. Pure. */
 import { z } from "zod";
 import { when } from "#app/lib/gates/when";
-import { commandIdSchema, idSchema, noteSchema, reasonSchema, systemSchema } from "#app/lib/schemas/act";
+import { commandIdSchema, idSchema, noteSchema, systemSchema } from "#app/lib/schemas/act";
 import { acceptLooseEndSchema, makeLooseEndSchema } from "#app/lib/schemas/happenings";
 import { instantOfLocal } from "#app/lib/schemas/local-time";
 import { parseEntry, type UnitSystem } from "#app/lib/units/display";
 
 const commandId = commandIdSchema;
-/** Words that say why; `message` where they are missing. */
-const words = (message: string) => z.string().default("").pipe(reasonSchema.min(3, message));
+/** Words that say why; `message` where they are missing: an empty field comes as none. */
+const words = (message: string) => z.string(message).trim().min(3, message).max(1000, "Use at most 1,000 characters.");
 
 // ---------------------------------------------------------------- openings
 
@@ -60,7 +60,7 @@ const wholeNumber = z
 
 export const makeLooseEndForm = z.object({
   commandId,
-  what: z.string().default("").pipe(makeLooseEndSchema.shape.what),
+  what: z.string("Say what it is.").pipe(makeLooseEndSchema.shape.what),
   count: wholeNumber,
   system: systemSchema,
   why: words("Say why it is off, in a few words."),
