@@ -53,8 +53,14 @@ export default function CallGo({ loaderData, actionData }: Route.ComponentProps)
       title="Call GO"
       says={
         <>
-          I, <b>{view.me}</b>, lead, call run {view.label} for <b>{view.when}</b>, not above{" "}
-          <Figure value={view.figure} unit="rpm" className="font-bold" />, {view.also}.{" "}
+          {view.why === null ? (
+            <>
+              I, <b>{view.me}</b>, lead, call run {view.label}
+            </>
+          ) : (
+            <>Run {view.label} cannot be called now. It is planned</>
+          )}{" "}
+          for <b>{view.when}</b>, not above <Figure value={view.figure} unit="rpm" className="font-bold" />, {view.also}.{" "}
           {view.ends && (
             <>
               GO ends <b>{view.ends}</b>.
@@ -65,7 +71,10 @@ export default function CallGo({ loaderData, actionData }: Route.ComponentProps)
       stub={
         <Form method="post" className="flex h-full flex-col justify-between gap-6">
           <HiddenIds commandId={commandId} version={view.version} />
-          <PinInput key={commandId} name="pin" label="Lead’s PIN" keypad errors={error ? [String(error)] : undefined} />
+          {/* Where GO cannot be called there is nothing to type: keys would say otherwise. */}
+          {view.why === null && (
+            <PinInput key={commandId} name="pin" label="Lead’s PIN" keypad errors={error ? [String(error)] : undefined} />
+          )}
           <Fitting size="act" note={people} reason={view.why ?? undefined} busy={busy} centred>
             Call GO
           </Fitting>
