@@ -5,9 +5,8 @@ import { createHeaders } from "@remix-run/node-fetch-server";
 
 const megabyte = 1024 * 1024;
 
-/** Most bytes of a request's body: an engine log, an upload of photos, or a form. */
-export function bodyLimit(path, type) {
-  if (/\/logs?(\.data)?$/.test(path)) return 120 * megabyte;
+/** Most bytes of a request's body: an upload of photos, or a form. */
+export function bodyLimit(type) {
   return type.startsWith("multipart/form-data") ? 20 * megabyte : megabyte;
 }
 
@@ -32,7 +31,7 @@ export class BodyTooLarge extends Error {
 export function readRequest(req, res, origin) {
   const url = new URL(`${origin ?? `http://${req.headers.host}`}${req.url}`);
   decodeURI(url.pathname);
-  const limit = bodyLimit(url.pathname, req.headers["content-type"] ?? "");
+  const limit = bodyLimit(req.headers["content-type"] ?? "");
   if (Number(req.headers["content-length"] ?? 0) > limit) throw new BodyTooLarge(limit);
 
   const gone = new AbortController();

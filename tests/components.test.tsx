@@ -226,6 +226,27 @@ describe("parts", () => {
     expect(screen.getByRole("link", { name: "Crib" })).not.toHaveAttribute("aria-current");
     expect(screen.getByRole("img", { name: "no network" })).toBeInTheDocument();
   });
+
+  it("the strip brings the page that is shown into sight, and moves nothing else", () => {
+    const box = (left: number, width: number) => ({ left, width }) as DOMRect;
+    vi.spyOn(HTMLElement.prototype, "getBoundingClientRect").mockImplementation(function (this: HTMLElement) {
+      return this.tagName === "NAV" ? box(0, 390) : this.hasAttribute("aria-current") ? box(700, 80) : box(0, 0);
+    });
+    const into = vi.spyOn(window, "scrollTo").mockImplementation(() => {});
+    render(
+      <Strip
+        homeHref="/"
+        navLabel="Install"
+        links={[
+          { label: "Board", href: "/b" },
+          { label: "Crib", href: "/c", current: true },
+        ]}
+      />,
+    );
+    expect(screen.getByRole("navigation").scrollLeft).toBe(740 - 195);
+    expect(into).not.toHaveBeenCalled();
+    vi.restoreAllMocks();
+  });
 });
 
 describe("forms", () => {

@@ -6,7 +6,7 @@ import { wrap } from "#app/lib/mail/compose/text";
 import { dayAndTime, duration, oneLine, speedRange, timeInBoth } from "#app/lib/mail/compose/words";
 import { runMailModel, STOPS } from "./support/run-mail-model";
 
-const KINDS: RunMailKind[] = ["go", "no-go", "hold"];
+const KINDS: RunMailKind[] = ["go", "no-go", "hold", "scrub"];
 const reader = (member: string, name: string): RunMailReader => ({ member, name, units: "si" });
 const joss = reader("joss", "Joss Amaral");
 const flat = (text: string) => text.replace(/\s+/g, " ");
@@ -178,6 +178,23 @@ describe("no-go and HOLD", () => {
     expect(flat(text)).toContain("Ana Reyl called HOLD, Sat 5 Dec 09:21 CET.");
     expect(flat(text)).toContain("In their words: Dog on the apron");
     expect(subject).toContain("Dog on the apron");
+  });
+});
+
+describe("SCRUB", () => {
+  const act = { by: "Ana Reyl", at: Date.UTC(2026, 11, 5, 8, 21), reason: "Rain all day", auto: false };
+  const { subject, text, html } = composeRunMail("scrub", runMailModel({ goEnds: null, act }), joss);
+
+  it("has the reason in its subject", () => expect(subject).toBe("SCRUB: run 1 of N0417B, Sat 5 Dec 09:30 CET, Rain all day"));
+  it.each([
+    ["that there is no run", "There is no run on Sat 5 Dec 09:30 CET."],
+    ["that no GO stands", "Nobody starts the engine; no GO of it stands."],
+    ["who gave it up, and when", "Ana Reyl, Sat 5 Dec 09:21 CET"],
+    ["why", "Rain all day"],
+    ["what comes next", "another run of it is planned and called anew"],
+  ])("says %s in text and HTML alike", (_, words) => {
+    expect(flat(text)).toContain(words);
+    expect(seen(html)).toContain(words);
   });
 });
 

@@ -3,6 +3,7 @@ import { evaluate } from "#app/lib/gates/evaluate";
 import { boardAnswerSchema } from "#app/lib/schemas/board-api";
 import { boardView } from "#app/lib/views/board";
 import { boardAnswer, tagOf } from "#app/lib/views/board-answer";
+import { lapsedAt } from "#app/lib/views/lapsed-at";
 import { severalView } from "#app/lib/views/sign-several";
 import { type Board, HOUR, makeBoard, signAll } from "./support/snapshots";
 
@@ -150,5 +151,53 @@ describe("the board for a program", () => {
     expect(tagOf(boardAnswer(evaluate(board.s, board.now + 60_000), head))).toBe(tag);
     board.proof("m1");
     expect(tagOf(boardAnswer(judged(board), head))).not.toBe(tag);
+  });
+});
+
+describe("since when a gate is lapsed", () => {
+  const line = (board: Board) => boardView(judged(board), builder).line.gates.find((g) => g.id === "FP");
+  const at = (board: Board) => {
+    const e = judged(board);
+    const gate = e.facts.gates.get("FP");
+    return gate ? lapsedAt(e, gate) : undefined;
+  };
+
+  it("is the opening's instant, and the earliest of several causes", () => {
+    const board = signAll(gates()).wait();
+    const opened = board.wait().open(["fueleng"]).opened;
+    expect(line(board)?.state).toBe("lapsed");
+    expect(at(board)).toBe(opened);
+    expect(line(board)?.note).toBe(`lapsed ${new Date(opened).toISOString().slice(11, 16)}`);
+    board.wait();
+    const f2 = board.s.proofs.find((p) => p.item === "f2");
+    if (f2) f2.withdrawn = board.record("withdrawal");
+    expect(at(board)).toBe(opened);
+    board.now += 48 * HOUR;
+    expect(line(board)?.note).toMatch(/^lapsed \d{1,2} [A-Z][a-z]{2}$/);
+  });
+  it("is the withdrawal's, the failing proof's, or the end of its validity", () => {
+    const board = signAll(gates()).wait();
+    const f2 = board.s.proofs.find((p) => p.item === "f2");
+    if (!f2) throw new Error("No proof");
+    const withdrawn = board.record("withdrawal");
+    f2.withdrawn = withdrawn;
+    expect(at(board)).toBe(withdrawn.recorded);
+    const failed = board.wait().proof("f1", { state: "failed" });
+    expect(at(board)).toBe(withdrawn.recorded);
+    f2.withdrawn = null;
+    expect(at(board)).toBe(failed.counts);
+    const aged = signAll(gates());
+    aged.find("f1").validity = { hours: 2, afterRunHours: null };
+    const counts = aged.s.proofs.find((p) => p.item === "f1")?.counts ?? 0;
+    aged.now = counts + 5 * HOUR;
+    expect(line(aged)?.state).toBe("lapsed");
+    expect(at(aged)).toBe(counts + 2 * HOUR);
+  });
+  it("is not told where a cause has no instant of its own", () => {
+    const board = signAll(gates()).wait();
+    board.find("f2").revision = 2;
+    board.wait().open(["fueleng"]);
+    expect(at(board)).toBeNull();
+    expect(line(board)?.note).toBe("lapsed");
   });
 });

@@ -5,7 +5,6 @@ import type { Part } from "#app/lib/template/types";
 import { readEntry } from "#app/lib/views/evidence-form";
 import { gateView } from "#app/lib/views/gate";
 import type { Reader } from "#app/lib/views/gate-item";
-import { dayAt, instantAt } from "#app/lib/views/local-time";
 import { sheetView } from "#app/lib/views/sign";
 import { START, tick } from "./support/parts";
 import { type Board, makeBoard, measure, torque } from "./support/snapshots";
@@ -218,16 +217,5 @@ describe("the sign sheet", () => {
     });
     expect(sheet?.sentence).toContain("2 items done, by Member bo and Member di");
     expect(sheetView(e, "MF", inspector, null)?.refusal).toMatchObject({ title: "Your own work", who: "For Member ed." });
-  });
-});
-
-describe("local times", () => {
-  // Europe/Prague is UTC+1 in winter and UTC+2 in summer (IANA time zone database)
-  it("reads the wall clock at the install, across the change of summer time", () => {
-    expect(instantAt("2026-12-03T14:10", "Europe/Prague")).toBe(Date.UTC(2026, 11, 3, 13, 10));
-    expect(instantAt("2026-07-03T14:10:30", "Europe/Prague")).toBe(Date.UTC(2026, 6, 3, 12, 10, 30));
-    expect(instantAt("2026-13-03T14:10", "Europe/Prague")).toBeNull();
-    expect(instantAt("yesterday", "UTC")).toBeNull();
-    expect(dayAt(Date.UTC(2026, 11, 3, 23, 30), "Europe/Prague")).toBe("2026-12-04");
   });
 });

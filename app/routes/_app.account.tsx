@@ -29,11 +29,11 @@ export default function Account({ loaderData }: Route.ComponentProps) {
   const { name, email, units, theme } = loaderData;
   return (
     <div className="page">
-      <Strip homeHref="/hangar" navLabel="Bladecount" links={links} person={name} />
+      <Strip homeHref="/hangar" navLabel="Everywhere" links={links} person={name} />
       <main id="main">
         <TitlePipe title={name} state={email} />
         <div className="flex max-w-[760px] flex-col gap-8 p-6">
-          <Form method="post" className="flex flex-col gap-4">
+          <Form method="post" className="flex flex-col items-start gap-4">
             <ChoiceGroup
               name="units"
               label="Units"
@@ -43,7 +43,7 @@ export default function Account({ loaderData }: Route.ComponentProps) {
             />
             <Fitting variant="outline">Use these units</Fitting>
           </Form>
-          <Form method="post" action="/theme" className="flex flex-col gap-4">
+          <Form method="post" action="/theme" className="flex flex-col items-start gap-4">
             <input type="hidden" name="to" value="/account" />
             <ChoiceGroup
               name="theme"
@@ -65,6 +65,7 @@ export default function Account({ loaderData }: Route.ComponentProps) {
 
 const links = [
   { label: "Hangar", href: "/hangar" },
+  { label: "New install", href: "/installs/new" },
   { label: "Account", href: "/account", current: true },
 ];
 const UNITS = [
@@ -74,5 +75,5 @@ const UNITS = [
 const THEMES = [
   { value: "apron", label: "Apron, light" },
   { value: "hangar", label: "Hangar, dark" },
-  { value: "auto", label: "As the tablet says" },
+  { value: "auto", label: "As the device says" },
 ];

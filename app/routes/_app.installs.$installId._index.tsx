@@ -6,6 +6,7 @@ import { StopList } from "#app/components/board/StopList";
 import { useBoardWatch } from "#app/components/board/useBoardWatch";
 import { Line } from "#app/components/line/Line";
 import { ClearanceBars } from "#app/components/ui/ClearanceBars";
+import { Figure } from "#app/components/ui/Figure";
 import { installContext } from "#app/lib/http/install.server";
 import { boardView } from "#app/lib/views/board";
 import { boardAnswer, tagOf } from "#app/lib/views/board-answer";
@@ -38,7 +39,11 @@ export default function Board({ loaderData }: Route.ComponentProps) {
       <section className="board-top" aria-label="Where it stands">
         <Answer {...answer} />
         <div className="board-stops">
-          <StopList stops={stops} most={short ? 1 : 2} nothing={answer.note ?? "Nothing stops it."} />
+          <StopList
+            stops={stops}
+            most={short ? 1 : 2}
+            nothing={answer.tone === "running" ? "The run card is live on the run’s page." : "Nothing stops it."}
+          />
         </div>
       </section>
       {short ? (
@@ -56,7 +61,7 @@ export default function Board({ loaderData }: Route.ComponentProps) {
           {clearance && (
             <section className="board-clearance" aria-labelledby="clearance-title">
               <h2 id="clearance-title">
-                Clearance: <b className="fig">{clearance.rpm}</b>
+                Clearance: <Figure value={clearance.rpm} className="font-bold" />
               </h2>
               <p>
                 Crankshaft speed. The least of these binds: {clearance.binds}. The maker’s manual, the local rules and licensed judgement

@@ -26,7 +26,7 @@ export async function loader({ context }: Route.LoaderArgs) {
 export async function action({ context, request }: Route.ActionArgs) {
   const install = context.get(installContext);
   const act = { installId: install.installId, actor: { userId: install.me.id } };
-  const { form, refused } = await readPhotoForm(request, act, (sent, n) => `${sent.get("commandId")}-f${n}`);
+  const { form, refused } = await readPhotoForm(request, act, ["raise"]);
   const acted = await actOnFindings(install, form, refused[0]?.message ?? null);
   if (!acted) throw data("This page does not know that form. Load it again; nothing was changed.", { status: 400 });
   if (!acted.done) return data(acted.reply, { status: acted.status });

@@ -1,4 +1,3 @@
-import { useSyncExternalStore } from "react";
 import { data, redirect, useNavigation } from "react-router";
 import { GateHead } from "#app/components/gate/GateHead";
 import { ItemRow, type RowReply } from "#app/components/gate/ItemRow";
@@ -7,6 +6,7 @@ import { CautionSlab } from "#app/components/ui/CautionSlab";
 import { Fitting } from "#app/components/ui/Fitting";
 import { Foot } from "#app/components/ui/Foot";
 import { Notice } from "#app/components/ui/Notice";
+import { useLive } from "#app/components/ui/useLive";
 import { db } from "#app/db/client.server";
 import { signatureHashes } from "#app/db/queries/signature-hashes.server";
 import { actOnGate, type GateReply } from "#app/lib/http/gate-acts.server";
@@ -42,21 +42,15 @@ export async function loader({ context, params }: Route.LoaderArgs) {
 export async function action({ request, context, params }: Route.ActionArgs) {
   const install = context.get(installContext);
   const act = { installId: install.installId, actor: { userId: install.me.id } };
-  const { form, refused } = await readPhotoForm(request, act, (sent, n) => `${sent.get("commandId")}-f${n}`);
+  const { form, refused } = await readPhotoForm(request, act, ["prove", "preview", "failed"]);
   const acted = await actOnGate(install, form, refused);
   if (!acted.done) return data(acted.reply, { status: acted.status });
   return redirect(gateOf(install.installId, params.gateId, acted.item), { status: 303 });
 }
 
-const never = () => () => {};
-
 export default function Gate({ loaderData, actionData }: Route.ComponentProps) {
   const { view, hashes, units, tools, people, zone, setUpHref, formId } = loaderData;
-  const live = useSyncExternalStore(
-    never,
-    () => true,
-    () => false,
-  );
+  const live = useLive();
   const sending = useNavigation().formData;
   const commandId = (item: string, act: string) => `${formId}-${act}-${item}`;
   const shared = { units, tools, people, zone, setUpHref, live, commandId };

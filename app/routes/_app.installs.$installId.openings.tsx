@@ -1,6 +1,7 @@
 import { data, redirect } from "react-router";
 import { OpeningForm } from "#app/components/happenings/OpeningForm";
 import { OpeningItem } from "#app/components/happenings/OpeningItem";
+import { Fitting } from "#app/components/ui/Fitting";
 import { TitlePipe } from "#app/components/ui/TitlePipe";
 import { db } from "#app/db/client.server";
 import { closingsOf } from "#app/db/queries/happening-details.server";
@@ -27,7 +28,7 @@ export async function action({ context, request }: Route.ActionArgs) {
   return redirect(`${boardOf(install.installId)}/openings#${acted.anchor}`, 303);
 }
 
-export default function Openings({ loaderData, actionData }: Route.ComponentProps) {
+export default function Openings({ loaderData, actionData, params }: Route.ComponentProps) {
   const { view, formId } = loaderData;
   const item = { commandId: formId, reply: actionData };
   const count = view.open.length + view.past.length;
@@ -57,6 +58,10 @@ export default function Openings({ loaderData, actionData }: Route.ComponentProp
           <h2 id="past" className="px-4 pt-5 pb-3 text-h3 tablet:px-6">
             Closed
           </h2>
+          <div className="flex flex-wrap items-center gap-x-6 gap-y-2 px-4 pb-4 tablet:px-6">
+            <p>What has to be proved again stands on the board.</p>
+            <Fitting href={boardOf(params.installId)}>Board</Fitting>
+          </div>
           <ul className="border-t border-line">
             {view.past.map((row) => (
               <OpeningItem key={`${row.id} ${row.state}`} row={row} {...item} />

@@ -4,16 +4,16 @@ import { PlanForm } from "#app/components/run/PlanForm";
 import { RunTitle } from "#app/components/run/RunTitle";
 import { db } from "#app/db/client.server";
 import { placeOfRun } from "#app/db/queries/run-place.server";
-import { mayPlan } from "#app/lib/gates/run-verdicts";
+import { localOf } from "#app/lib/gates/local-time";
+import { mayPlan, planRules } from "#app/lib/gates/plan-verdicts";
 import { readForm } from "#app/lib/http/form.server";
 import { installContext } from "#app/lib/http/install.server";
 import { newId } from "#app/lib/ids";
-import { localOf } from "#app/lib/schemas/local-time";
 import { planForm } from "#app/lib/schemas/run-forms";
 import { planRun } from "#app/lib/services/plan-run.server";
 import { lineOf } from "#app/lib/views/board-line";
 import { runOf } from "#app/lib/views/places";
-import { planRules, planView } from "#app/lib/views/plan";
+import { planView } from "#app/lib/views/plan";
 import { gatesShare } from "#app/lib/views/run-words";
 import type { Route } from "./+types/_app.installs.$installId.runs.$runId_.plan";
 
@@ -49,7 +49,7 @@ export async function action({ context, request, params }: Route.ActionArgs) {
   const run = e.facts.runs.get(params.runId);
   const rung = e.facts.rungs.find((r) => r.key === run?.run.rung);
   if (!run || !rung) throw new Response("Not found", { status: 404 });
-  const submission = parseWithZod(await readForm(request), { schema: planForm(planRules(e, rung)) });
+  const submission = parseWithZod(await readForm(request), { schema: planForm(planRules(e, rung), e.snapshot.install.timeZone) });
   if (submission.status !== "success") return data({ result: submission.reply() }, { status: 400 });
   const { commandId, ...plan } = submission.value;
   const outcome = await planRun({ installId, actor: { userId: me.id }, commandId }, { run: run.run.id, rung: rung.key, ...plan });

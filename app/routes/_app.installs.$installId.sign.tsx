@@ -1,8 +1,7 @@
-import { useSyncExternalStore } from "react";
-import { Form, Link, redirect, useNavigation } from "react-router";
+import { Form, redirect } from "react-router";
 import { HiddenIds } from "#app/components/forms/HiddenIds";
-import { PinStub } from "#app/components/gate/PinStub";
-import { SignTag } from "#app/components/gate/SignTag";
+import { doneBy, SignedItems } from "#app/components/gate/SignedItems";
+import { SignPage } from "#app/components/gate/SignPage";
 import { Choice } from "#app/components/ui/Choice";
 import { Fitting } from "#app/components/ui/Fitting";
 import { Notice } from "#app/components/ui/Notice";
@@ -13,7 +12,6 @@ import { readSheet } from "#app/lib/http/sign-acts.server";
 import { newId } from "#app/lib/ids";
 import { signGates } from "#app/lib/services/sign-gates.server";
 import { boardOf } from "#app/lib/views/places";
-import { aboutPin } from "#app/lib/views/sign";
 import { severalView } from "#app/lib/views/sign-several";
 import type { Route } from "./+types/_app.installs.$installId.sign";
 
@@ -40,90 +38,47 @@ export async function action({ request, context }: Route.ActionArgs) {
 
 export const shouldRevalidate = () => true;
 
-const never = () => () => {};
-
 export default function SignSeveral({ loaderData, actionData }: Route.ComponentProps) {
   const { several, kicker, person, home, commandId } = loaderData;
   const { sheets, roles, as, act, meaning } = several;
-  const busy = useNavigation().state === "submitting";
-  const live = useSyncExternalStore(
-    never,
-    () => true,
-    () => false,
-  );
-  const refusal = actionData?.refusal;
-  const pinErrors = refusal && aboutPin(refusal.code) ? [refusal.message] : undefined;
-  const stub = sheets.length ? (
-    <PinStub
-      key={refusal?.message}
-      form="sign"
-      label={act}
-      note="each gate gets a signature of its own"
-      errors={pinErrors}
-      busy={busy}
-      live={live}
-    />
-  ) : (
+  const instead = sheets.length === 0 && (
     <Notice kind="plain" title="Nothing is ready for you">
       <p>Gates that you may sign as {as} appear here once all their items stand. The board says what is left.</p>
       <Fitting href={home}>Board</Fitting>
     </Notice>
   );
   return (
-    <main id="main" className="sign-page">
-      <SignTag kicker={kicker} title={`${act}, on one sheet`} stub={stub}>
-        {refusal && !pinErrors && (
-          <Notice kind="refused" title={refusal.blockers[0]?.title ?? "Nothing was signed"} role="alert">
-            <p>{refusal.message}</p>
-          </Notice>
-        )}
-        {roles.length > 1 && (
-          <nav className="sign-roles" aria-label="In which role">
-            {roles.map(({ role, gates }) => (
-              <Link key={role} to={`?as=${role}`} replace aria-current={role === as ? "true" : undefined}>
-                as {role}, {gates}
-              </Link>
-            ))}
-          </nav>
-        )}
-        {sheets.length > 0 && (
-          <blockquote>
-            I, <b>{person}</b>, sign each gate that is marked here. {meaning}
-          </blockquote>
-        )}
-        <Form method="post" id="sign" action={`?as=${as}`} className="sign-gates">
-          <HiddenIds commandId={commandId} also={{ as }} />
-          {sheets.map((sheet) => (
-            <section key={sheet.id}>
-              <input type="hidden" name="sheet" value={JSON.stringify({ gate: sheet.id, covers: sheet.covers })} />
-              <Choice kind="checkbox" name="gate" value={sheet.id} defaultChecked note={sheet.means[1]}>
-                {sheet.name}
-              </Choice>
-              <details className="sign-items">
-                <summary>
-                  What is signed in {sheet.name}: {sheet.items.length} items
-                </summary>
-                <p>{sheet.sentence}</p>
-                <dl>
-                  {sheet.items.map((item) => (
-                    <div key={item.key}>
-                      <dt>
-                        <b>{item.key}</b> {item.words}
-                      </dt>
-                      <dd>
-                        {item.said} <span>{item.who}</span>
-                      </dd>
-                    </div>
-                  ))}
-                </dl>
-              </details>
-            </section>
-          ))}
-        </Form>
-        <Fitting href={home} className="sign-back">
-          Back, not signed
-        </Fitting>
-      </SignTag>
-    </main>
+    <SignPage
+      kicker={kicker}
+      title={`${act}, on one sheet`}
+      act={act}
+      note="each gate gets a signature of its own"
+      instead={instead || null}
+      refusal={actionData?.refusal}
+      refusedTitle="Nothing was signed"
+      roles={roles.map(({ role, gates }) => ({ role, label: `as ${role}, ${gates}` }))}
+      as={as}
+      back={home}
+    >
+      {sheets.length > 0 && (
+        <blockquote>
+          I, <b>{person}</b>, sign each gate that is marked here. {meaning}
+        </blockquote>
+      )}
+      <Form method="post" id="sign" action={`?as=${as}`} className="sign-gates">
+        <HiddenIds commandId={commandId} also={{ as }} />
+        {sheets.map((sheet) => (
+          <section key={sheet.id}>
+            <input type="hidden" name="sheet" value={JSON.stringify({ gate: sheet.id, covers: sheet.covers })} />
+            <Choice kind="checkbox" name="gate" value={sheet.id} defaultChecked note={sheet.means[1]}>
+              {sheet.name}
+            </Choice>
+            <SignedItems title={`What is signed in ${sheet.name}: ${sheet.items.length} items`} items={doneBy(sheet.items)}>
+              <p>{sheet.sentence}</p>
+            </SignedItems>
+          </section>
+        ))}
+      </Form>
+    </SignPage>
   );
 }

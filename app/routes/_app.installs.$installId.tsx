@@ -28,7 +28,7 @@ export default function Install({ loaderData }: Route.ComponentProps) {
   const under = (href: string) =>
     href === home
       ? pathname === home || pathname.startsWith(`${home}/gates`) || pathname === `${home}/openings` || pathname === `${home}/sign`
-      : pathname.startsWith(href);
+      : pathname.startsWith(href) || (href === `${home}/build-up` && pathname.startsWith(`${home}/runs`));
   return (
     <div className="page">
       <Strip

@@ -9,7 +9,7 @@ import { WhatItMakes } from "#app/components/new-install/WhatItMakes";
 import { Fitting } from "#app/components/ui/Fitting";
 import { Foot } from "#app/components/ui/Foot";
 import { actorOf } from "#app/lib/auth/actor.server";
-import { LONGEST_REGISTRATION } from "#app/lib/schemas/new-install";
+import { LONGEST_REGISTRATION } from "#app/lib/schemas/set-up";
 import {
   type Errors,
   firstQuestions,

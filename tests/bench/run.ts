@@ -5,3 +5,10 @@ const rows = await benchEvaluator(25);
 const line = (cells: string[]) => cells.map((cell, n) => (n ? cell.padStart(12) : cell.padEnd(44))).join("");
 console.log(line(["gate evaluation, median", "items", "gates", "ms", "µs an item"]));
 for (const r of rows) console.log(line([r.what, String(r.items), String(r.gates), r.ms.toFixed(2), r.perItem.toFixed(2)]));
+const ratio = (items: number) => {
+  const [own, engine] = rows.filter((r) => r.items === items);
+  return own && engine ? (engine.ms / own.ms).toFixed(0) : "?";
+};
+console.log(
+  `\ntimes faster than the rules engine: ${[...new Set(rows.map((r) => r.items))].map((n) => `${ratio(n)} (${n} items)`).join(", ")}`,
+);

@@ -12,8 +12,8 @@ import { judgePassword } from "#app/lib/auth/password.server";
 import { judgePin } from "#app/lib/auth/pin.server";
 import { now } from "#app/lib/clock";
 import type { Evaluation } from "#app/lib/gates/evaluate";
+import { localOf } from "#app/lib/gates/local-time";
 import { verify } from "#app/lib/record/chain";
-import { localOf } from "#app/lib/schemas/local-time";
 import { freshDatabase } from "../support/db";
 
 let file: Database;

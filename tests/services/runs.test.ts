@@ -1,6 +1,6 @@
 import { asc, eq } from "drizzle-orm";
 import { afterAll, beforeAll, beforeEach, describe, expect, it, vi } from "vitest";
-import { db } from "#app/db/client.server";
+import { db, write } from "#app/db/client.server";
 import { mailLog } from "#app/db/queries/mail-log.server";
 import { recordLines } from "#app/db/queries/record-lines.server";
 import { outbox } from "#app/db/schema/outbox";
@@ -20,6 +20,7 @@ import { endRun, recordUnstartedRun, stateOutcome } from "#app/lib/services/repo
 import { acceptNoLog, answerExceedance, recordLogRead } from "#app/lib/services/review-run.server";
 import { acknowledgeBrief, answerRollCall, recordWind } from "#app/lib/services/roll-call.server";
 import { scrubRun } from "#app/lib/services/scrub-run.server";
+import { sendMailAgain } from "#app/lib/services/send-mail-again.server";
 import { acceptLeftOutRung, setBackRung } from "#app/lib/services/settle-rung.server";
 import { startRun, takeBackStart } from "#app/lib/services/start-run.server";
 import { withdrawProof } from "#app/lib/services/withdraw-proof.server";
@@ -110,12 +111,22 @@ describe("a plan", () => {
   it("is the lead's, within the install's own limits", async () => {
     expect(await planRun(w.act("bea"), await planInput())).toMatchObject(refused(403, "not-your-role"));
     expect(await planRun(w.act("lio"), await planInput({ rung: "99" }))).toMatchObject(refused(404, "not-found"));
-    expect(await planRun(w.act("lio"), await planInput({ windLimit: 20 }))).toMatchObject(refused(422, "invalid"));
-    expect(await planRun(w.act("lio"), await planInput({ gustLimit: 20 }))).toMatchObject(refused(422, "invalid"));
-    expect(await planRun(w.act("lio"), await planInput({ rpm: 400 }))).toMatchObject(refused(422, "invalid"));
-    expect(await planRun(w.act("lio"), await planInput({ positions: [{ position: "operator", member: "nobody" }] }))).toMatchObject(
-      refused(422, "invalid"),
-    );
+    const plan = async (over: object) => planRun(w.act("lio"), await planInput(over));
+    expect(await plan({ windLimit: 20, gustLimit: 20 })).toMatchObject(refused(409, "wind-over"));
+    expect(await plan({ gustLimit: 20 })).toMatchObject(refused(409, "wind-over"));
+    expect(await plan({ gustLimit: 6 })).toMatchObject(refused(409, "wind-over"));
+    expect(await plan({ rpm: 400 })).toMatchObject(refused(409, "clearance"));
+    expect(await plan({ positions: [{ position: "operator", member: "nobody" }] })).toMatchObject(refused(409, "not-active"));
+  });
+
+  it("goes no higher than its rung, and puts nobody in two places that one person cannot hold", async () => {
+    const { rpm } = await planInput();
+    const high = await planRun(w.act("lio"), await planInput({ rpm: rpm + 1 }));
+    expect(high).toMatchObject(refused(409, "clearance"));
+    expect(high.ok ? "" : high.message).toContain("is not clear above");
+    const twice = await planRun(w.act("lio"), await planInput({ positions: [...POSITIONS, { position: "areaguard", member: "bea" }] }));
+    expect(twice).toMatchObject(refused(409, "pair"));
+    expect((await w.board()).snapshot.runs).toEqual([]);
   });
 
   it("changed in what anybody does is a new version; in time or place alone it is not", async () => {
@@ -345,6 +356,53 @@ describe("a no-go", () => {
     expect((await recordLines(db(), w.installId)).at(-1)?.event).toMatchObject({ type: "no-go-sent", data: { reason: "rain is coming" } });
     called();
     expect(await callNoGo(w.act("lio"), { run, reason: "rain" })).toMatchObject(refused(409, "order"));
+  });
+});
+
+describe("SCRUB", () => {
+  it("is mailed to every one of the crew, in answer to the GO that it ends; no HOLD is written besides", async () => {
+    called();
+    w.clock.add(1000);
+    expect(await scrubRun(w.act("bea"), { run, reason: "rain all day" })).toMatchObject(refused(403, "not-your-role"));
+    expect(await mails("scrub")).toEqual([]);
+    const act = w.act("lio");
+    value(await scrubRun(act, { run, reason: "rain all day" }));
+    value(await scrubRun(act, { run, reason: "rain all day" }));
+    const [goMails, sent] = [await mails("go"), await mails("scrub")];
+    expect(sent.map((m) => m.toUserId)).toEqual([...CREW].sort());
+    expect(sent.map((m) => m.inReplyTo)).toEqual(goMails.map((m) => m.messageId));
+    for (const mail of sent) {
+      expect(mail.subject).toMatch(/^SCRUB: run 1 .*rain all day$/);
+      expect(mail.text).toContain("rain all day");
+      expect(mail.html).toContain("rain all day");
+    }
+    expect(await judged()).toMatchObject({ state: "scrubbed", go: null });
+    expect(await mails("hold")).toEqual([]);
+  });
+});
+
+describe("a mail that was given up", () => {
+  it("is sent again by a lead, once, and a GO mail only while its GO is in force", async () => {
+    called();
+    w.clock.add(1000);
+    const [mail] = await mails("go");
+    const id = mail?.id ?? "";
+    const again = (person: Person, which = id) => sendMailAgain(w.act(person), { mail: which });
+    expect(await again("lio")).toMatchObject(refused(409, "already"));
+    await write((tx) => tx.update(outbox).set({ failedAt: now(), tries: 10, lastError: "No such mailbox." }).where(eq(outbox.id, id)));
+    expect((await mailLog(db(), w.installId)).find((m) => m.id === id)?.state).toBe("given up");
+    expect(await again("bea")).toMatchObject(refused(403, "not-your-role"));
+    expect(await again("lio", "nope")).toMatchObject(refused(404, "not-found"));
+    expect(await sendMailAgain({ ...w.act("olga"), installId: w.otherInstall }, { mail: id })).toMatchObject(refused(404, "not-found"));
+    const lines = (await recordLines(db(), w.installId)).length;
+    value(await again("lio"));
+    expect((await mailLog(db(), w.installId)).find((m) => m.id === id)).toMatchObject({ state: "waiting", tries: 0, nextTryAt: now() });
+    expect((await recordLines(db(), w.installId)).length).toBe(lines);
+    expect(await again("lio")).toMatchObject(refused(409, "already"));
+
+    await write((tx) => tx.update(outbox).set({ failedAt: now(), tries: 10 }).where(eq(outbox.id, id)));
+    value(await callHold(w.act("cal"), { run, reason: "dog on the apron" }));
+    expect(await again("lio")).toMatchObject(refused(409, "go-over"));
   });
 });
 

@@ -8,10 +8,11 @@ import { pathToFileURL } from "node:url";
 import { type Database, openDatabase, setDatabase } from "#app/db/client.server";
 import { migrateDatabase } from "#app/db/migrate.server";
 
-const folder = mkdtempSync(join(tmpdir(), "bladecount-test-"));
+const folder = mkdtempSync(join(process.env.TEST_FOLDER ?? tmpdir(), "bladecount-test-"));
 const opened: Database[] = [];
 let files = 0;
 
+// Not every worker lives to do this; `run-folder.ts` takes away what is left.
 process.on("exit", () => {
   for (const database of opened) database.close();
   rmSync(folder, { recursive: true, force: true });

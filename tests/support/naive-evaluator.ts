@@ -21,6 +21,7 @@ import {
   logIsDealtWith,
   newestAct,
   newestPlan,
+  onlyWhatCounts,
   presentGates,
   requiredGates,
 } from "./naive-facts";
@@ -129,7 +130,8 @@ function gateState(s: Snapshot, gate: Gate, at: Instant): string {
 
 function isReviewed(s: Snapshot, run: Run, at: Instant): boolean {
   if (endOf(run) === null || newestAct(run, "outcome") === null || !logIsDealtWith(run)) return false;
-  return presentGates(s).some((g) => g.lookBack?.kind === "run" && g.lookBack.run === run.id && gateStands(s, g, at));
+  const post = presentGates(s).filter((g) => g.lookBack?.kind === "run" && g.lookBack.run === run.id);
+  return post.length > 0 && post.every((g) => gateStands(s, g, at));
 }
 
 function runState(s: Snapshot, run: Run, at: Instant): string {
@@ -137,7 +139,9 @@ function runState(s: Snapshot, run: Run, at: Instant): string {
   if (isStarted(run)) return endOf(run) === null ? "running" : isReviewed(s, run, at) ? "reviewed" : "ended";
   const last = newestAct(run, "go", "hold", "take-back");
   if (!last) return "planned";
-  return last.act === "go" && at < last.ends ? "called" : "held";
+  // GO is over with its window, with its card, and with whatever it stood on.
+  const stillCalled = last.act === "go" && at < last.ends && last.version === newestPlan(run)?.version;
+  return stillCalled && isClear(s, run, at) ? "called" : "held";
 }
 
 /** Cap of the restraint sheet at this place of the item's evidence; 0 where it does not stand, or there is none. */
@@ -151,7 +155,11 @@ function sheetCap(s: Snapshot, item: Item, part: number, at: Instant): number {
 function clearanceOf(s: Snapshot, run: Run, at: Instant): number {
   const planned = newestPlan(run)?.rpm ?? s.rungs.find((r) => r.key === run.rung)?.rpm ?? 0;
   const caps = [planned, installValue(s, "redline") ?? 0];
-  for (const f of s.findings) if (f.severity === "limiting" && !f.closed) caps.push(f.cap ?? 0);
+  for (const f of s.findings) {
+    if (f.closed) continue;
+    if (f.severity === "limiting") caps.push(f.cap ?? 0);
+    if (f.severity === "grounding") caps.push(0);
+  }
   for (const item of requiredGates(s, run).flatMap((g) => itemsOf(s, g))) {
     for (const [i, part] of item.parts.entries()) {
       if (part.kind === "sheet" && part.sheet === "restraint") caps.push(sheetCap(s, item, i, at));
@@ -173,7 +181,7 @@ function crewIsReady(s: Snapshot, run: Run, at: Instant): boolean {
       if (one !== other && one.member === other.member && !mayBoth(one.position, other.position)) return false;
     }
   }
-  const lastHold = newestAct(run, "hold");
+  const lastHold = newestAct(run, "hold", "take-back");
   return people.every((member) => {
     const acked = run.acks.some((a) => a.by === member && a.version === plan.version);
     const answer = bySeq(run.answers)
@@ -194,9 +202,9 @@ function windIsInside(run: Run, at: Instant): boolean {
  * Called or running. A run that was called keeps the others back until it is scrubbed or has run: else a HOLD, or the end of its GO,
  * would make another run clear, which bad news and time must never do.
  */
-function isInTheWay(s: Snapshot, run: Run, at: Instant): boolean {
-  const state = runState(s, run, at);
-  return ["called", "running"].includes(state) || (state === "held" && newestAct(run, "go") !== null);
+function isInTheWay(run: Run): boolean {
+  if (isStarted(run)) return endOf(run) === null;
+  return !isScrubbed(run) && newestAct(run, "go") !== null;
 }
 
 function isClear(s: Snapshot, run: Run, at: Instant): boolean {
@@ -208,10 +216,11 @@ function isClear(s: Snapshot, run: Run, at: Instant): boolean {
   return (
     s.rungs.every((r) => r.order >= rung.order || isSettled(s, r.key)) &&
     others.every((r) => !isStarted(r) || isReviewed(s, r, at)) &&
-    others.every((r) => !isInTheWay(s, r, at)) &&
+    others.every((r) => !isInTheWay(r)) &&
     requiredGates(s, run).every((g) => gateStands(s, g, at)) &&
     s.findings.every((f) => f.severity !== "grounding" || f.closed) &&
     s.looseEnds.every((l) => l.confirmed || looseEndAccepted(s, l, run.rung)) &&
+    s.values.some((v) => v.key === "redline") &&
     cardValues.every((v) => v.value !== null && v.source !== null) &&
     clearanceOf(s, run, at) >= plan.rpm &&
     crewIsReady(s, run, at) &&
@@ -254,7 +263,8 @@ function naiveRelease(s: Snapshot, at: Instant): NaiveBoard["release"] {
 }
 
 /** Every answer of the rules at `at`, each worked out afresh. */
-export function naive(s: Snapshot, at: Instant): NaiveBoard {
+export function naive(given: Snapshot, at: Instant): NaiveBoard {
+  const s = onlyWhatCounts(given);
   const board: NaiveBoard = { items: {}, gates: {}, rungs: {}, runs: {}, release: naiveRelease(s, at) };
   for (const gate of s.gates.filter((g) => isPresent(s, g))) {
     for (const item of itemsOf(s, gate)) board.items[item.id] = naiveItem(s, item, at);

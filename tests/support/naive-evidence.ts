@@ -49,11 +49,15 @@ function tallyMeets(s: Snapshot, part: Extract<Part, { kind: "tally" }>, evidenc
   if (!source || !newest || newest.withdrawn || newest.state !== "done") return false;
   const where = source.parts.findIndex((p) => p.kind === "tally" && p.mode === "out");
   const out = newest.evidence[where];
-  if (out?.kind !== "tally" || out.places.length !== evidence.places.length) return false;
-  return out.places.every((o) => {
-    const back = evidence.places.find((p) => p.place === o.place);
-    return back !== undefined && counted(o.out) && counted(back.in) && back.in === o.out;
-  });
+  if (out?.kind !== "tally") return false;
+  // Each count that went out is crossed off against one that came back, and none may be left on either side.
+  const left = [...evidence.places];
+  for (const o of out.places) {
+    const match = left.findIndex((p) => p.place === o.place && counted(p.in) && p.in === o.out);
+    if (match < 0) return false;
+    left.splice(match, 1);
+  }
+  return left.length === 0;
 }
 
 function crankMeets(giveUpAfter: number, bursts: Extract<Evidence, { kind: "crank" }>["bursts"]): boolean {
@@ -68,6 +72,28 @@ function crankMeets(giveUpAfter: number, bursts: Extract<Evidence, { kind: "cran
 function sheetMeets(s: Snapshot, evidence: Extract<Evidence, { kind: "sheet" }>): boolean {
   const computed = computeSheet(evidence.sheet, evidence.inputs);
   if (!computed.ok || !computed.result.passes || evidence.version !== SHEET_VERSIONS[evidence.sheet]) return false;
+  const { inputs } = evidence;
+  const feeds: Partial<Record<string, ValueKey | ValueKey[]>> =
+    evidence.sheet === "restraint"
+      ? {
+          power: "ratedPower",
+          reference: ["staticRpmMin", "ratedRpm"],
+          diameter: "propDiameter",
+          reduction: "reductionRatio",
+          mass: "mass",
+        }
+      : evidence.sheet === "compression"
+        ? { count: "cylinders" }
+        : inputs.takeoffFlow === undefined
+          ? { takeoffFlow: "takeoffFlow", power: "ratedPower" }
+          : { takeoffFlow: "takeoffFlow" };
+  for (const [input, keys] of Object.entries(feeds)) {
+    const says = [keys ?? []]
+      .flat()
+      .map((k) => installValue(s, k))
+      .filter((v) => v !== null);
+    if (says.length > 0 && !says.some((v) => Math.abs(v - Number(inputs[input])) < 1e-9 * Math.abs(v) + 1e-15)) return false;
+  }
   return valuesTaken(evidence.sheet).every((key) => evidence.took[key] === undefined || evidence.took[key] === installValue(s, key));
 }
 

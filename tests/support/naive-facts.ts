@@ -11,6 +11,25 @@ export function heldRole(s: Snapshot, member: string, roles: Role[], at: Instant
   return roleNow.some((r) => roles.includes(r.role));
 }
 
+// ---------------------------------------------------------------- what counts
+
+/** Words of a second person count only from one who could say them; nothing counts later than it was recorded. */
+export function onlyWhatCounts(s: Snapshot): Snapshot {
+  const copy = structuredClone(s);
+  type Said = { by: string; as: Role; recorded: Instant } | null;
+  const good = (said: Said, notBy: string | null, roles: Role[]) =>
+    said !== null && said.by !== notBy && roles.includes(said.as) && heldRole(s, said.by, [said.as], said.recorded);
+  for (const f of copy.findings) if (!good(f.closed, f.fixed?.by ?? null, ["inspector"])) f.closed = null;
+  for (const l of copy.looseEnds) {
+    if (!good(l.confirmed, l.restored?.by ?? null, ["builder", "lead", "inspector"])) l.confirmed = null;
+    l.accepted = l.accepted.filter((a) => good(a, l.by, ["inspector"]));
+  }
+  for (const o of copy.openings) if (!good(o.mistake, o.by, ["inspector"])) o.mistake = null;
+  for (const r of copy.rungs) if (!good(r.leftOut, null, ["inspector"])) r.leftOut = null;
+  for (const p of copy.proofs) p.counts = Math.min(p.counts, p.recorded);
+  return copy;
+}
+
 // ---------------------------------------------------------------- what is on the board
 
 export const itemsOf = (s: Snapshot, gate: Gate): Item[] => s.items.filter((i) => i.gate === gate.id && !i.hidden);
@@ -46,6 +65,10 @@ export const endOf = (run: Run): Instant | null => (isStarted(run) ? (newestAct(
 export const isScrubbed = (run: Run): boolean => !isStarted(run) && newestAct(run, "scrub") !== null;
 export const newestPlan = (run: Run) => [...run.plans].sort((a, b) => a.version - b.version).at(-1) ?? null;
 
+/** An engine run that nobody started here stays cut short, whatever is said of it. */
+export const isCompleted = (run: Run): boolean =>
+  newestAct(run, "outcome")?.outcome === "completed" && newestAct(run, "start")?.unstarted !== true;
+
 export function settlingRuns(s: Snapshot, key: string): Run[] {
   const rung = s.rungs.find((r) => r.key === key);
   if (!rung) return [];
@@ -53,13 +76,15 @@ export function settlingRuns(s: Snapshot, key: string): Run[] {
     .filter((run) => {
       const [plan, end] = [newestPlan(run), endOf(run)];
       if (run.rung !== key || plan === null || end === null || rung.rpm === null) return false;
-      const completed = newestAct(run, "outcome")?.outcome === "completed";
-      return completed && plan.rpm >= rung.rpm && rung.setBack.every((b) => end > b.recorded);
+      return isCompleted(run) && plan.rpm >= rung.rpm && rung.setBack.every((b) => end > b.recorded);
     })
     .sort((a, b) => (endOf(a) ?? 0) - (endOf(b) ?? 0));
 }
 export function isSettled(s: Snapshot, key: string): boolean {
-  return s.rungs.some((r) => r.key === key && r.leftOut !== null) || settlingRuns(s, key).length > 0;
+  const leftOut = s.rungs.some(
+    (r) => r.key === key && r.leftOut !== null && r.setBack.every((b) => b.recorded < (r.leftOut?.recorded ?? 0)),
+  );
+  return leftOut || settlingRuns(s, key).length > 0;
 }
 export const nextRung = (s: Snapshot) => [...s.rungs].sort((a, b) => a.order - b.order).find((r) => !isSettled(s, r.key)) ?? null;
 
@@ -69,14 +94,14 @@ export function defaultGates(s: Snapshot, rung: string | null): Gate[] {
   );
 }
 export function requiredGates(s: Snapshot, run: Run): Gate[] {
-  const plan = newestPlan(run);
-  return plan === null ? defaultGates(s, run.rung) : presentGates(s).filter((g) => plan.requiredGates.includes(g.id));
+  const planned = newestPlan(run)?.requiredGates ?? [];
+  const today = defaultGates(s, run.rung);
+  return presentGates(s).filter((g) => planned.includes(g.id) || today.includes(g));
 }
-/** What the next run requires: the plans of the runs of the next rung that are neither ended nor scrubbed, else the default. */
+/** What the next run requires, whichever comes first: every run that is planned and neither ended nor scrubbed, and the next rung. */
 export function nextRequired(s: Snapshot): Gate[] {
-  const rung = nextRung(s);
-  const open = s.runs.filter((r) => rung !== null && r.rung === rung.key && endOf(r) === null && !isScrubbed(r) && newestPlan(r) !== null);
-  return open.length > 0 ? open.flatMap((run) => requiredGates(s, run)) : defaultGates(s, rung?.key ?? null);
+  const open = s.runs.filter((r) => endOf(r) === null && !isScrubbed(r) && newestPlan(r) !== null);
+  return [...defaultGates(s, nextRung(s)?.key ?? null), ...open.flatMap((run) => requiredGates(s, run))];
 }
 export const logIsDealtWith = (run: Run): boolean =>
   run.acts.some((a) => a.act === "log-read" || (a.act === "no-log" && a.as === "inspector")) &&

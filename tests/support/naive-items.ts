@@ -8,10 +8,10 @@ import { evidenceMeets, proofsInOrder } from "./naive-evidence";
 import {
   endOf,
   heldRole,
+  isCompleted,
   isComputed,
   isSettled,
   itemsOf,
-  newestAct,
   nextRequired,
   presentGates,
   settlingRuns,
@@ -77,7 +77,7 @@ function isValidStill(s: Snapshot, gate: Gate, item: Item, proof: Proof, at: Ins
   if (gate.requiredBy.kind !== "runs" && s.rungs.every((r) => isSettled(s, r.key))) return true;
   const validity = item.validity ?? gate.validity;
   if (!validity) return true;
-  const ends = s.runs.filter((r) => newestAct(r, "outcome")?.outcome === "completed").map(endOf);
+  const ends = s.runs.filter(isCompleted).map(endOf);
   const later = ends.filter((e): e is Instant => e !== null && e > proof.counts);
   if (validity.afterRunHours !== null && later.length > 0) return at < Math.max(...later) + validity.afterRunHours * HOUR;
   return validity.hours === null || at < proof.counts + validity.hours * HOUR;
@@ -89,7 +89,10 @@ function restsOnStep(s: Snapshot, step: Item, proof: Proof): boolean {
   if (!rest || rest.withdrawn || !meetsOneToFive(s, step, rest)) return false;
   if (rest.state === "na") return true;
   if (proof.counts - rest.counts > s.settings.stepWindow) return false;
-  return !s.proofs.some((e) => e.item === step.step?.endedBy && rest.counts < e.counts && e.counts < proof.counts);
+  // Between the two, in the order in which things happened.
+  const ending = s.proofs.filter((e) => e.item === step.step?.endedBy);
+  const inOrder = [...ending, rest, proof].sort((a, b) => a.counts - b.counts || a.seq - b.seq);
+  return inOrder.indexOf(proof) - inOrder.indexOf(rest) === 1;
 }
 
 function followsHold(s: Snapshot, item: Item, proof: Proof, at: Instant, path: string[]): boolean {
@@ -147,7 +150,8 @@ function marksHold(s: Snapshot, gate: Gate, proof: Proof): boolean {
   if (gate.eachRun) {
     const before = prerequisitesOf(s, gate).flatMap((id) => s.gates.filter((g) => g.id === id));
     const postRun = presentGates(s).filter((g) => g.lookBack !== null && g.id !== gate.id);
-    if (!newerThan([...allIn(before), ...allIn(postRun), ...runEnds])) return false;
+    const setBacks = s.rungs.flatMap((r) => r.setBack.map((b) => b.recorded));
+    if (!newerThan([...allIn(before), ...allIn(postRun), ...runEnds, ...setBacks])) return false;
   }
   if (gate.lookBack) return newerThan([lookedBackEnd(s, gate)]);
   return gate.requiredBy.kind !== "release" || newerThan(runEnds);

@@ -1,3 +1,4 @@
+import { Figure } from "#app/components/ui/Figure";
 import { Fitting } from "#app/components/ui/Fitting";
 import { ItemNut } from "#app/components/ui/ItemNut";
 
@@ -34,7 +35,13 @@ export function CrewBoard({ places, runHref, when, highest, steps, stop, read }:
       <section>
         <h2>The run in short</h2>
         <p>
-          {steps.join(", ")}. Never above <b className="fig">{highest}</b>.
+          {steps.join(", ")}.
+          {highest && (
+            <>
+              {" "}
+              Never above <Figure value={highest} className="font-bold" />.
+            </>
+          )}
         </p>
       </section>
       <div className="crew-stop">

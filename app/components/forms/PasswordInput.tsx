@@ -1,19 +1,14 @@
-import { useState, useSyncExternalStore } from "react";
+import { useState } from "react";
 import { Field } from "#app/components/forms/Field";
 import { type ControlProps, wire } from "#app/components/forms/types";
 import { Fitting } from "#app/components/ui/Fitting";
-
-const never = () => () => {};
+import { useLive } from "#app/components/ui/useLive";
 
 /** A password, with a button that shows it. Without scripts the button is left out. */
 export function PasswordInput(props: ControlProps & { autoComplete: "current-password" | "new-password" }) {
   const { id, name, label, hint, errors, labelHidden, optional, ...rest } = props;
   const [shown, setShown] = useState(false);
-  const scripted = useSyncExternalStore(
-    never,
-    () => true,
-    () => false,
-  );
+  const scripted = useLive();
   const { control, aria } = wire(props);
   return (
     <Field {...{ id, name, label, hint, errors, labelHidden, optional }}>

@@ -1,19 +1,10 @@
 import { BandRule } from "#app/components/ui/BandRule";
 import { fromSI } from "#app/lib/units/convert";
 import { displayUnit, format, parseEntry } from "#app/lib/units/display";
-import type { Band, Quantity } from "#app/lib/units/quantity";
-
-export interface Criterion {
-  quantity: Quantity;
-  unit: string;
-  band: Band | null;
-  bandText: string;
-  from: string;
-  isDefault: boolean;
-}
+import type { CriterionView } from "#app/lib/views/gate-parts";
 
 interface BandToldProps {
-  criterion: Criterion;
+  criterion: CriterionView;
   /** As typed; empty = nothing yet. */
   text: string;
   units: "si" | "us";
@@ -40,7 +31,7 @@ export function BandTold({ criterion, text, units, place }: BandToldProps) {
         />
       )}
       <p>
-        <output className={out ? "told told-out" : "told"}>{entry && !entry.ok ? entry.sentence : told}</output>
+        <output className={out || entry?.ok === false ? "told told-out" : "told"}>{entry && !entry.ok ? entry.sentence : told}</output>
         <span>
           {bandText}, {isDefault ? <b>default, not confirmed: {from}</b> : from}
         </span>

@@ -1,23 +1,10 @@
 import { BandRule } from "#app/components/ui/BandRule";
 import { Figure } from "#app/components/ui/Figure";
 import { Tally } from "#app/components/ui/Tally";
-
-export type GivenModel =
-  | {
-      kind: "value";
-      label: string;
-      value: string;
-      unit: string;
-      rule: { min: number | null; max: number | null; at: number } | null;
-      says: string;
-      out: boolean;
-    }
-  | { kind: "tally"; count: number; says: string; note: string }
-  | { kind: "photos"; files: string[]; of: string }
-  | { kind: "words"; text: string };
+import type { GivenView } from "#app/lib/views/gate-proof";
 
 /** What was given as evidence: a value on its rule, strokes of a tally, pictures, words. */
-export function Given({ given }: { given: GivenModel[] }) {
+export function Given({ given }: { given: GivenView[] }) {
   if (!given.length) return null;
   return (
     <div className="given">
@@ -29,7 +16,7 @@ export function Given({ given }: { given: GivenModel[] }) {
   );
 }
 
-function GivenPart({ one }: { one: GivenModel }) {
+function GivenPart({ one }: { one: GivenView }) {
   switch (one.kind) {
     case "value":
       return (

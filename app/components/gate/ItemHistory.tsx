@@ -1,24 +1,9 @@
-import type { GivenModel } from "#app/components/gate/Given";
-
-export interface ProofModel {
-  id: string;
-  state: "done" | "failed" | "na";
-  did: string;
-  recordedBy: string | null;
-  when: string;
-  late: boolean;
-  given: GivenModel[];
-  words: string;
-  note: string;
-  tools: string;
-  said: string[];
-  withdrawn: string | null;
-}
+import type { ProofView } from "#app/lib/views/gate-proof";
 
 const STATE = { done: "done", failed: "not right", na: "does not apply" };
 
 /** Every proof that an item ever had, newest first: nothing is edited or deleted. */
-export function ItemHistory({ proofs, name }: { proofs: ProofModel[]; name: string }) {
+export function ItemHistory({ proofs, name }: { proofs: ProofView[]; name: string }) {
   if (!proofs.length) return null;
   return (
     <details className="item-history">

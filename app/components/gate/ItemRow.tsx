@@ -1,44 +1,14 @@
 import type { SelectOption } from "#app/components/forms/Select";
 import { type Entry, NO_ENTRY } from "#app/components/gate/entry";
 import { Given } from "#app/components/gate/Given";
-import { ItemHistory, type ProofModel } from "#app/components/gate/ItemHistory";
+import { ItemHistory } from "#app/components/gate/ItemHistory";
 import { NumberEntry } from "#app/components/gate/NumberEntry";
-import type { PartModel } from "#app/components/gate/PartFields";
 import { ProofActs, ProofWays } from "#app/components/gate/ProofActs";
-import { type Ask, ProveForm, type SheetResultModel } from "#app/components/gate/ProveForm";
+import { ProveForm, type SheetResultModel } from "#app/components/gate/ProveForm";
 import { cx } from "#app/components/ui/cx";
 import { ItemNut } from "#app/components/ui/ItemNut";
 import { Notice } from "#app/components/ui/Notice";
-import type { NutState } from "#app/components/ui/states";
-
-export interface ItemModel {
-  id: string;
-  anchor: string;
-  no: number;
-  key: string;
-  revision: number;
-  words: string;
-  caution: string | null;
-  source: string | null;
-  marks: string[];
-  nut: NutState;
-  word: string;
-  reasons: { title: string; sentence: string; who: string }[];
-  proof: ProofModel | null;
-  history: ProofModel[];
-  parts: PartModel[];
-  computed: boolean;
-  tickOnly: boolean;
-  open: boolean;
-  prove: Ask & { roles: string[]; told: boolean; lateAllowed: boolean; numberMissing: boolean };
-  failed: Ask;
-  na: Ask;
-  confirm: (Ask & { as: string }) | null;
-  accept: Ask | null;
-  keep: Ask | null;
-  withdraw: Ask | null;
-  enterNumber: Ask;
-}
+import type { ItemView } from "#app/lib/views/gate-item";
 
 /** What came back for this row from the last send. */
 export interface RowReply {
@@ -59,7 +29,7 @@ export interface RowShared {
 }
 
 interface ItemRowProps {
-  item: ItemModel;
+  item: ItemView;
   reply: RowReply | null;
   shared: RowShared;
   busy: boolean;
@@ -166,33 +136,18 @@ export function ItemRow({ item, reply, shared, busy }: ItemRowProps) {
   );
 }
 
-function formProps(item: ItemModel, formId: string, entry: Entry, reply: RowReply | null, shared: RowShared, busy: boolean) {
-  const { prove, failed, na } = item;
+function formProps(item: ItemView, formId: string, entry: Entry, reply: RowReply | null, shared: RowShared, busy: boolean) {
   const { units, tools, people, zone, live } = shared;
-  return {
-    item,
-    prove,
-    failed,
-    na,
-    formId,
-    commandId: shared.commandId(item.id, "prove"),
-    entry,
-    result: reply?.result ?? null,
-    units,
-    tools,
-    people,
-    zone,
-    live,
-    busy,
-  };
+  const commandId = shared.commandId(item.id, "prove");
+  return { item, formId, commandId, entry, result: reply?.result ?? null, units, tools, people, zone, live, busy };
 }
 
 /** The whole left end: it sends the row where there is something to do, and only shows the state where there is not. */
-function TickEnd({ item, formId }: { item: ItemModel; formId: string | null }) {
+function TickEnd({ item, formId }: { item: ItemView; formId: string | null }) {
   const inside = (
     <>
       <ItemNut state={item.nut} size={66} />
-      <span>{item.computed && item.nut === "todo" ? "not yet" : item.word}</span>
+      <span>{item.word}</span>
     </>
   );
   return formId ? (

@@ -1,12 +1,13 @@
 import { useState } from "react";
 import { NumberInput } from "#app/components/forms/NumberInput";
-import { BandTold, type Criterion } from "#app/components/gate/BandTold";
+import { BandTold } from "#app/components/gate/BandTold";
 import { controlId, errorsOf, type PartProps, typedIn } from "#app/components/gate/entry";
+import type { CriterionView } from "#app/lib/views/gate-parts";
 
 interface MeasureFieldsProps extends PartProps {
   label: string;
   places: string[];
-  criterion: Criterion;
+  criterion: CriterionView;
 }
 
 /** One value per place, the unit beside each, its band drawn and told at once. */
@@ -37,7 +38,7 @@ interface ValueFieldProps {
   label: string;
   typed: string;
   errors: string[];
-  criterion: Criterion;
+  criterion: CriterionView;
   units: "si" | "us";
   onText?: (text: string) => void;
 }

@@ -3,13 +3,13 @@ import { HiddenIds } from "#app/components/forms/HiddenIds";
 import { NumberInput } from "#app/components/forms/NumberInput";
 import { TextInput } from "#app/components/forms/TextInput";
 import { type Entry, errorsOf, typedIn } from "#app/components/gate/entry";
-import type { PartModel } from "#app/components/gate/PartFields";
 import { Anchor } from "#app/components/ui/Anchor";
 import { Fitting } from "#app/components/ui/Fitting";
+import type { PartView } from "#app/lib/views/gate-parts";
 
 interface NumberEntryProps {
   item: string;
-  part: PartModel;
+  part: PartView;
   commandId: string;
   entry: Entry;
   setUpHref: string;

@@ -2,47 +2,16 @@ import { FieldErrors } from "#app/components/forms/Field";
 import { NumberInput } from "#app/components/forms/NumberInput";
 import type { SelectOption } from "#app/components/forms/Select";
 import { TextInput } from "#app/components/forms/TextInput";
-import type { Criterion } from "#app/components/gate/BandTold";
 import { CrankFields } from "#app/components/gate/CrankFields";
 import { controlId, errorsOf, type PartProps, typedIn } from "#app/components/gate/entry";
 import { MeasureFields } from "#app/components/gate/MeasureFields";
-import { type Sheet, SheetFields } from "#app/components/gate/SheetFields";
+import { SheetFields } from "#app/components/gate/SheetFields";
 import { TallyFields } from "#app/components/gate/TallyFields";
 import { TorqueFields } from "#app/components/gate/TorqueFields";
-
-export type PartModel = { n: number; missing: boolean } & (
-  | { kind: "tick"; asks: string | null; text: string | null; from: string | null }
-  | {
-      kind: "measure";
-      label: string;
-      places: string[];
-      criterion: Criterion & { enterable: boolean; limitsMissing: string[]; typed: { min: string; max: string } };
-    }
-  | {
-      kind: "torque";
-      label: string;
-      places: string[];
-      criterion: Criterion & { enterable: boolean; limitsMissing: string[]; typed: { min: string; max: string } };
-      count: number | null;
-      lengthUnit: string;
-    }
-  | {
-      kind: "tally";
-      mode: "pairs" | "out" | "in";
-      places: { place: string; out: number | null }[];
-      expected: number | null;
-      words: { out: string; in: string };
-    }
-  | { kind: "photo"; of: string; optional: boolean }
-  | { kind: "reading"; label: string; places: string[]; unit: string; optional: boolean }
-  | { kind: "text"; asks: string }
-  | { kind: "crank"; giveUpAfter: number; from: string }
-  | { kind: "sheet"; sheet: Sheet }
-  | { kind: "computed" }
-);
+import type { PartView } from "#app/lib/views/gate-parts";
 
 interface PartFieldsProps extends PartProps {
-  part: PartModel;
+  part: PartView;
   tools: SelectOption[];
   live: boolean;
 }

@@ -2,11 +2,11 @@ import { Form } from "react-router";
 import { HiddenIds } from "#app/components/forms/HiddenIds";
 import { TextInput } from "#app/components/forms/TextInput";
 import { controlId, type Entry, errorsOf, typedIn } from "#app/components/gate/entry";
-import type { ItemModel } from "#app/components/gate/ItemRow";
 import { Fitting } from "#app/components/ui/Fitting";
+import type { ItemView } from "#app/lib/views/gate-item";
 
 interface ProofActsProps {
-  item: ItemModel;
+  item: ItemView;
   commandId: (item: string, act: string) => string;
   entry: Entry;
 }

@@ -4,15 +4,11 @@ import { HiddenIds } from "#app/components/forms/HiddenIds";
 import { Select, type SelectOption } from "#app/components/forms/Select";
 import { TextInput } from "#app/components/forms/TextInput";
 import { controlId, type Entry, errorsOf, typedIn } from "#app/components/gate/entry";
-import { PartFields, type PartModel } from "#app/components/gate/PartFields";
+import { PartFields } from "#app/components/gate/PartFields";
 import { Choice } from "#app/components/ui/Choice";
 import { Fitting } from "#app/components/ui/Fitting";
 import { Notice } from "#app/components/ui/Notice";
-
-export interface Ask {
-  ok: boolean;
-  reason: string;
-}
+import type { ItemView } from "#app/lib/views/gate-item";
 
 export interface SheetResultModel {
   passes: boolean;
@@ -22,10 +18,7 @@ export interface SheetResultModel {
 }
 
 interface ProveFormProps {
-  item: { id: string; revision: number; words: string; parts: PartModel[]; tickOnly: boolean; nut: string };
-  prove: Ask & { roles: string[]; told: boolean; lateAllowed: boolean; numberMissing: boolean };
-  failed: Ask;
-  na: Ask;
+  item: ItemView;
   formId: string;
   commandId: string;
   entry: Entry;
@@ -40,7 +33,8 @@ interface ProveFormProps {
 
 /** What an item asks for, with every way out: done, not right, does not apply, done earlier or by somebody else. */
 export function ProveForm(props: ProveFormProps) {
-  const { item, prove, failed, na, formId, commandId, entry, result, units, tools, people, zone, live, busy } = props;
+  const { item, formId, commandId, entry, result, units, tools, people, zone, live, busy } = props;
+  const { prove, failed, na } = item;
   const hasPhoto = item.parts.some((p) => p.kind === "photo");
   const hasSheet = item.parts.some((p) => p.kind === "sheet" || p.kind === "torque");
   const summary = entry.errors.map((e) => ({ field: fieldId(item.id, e.field), message: e.message }));

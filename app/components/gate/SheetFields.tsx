@@ -5,35 +5,14 @@ import { TextInput } from "#app/components/forms/TextInput";
 import { controlId, errorsOf, type PartProps, typedIn } from "#app/components/gate/entry";
 import { CautionSlab } from "#app/components/ui/CautionSlab";
 import { Fitting } from "#app/components/ui/Fitting";
-
-export interface SheetField {
-  kind: "quantity" | "choice" | "text";
-  name: string;
-  label: string;
-  help: string;
-  optional: boolean;
-  when: { field: string; is: string } | null;
-  unit: string;
-  options: { value: string; label: string }[];
-  value: string;
-  /** Decided by the install: sent along, not asked. */
-  fixed: boolean;
-}
-
-export interface Sheet {
-  title: string;
-  formula: string;
-  caution: string;
-  fields: SheetField[];
-  groups: { name: string; label: string; row: string; rows: number; fields: SheetField[] }[];
-}
+import type { FieldView, SheetView } from "#app/lib/views/gate-parts";
 
 interface SheetFieldsProps extends PartProps {
-  sheet: Sheet;
+  sheet: SheetView;
   live: boolean;
 }
 
-/** A bench sheet inside the row, drawn from its definition. Fields that hang on a choice show once that choice is made. */
+/** A bench sheet inside the row, drawn from its definition. Fields that hang on a choice show once that choice is made, without scripts too. */
 export function SheetFields({ item, n, entry, sheet, live, units }: SheetFieldsProps) {
   const prefix = `p${n}.s.`;
   return (
@@ -41,7 +20,7 @@ export function SheetFields({ item, n, entry, sheet, live, units }: SheetFieldsP
       <h3>{sheet.title} sheet</h3>
       <CautionSlab title="work out, then look again.">{sheet.caution}</CautionSlab>
       <p className="field-hint">{sheet.formula}</p>
-      <FieldSet item={item} entry={entry} units={units} n={n} prefix={prefix} fields={sheet.fields} row={0} live={live} />
+      <FieldSet item={item} entry={entry} units={units} n={n} prefix={prefix} fields={sheet.fields} row={0} />
       {sheet.groups.map((group) => (
         <Rows key={group.name} item={item} entry={entry} units={units} n={n} prefix={`${prefix}${group.name}.`} group={group} live={live} />
       ))}
@@ -49,7 +28,7 @@ export function SheetFields({ item, n, entry, sheet, live, units }: SheetFieldsP
   );
 }
 
-function Rows({ group, prefix, live, ...rest }: PartProps & { group: Sheet["groups"][number]; prefix: string; live: boolean }) {
+function Rows({ group, prefix, live, ...rest }: PartProps & { group: SheetView["groups"][number]; prefix: string; live: boolean }) {
   const [added, setAdded] = useState(0);
   const sent = Math.max(0, ...group.fields.map((f) => rest.entry.typed[`${prefix}${f.name}`]?.length ?? 0));
   const rows = Math.max(group.rows, sent) + added + (live ? 0 : 1);
@@ -62,7 +41,7 @@ function Rows({ group, prefix, live, ...rest }: PartProps & { group: Sheet["grou
           <legend>
             {group.row} {row + 1}
           </legend>
-          <FieldSet {...rest} prefix={prefix} fields={group.fields} row={row} live={live} />
+          <FieldSet {...rest} prefix={prefix} fields={group.fields} row={row} />
         </fieldset>
       ))}
       {live && (
@@ -74,18 +53,14 @@ function Rows({ group, prefix, live, ...rest }: PartProps & { group: Sheet["grou
   );
 }
 
-type FieldSetProps = PartProps & { prefix: string; fields: SheetField[]; row: number; live: boolean };
+type FieldSetProps = PartProps & { prefix: string; fields: FieldView[]; row: number };
 
-function FieldSet({ item, entry, prefix, fields, row, live }: FieldSetProps) {
-  const [chosen, setChosen] = useState<Record<string, string>>({});
-  const now = (field: string) =>
-    chosen[field] ?? typedIn(entry, `${prefix}${field}`, row, fields.find((f) => f.name === field)?.value ?? "");
+function FieldSet({ item, entry, prefix, fields, row }: FieldSetProps) {
   return (
     <div className="field-row">
       {fields.map((field) => {
         const name = `${prefix}${field.name}`;
         if (field.fixed) return <input key={field.name} type="hidden" name={name} value={field.value} />;
-        const hidden = live && field.when !== null && now(field.when.field) !== field.when.is;
         const common = {
           id: controlId(item, name, row),
           name,
@@ -97,14 +72,9 @@ function FieldSet({ item, entry, prefix, fields, row, live }: FieldSetProps) {
         };
         // Kept in the form while hidden, so that each row sends as many texts as the others.
         return (
-          <div key={field.name} hidden={hidden} className="sheet-field">
+          <div key={field.name} className="sheet-field" {...hangsOn(field, fields)}>
             {field.kind === "choice" ? (
-              <Select
-                {...common}
-                options={field.options}
-                empty="choose"
-                onChange={(value) => setChosen((c) => ({ ...c, [field.name]: value }))}
-              />
+              <Select {...common} options={field.options} empty="choose" />
             ) : field.kind === "quantity" ? (
               <NumberInput {...common} unit={field.unit} size={7} />
             ) : (
@@ -115,4 +85,13 @@ function FieldSet({ item, entry, prefix, fields, row, live }: FieldSetProps) {
       })}
     </div>
   );
+}
+
+/** Where the install has decided the choice, the field is there or not; else the style sheet shows it with the option that is chosen. */
+function hangsOn({ name, when }: FieldView, fields: FieldView[]): { hidden?: boolean; "data-field": string; "data-when"?: string } {
+  const choice = fields.find((f) => f.name === when?.field);
+  if (!when || !choice) return { "data-field": name };
+  return choice.fixed
+    ? { "data-field": name, hidden: choice.value !== when.is }
+    : { "data-field": name, "data-when": `${when.field}=${when.is}` };
 }

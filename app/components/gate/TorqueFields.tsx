@@ -1,17 +1,17 @@
 import { useState } from "react";
 import { NumberInput } from "#app/components/forms/NumberInput";
 import { Select, type SelectOption } from "#app/components/forms/Select";
-import type { Criterion } from "#app/components/gate/BandTold";
 import { controlId, errorsOf, type PartProps, typedIn } from "#app/components/gate/entry";
 import { ValueField } from "#app/components/gate/MeasureFields";
 import { Figure } from "#app/components/ui/Figure";
 import { wrenchSetting } from "#app/lib/bench/torque";
 import { format, parseEntry } from "#app/lib/units/display";
+import type { CriterionView } from "#app/lib/views/gate-parts";
 
 interface TorqueFieldsProps extends PartProps {
   label: string;
   places: string[];
-  criterion: Criterion;
+  criterion: CriterionView;
   count: number | null;
   lengthUnit: string;
   tools: SelectOption[];

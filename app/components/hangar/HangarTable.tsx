@@ -1,10 +1,11 @@
 import { useTable } from "@tanstack/react-table";
-import { useState, useSyncExternalStore } from "react";
+import { useState } from "react";
 import { Form } from "react-router";
 import { TextInput } from "#app/components/forms/TextInput";
 import { columns, features } from "#app/components/hangar/columns";
 import { cx } from "#app/components/ui/cx";
 import { Fitting } from "#app/components/ui/Fitting";
+import { useLive } from "#app/components/ui/useLive";
 import type { HangarRow } from "#app/lib/views/hangar";
 
 interface HangarTableProps {
@@ -14,17 +15,12 @@ interface HangarTableProps {
   newHref: string;
 }
 
-const never = () => () => {};
 const SORT_WORD = { asc: "ascending", desc: "descending" } as const;
 
 /** The installs in a table that sorts and filters where scripts run; without them the order is the server's and the filter a form. */
 export function HangarTable({ rows, search, newHref }: HangarTableProps) {
   const [text, setText] = useState(search);
-  const live = useSyncExternalStore(
-    never,
-    () => true,
-    () => false,
-  );
+  const live = useLive();
   const table = useTable({
     features,
     columns,

@@ -9,12 +9,14 @@ interface LapsePanelProps {
   /** Still open: nothing proved of it counts before it is closed. */
   staysOpen: boolean;
   changed: boolean;
+  /** The form came back: it says beside a field what is to be put right. */
+  refused: boolean;
   /** Take the focus: somebody has just asked for it. Changes with each answer. */
   focus: string | null;
 }
 
 /** What an opening makes lapse, the HOLD first. It stands beside the form before the opening counts. */
-export function LapsePanel({ lapses, staysOpen, changed, focus }: LapsePanelProps) {
+export function LapsePanel({ lapses, staysOpen, changed, refused, focus }: LapsePanelProps) {
   const heading = useRef<HTMLHeadingElement>(null);
   useEffect(() => {
     if (focus) heading.current?.focus();
@@ -28,9 +30,11 @@ export function LapsePanel({ lapses, staysOpen, changed, focus }: LapsePanelProp
         <Shown lapses={lapses} staysOpen={staysOpen} />
       ) : (
         <p className="mt-2 max-w-[60ch] text-ink-2">
-          {changed
-            ? "You have changed the choice. Look again before you confirm."
-            : "Choose what was opened, then look: the items that lapse, the gates that fall and whether a GO turns into HOLD stand here before anything is recorded."}
+          {refused
+            ? "Nothing was looked up or recorded: put right what is marked in the form, then look again."
+            : changed
+              ? "You have changed the choice. Look again before you confirm."
+              : "Choose what was opened, then look: the items that lapse, the gates that fall and whether a GO turns into HOLD stand here before anything is recorded."}
         </p>
       )}
     </section>

@@ -61,7 +61,7 @@ export function MakeLooseEnd({ view, commandId, reply }: MakeLooseEndProps) {
           <Select
             {...field("askedBy")}
             label="Does an item of the board ask for it?"
-            hint="Then making it and putting it back are no openings. Otherwise each is an opening of its system."
+            hint="If one does, taking it off and putting it back are not openings. If none does, each is an opening of its system."
             options={[{ value: "", label: "no: it counts as an opening" }, ...view.asking]}
             className="w-full"
           />

@@ -1,4 +1,4 @@
-import { useState } from "react";
+import { useEffect, useRef, useState } from "react";
 import { Form, useNavigation } from "react-router";
 import { ChoiceGroup } from "#app/components/forms/ChoiceGroup";
 import { FormFaults } from "#app/components/forms/FormFaults";
@@ -26,10 +26,19 @@ export function OpeningForm({ view, commandId, reply }: OpeningFormProps) {
   const stale = changed !== null && changed === (open?.stamp ?? "");
   const shown = stale ? null : (open?.chosen ?? null);
   const busy = useNavigation().state === "submitting";
+  const form = useRef<HTMLFormElement>(null);
+  const refused = reply?.form === "open" && Object.keys(reply.errors).length > 0 ? reply : null;
+  useEffect(() => {
+    // The form is long and its acts stand in the foot: without this the fault stays out of sight.
+    const fault = refused && form.current?.querySelector(".field-errors, [role=alert]");
+    fault?.closest("fieldset, .field")?.querySelector<HTMLElement>("input, textarea")?.focus({ preventScroll: true });
+    fault?.scrollIntoView({ block: "center" });
+  }, [refused]);
   return (
     <>
       <div className="grid wide:grid-cols-[minmax(0,1fr)_520px]">
         <Form
+          ref={form}
           method="post"
           id="open"
           className="flex min-w-0 flex-col gap-4 px-4 py-5 tablet:px-6"
@@ -77,6 +86,7 @@ export function OpeningForm({ view, commandId, reply }: OpeningFormProps) {
           lapses={shown?.lapses ?? null}
           staysOpen={shown ? !shown.closed : false}
           changed={stale}
+          refused={refused !== null}
           focus={open?.asked === "preview" && faults.length === 0 ? open.stamp : null}
         />
       </div>

@@ -19,7 +19,7 @@ interface NewInstallPageProps {
 export function NewInstallPage({ page, person, about, fill, side, foot, children }: NewInstallPageProps) {
   return (
     <div className="page">
-      <Strip homeHref="/hangar" navLabel="Bladecount" links={LINKS} person={person} />
+      <Strip homeHref="/hangar" navLabel="Everywhere" links={LINKS} person={person} />
       <main id="main" className="flex flex-col">
         <TitlePipe title="New install" state={`page ${page} of 3: ${about}`} fill={fill} />
         {side ? (
@@ -39,6 +39,7 @@ export function NewInstallPage({ page, person, about, fill, side, foot, children
 }
 
 const LINKS = [
-  { label: "Hangar", href: "/hangar", current: true },
+  { label: "Hangar", href: "/hangar" },
+  { label: "New install", href: "/installs/new", current: true },
   { label: "Account", href: "/account" },
 ];

@@ -31,14 +31,17 @@ export function RollCall({ title, entries, empty, stations, gear, pusher, wind }
       </h2>
       <ul className="mt-3">
         {entries.map((entry) => (
-          <li key={entry.key} className="grid grid-cols-[44px_minmax(0,1fr)_auto] items-center gap-x-3 border-t border-line py-2">
+          <li
+            key={entry.key}
+            className="grid grid-cols-[44px_minmax(0,1fr)] items-center gap-x-3 border-t border-line py-2 tablet:grid-cols-[44px_minmax(0,1fr)_auto]"
+          >
             <StationMark letter={entry.letter} answer={entry.answer} />
             <span>
               <b className="block">{entry.role}</b>
               {entry.name}
               {entry.you && ", you"}
             </span>
-            <span className="text-right leading-tight">
+            <span className="leading-tight max-tablet:col-start-2 tablet:text-right">
               <b className={entry.answer === "go" ? "text-primer-ink" : entry.answer === "no-go" ? "text-stop-ink" : undefined}>
                 {entry.word}
               </b>
@@ -66,7 +69,7 @@ export function StationMark({ letter, answer, large = false }: { letter: string;
     <svg className={cx("station flex-none", `station-${answer}`)} viewBox="-28 -28 56 56" width={size} height={size} aria-hidden="true">
       {answer === "none" && <circle className="station-ring" r="24.5" />}
       <circle r="19" />
-      <text textAnchor="middle" y="6.5">
+      <text className="station-letter" textAnchor="middle" y="6.5">
         {letter}
       </text>
       {answer === "no-go" && <path className="spade" style={{ strokeWidth: 5 }} d="M-17 17 17-17" />}

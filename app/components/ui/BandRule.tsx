@@ -26,7 +26,12 @@ export function BandRule({ min, max, value, label, scale = bandScale(min, max, v
   const at = value === null ? null : x(Math.min(to, Math.max(from, value)));
   const fine = Array.from({ length: Math.round(((to - from) / step) * 5) + 1 }, (_, i) => i);
   return (
-    <svg className={`block h-auto w-full max-w-[360px] ${className ?? ""}`} viewBox={`0 0 ${WIDTH} 76`} role="img" aria-label={label}>
+    <svg
+      className={`block h-auto w-full max-w-[360px] overflow-visible ${className ?? ""}`}
+      viewBox={`0 0 ${WIDTH} 76`}
+      role="img"
+      aria-label={label}
+    >
       <rect className="rule-band" x={bandFrom} y="28" width={Math.max(0, r(bandTo - bandFrom))} height="16" />
       <path className="rule-end" d={`${min === null ? "" : `M${bandFrom} 24V48`}${max === null ? "" : `M${bandTo} 24V48`}`} />
       <path className="rule-base" d={`M6 44H${WIDTH - 6}`} />

@@ -1,4 +1,4 @@
-import type { ReactNode } from "react";
+import { type ReactNode, useEffect, useRef } from "react";
 import { Anchor } from "#app/components/ui/Anchor";
 import { Mark } from "#app/components/ui/Mark";
 
@@ -35,6 +35,16 @@ interface StripProps {
 /** The top strip: the registration as painted on the side, then words. On a phone the words scroll sideways. */
 export function Strip(props: StripProps) {
   const { homeHref, registration, ship, navLabel, links, person, role, saved, network, children } = props;
+  const words = useRef<HTMLElement>(null);
+  const here = links.find((link) => link.current)?.href;
+  useEffect(() => {
+    const strip = words.current;
+    const place = here ? strip?.querySelector<HTMLElement>("[aria-current]") : null;
+    // At once, without a movement: the page has just come.
+    if (!strip || !place) return;
+    const [frame, word] = [strip.getBoundingClientRect(), place.getBoundingClientRect()];
+    strip.scrollLeft += word.left + word.width / 2 - (frame.left + frame.width / 2);
+  }, [here]);
   return (
     <header className="strip">
       <Anchor className="strip-home" href={homeHref}>
@@ -48,7 +58,7 @@ export function Strip(props: StripProps) {
         )}{" "}
         {ship && <span className="strip-ship">{ship}</span>}
       </Anchor>
-      <nav aria-label={navLabel}>
+      <nav ref={words} aria-label={navLabel}>
         <ul>
           {links.map((link) => (
             <li key={link.href}>

@@ -16,6 +16,16 @@ export async function recordLines(reader: Reader, installId: string, { after = 0
   return rows.map(({ body, prev, hash }) => ({ event: parseEvent(JSON.parse(body)), prev, hash }));
 }
 
+/** The same lines as they were hashed, for the export: the text of each event, and its hash. */
+export function recordBodies(reader: Reader, installId: string): Promise<{ body: string; hash: string }[]> {
+  return reader
+    .select({ body: events.body, hash: events.hash })
+    .from(events)
+    .where(eq(events.installId, installId))
+    .orderBy(asc(events.seq))
+    .all();
+}
+
 /** Number, hash and instant of the newest line. */
 export async function recordHead(reader: Reader, installId: string): Promise<{ seq: number; hash: string; recorded: number }> {
   const [row] = await reader

@@ -1,5 +1,5 @@
 // The demo's calendar: its past is told in days before today and in minutes before now, on the clocks of the place.
-import { instantOfLocal, localOf } from "#app/lib/schemas/local-time";
+import { instantOfLocal, localOf } from "#app/lib/gates/local-time";
 
 const DAY = 86_400_000;
 

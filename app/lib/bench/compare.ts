@@ -16,6 +16,9 @@ export function atMost(value: number, most: number): boolean {
   return value <= most + ROUNDING * Math.abs(most);
 }
 
+/** Whether two figures in the same unit are one and the same, but for rounding. */
+export const alike = (a: number, b: number): boolean => Math.abs(a - b) <= ROUNDING * Math.max(Math.abs(a), Math.abs(b));
+
 /** Guards the domain of a formula: throws RangeError unless every value is a finite number above zero. */
 export function needPositive(values: Record<string, number>): void {
   for (const [name, value] of Object.entries(values)) {

@@ -7,7 +7,7 @@ import { amount, check, MOST_ROWS, notChosen, type Outcome, tooMany, words } fro
 import { atMost } from "#app/lib/bench/compare";
 import { LOSS_LIMIT, loss, TEST_PRESSURE } from "#app/lib/bench/compression";
 import { amountField, choiceField, type SheetForm, textField } from "#app/lib/bench/form";
-import { ceilText, figure, type SheetDef, type SheetResult } from "#app/lib/bench/sheet-result";
+import { ceilText, figure, type SheetDef, type SheetResult, use } from "#app/lib/bench/sheet-result";
 import { toSI } from "#app/lib/units/convert";
 
 const LEAKS = {
@@ -155,4 +155,10 @@ function compute(inputs: unknown): Outcome<SheetResult> {
   };
 }
 
-export const COMPRESSION: SheetDef = { version: "1", takes: ["cylinders"], form, compute };
+export const COMPRESSION: SheetDef = {
+  version: "1",
+  takes: ["cylinders"],
+  uses: ({ count }) => [use("number of cylinders", count, "cylinders")],
+  form,
+  compute,
+};

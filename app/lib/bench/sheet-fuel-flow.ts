@@ -18,7 +18,7 @@ import {
   weighedVolume,
 } from "#app/lib/bench/fuel-flow";
 import { FUEL_FLOW_FIELD as FIELD, FUEL_FLOW_FORM } from "#app/lib/bench/fuel-flow-form";
-import { ceilText, figure, floorText, type SheetDef, type SheetFigure, type SheetResult } from "#app/lib/bench/sheet-result";
+import { ceilText, figure, floorText, type SheetDef, type SheetFigure, type SheetResult, use } from "#app/lib/bench/sheet-result";
 
 const caught = z
   .object({ volume: amount(FIELD.volume).optional(), mass: amount(FIELD.mass).optional(), seconds: amount(FIELD.seconds) })
@@ -176,4 +176,14 @@ function fromForm(flat: Record<string, unknown>) {
   return { inputs: { ...rest, pumps: pumps.map(({ name, catches }) => ({ name, catches })) }, locate };
 }
 
-export const FUEL_FLOW: SheetDef = { version: "1", takes: ["takeoffFlow", "ratedPower"], form: FUEL_FLOW_FORM, compute, fromForm };
+export const FUEL_FLOW: SheetDef = {
+  version: "1",
+  takes: ["takeoffFlow", "ratedPower"],
+  uses: ({ takeoffFlow, power }) => [
+    use("take-off fuel flow", takeoffFlow, "takeoffFlow"),
+    ...(takeoffFlow === undefined ? [use("rated power", power, "ratedPower")] : []),
+  ],
+  form: FUEL_FLOW_FORM,
+  compute,
+  fromForm,
+};

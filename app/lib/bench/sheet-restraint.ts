@@ -8,7 +8,7 @@ import { amount, check, MOST_ROWS, notChosen, type Outcome, tooMany, words } fro
 import { atMost } from "#app/lib/bench/compare";
 import { capRotation, type Line, lines, rightingMoment, type Strap, slopePull, wheelHolding } from "#app/lib/bench/restraint";
 import { RESTRAINT_FIELD as F, PRESSURE_ALTITUDE, RESTRAINT_FORM } from "#app/lib/bench/restraint-form";
-import { figure, type SheetDef, type SheetFigure, type SheetResult } from "#app/lib/bench/sheet-result";
+import { figure, type SheetDef, type SheetFigure, type SheetResult, use } from "#app/lib/bench/sheet-result";
 import { inducedVelocity, powerAt, staticThrust, thrustAt } from "#app/lib/bench/thrust";
 import { fromSI, toSI } from "#app/lib/units/convert";
 
@@ -191,6 +191,13 @@ function fromForm({ pressure, ...rest }: Record<string, unknown>) {
 
 export const RESTRAINT: SheetDef = {
   version: "1",
+  uses: (inputs) => [
+    use("rated power", inputs.power, "ratedPower"),
+    use("rated or static speed", inputs.reference, "staticRpmMin", "ratedRpm"),
+    use("propeller diameter", inputs.diameter, "propDiameter"),
+    use("reduction ratio", inputs.reduction, "reductionRatio"),
+    use("mass", inputs.mass, "mass"),
+  ],
   takes: ["ratedPower", "ratedRpm", "staticRpmMin", "propDiameter", "reductionRatio", "mass"],
   form: RESTRAINT_FORM,
   compute,

@@ -24,11 +24,27 @@ export interface SheetResult {
   caution: string;
 }
 
+/** One input of a saved sheet and the values of the install that it may be, SI; `used` undefined = left empty. */
+export interface ValueUse {
+  keys: ValueKey[];
+  used: number | undefined;
+  /** "mass" in "did not use the install's mass". */
+  label: string;
+}
+
+export const use = (label: string, input: unknown, ...keys: ValueKey[]): ValueUse => ({
+  keys,
+  used: typeof input === "number" ? input : undefined,
+  label,
+});
+
 /** One kind of sheet: everything the registry needs of it. */
 export interface SheetDef {
   /** Raised when the same inputs would be judged otherwise. */
   version: string;
   takes: ValueKey[];
+  /** Which of its inputs speak of the install: each must be what the install says, where it says something. */
+  uses: (inputs: Record<string, unknown>) => ValueUse[];
   form: SheetForm;
   compute: (inputs: unknown) => Outcome<SheetResult>;
   /** The flat form (groups as lists of rows) as inputs, and where a path in the inputs is on the form. */

@@ -8,7 +8,7 @@ import { type Parse, readRows } from "#app/lib/bench/read-form";
 import { COMPRESSION } from "#app/lib/bench/sheet-compression";
 import { FUEL_FLOW } from "#app/lib/bench/sheet-fuel-flow";
 import { RESTRAINT } from "#app/lib/bench/sheet-restraint";
-import type { SheetDef, SheetResult } from "#app/lib/bench/sheet-result";
+import type { SheetDef, SheetResult, ValueUse } from "#app/lib/bench/sheet-result";
 import type { SheetKey, Traits, ValueKey } from "#app/lib/template/types";
 
 const SHEETS: Record<SheetKey, SheetDef> = { "fuel-flow": FUEL_FLOW, restraint: RESTRAINT, compression: COMPRESSION };
@@ -27,6 +27,9 @@ export const SHEET_FORMS: Record<SheetKey, SheetForm> = bySheet((sheet) => sheet
 export function valuesTaken(sheet: SheetKey): ValueKey[] {
   return [...SHEETS[sheet].takes];
 }
+
+/** What a saved sheet computed with in place of the install's values, so that it can be held against them. */
+export const valuesUsed = (sheet: SheetKey, inputs: Record<string, unknown>): ValueUse[] => SHEETS[sheet].uses(inputs);
 
 /** Inputs that the install's traits decide, not the person: they go over whatever was typed or saved. */
 export function traitInputs(sheet: SheetKey, traits: Pick<Traits, "delivery" | "gear">): Record<string, string> {

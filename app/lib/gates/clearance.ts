@@ -1,29 +1,25 @@
-/** "Cleared to N rpm": the least of plan, redline, limiting findings and restraint; it names which one binds. */
+/** "Cleared to N rpm": the least of plan, redline, findings and restraint; it names which one binds. */
 import { restraintCap } from "#app/lib/gates/evidence";
 import type { Facts } from "#app/lib/gates/facts";
-import type { Clearance, ClearanceLimit, ItemResult } from "#app/lib/gates/result";
+import type { Clearance, ClearanceLimit } from "#app/lib/gates/result";
 
 /**
  * @param planned highest crankshaft speed of the plan, 1/s, null = none yet (counts as 0).
  * @param required ids of the gates whose restraint sheets count; a sheet that does not stand allows 0.
  */
-export function clearanceOf(
-  facts: Facts,
-  planned: number | null,
-  required: string[],
-  items: Map<string, ItemResult>,
-  planLabel: string,
-): Clearance {
+export function clearanceOf(facts: Facts, planned: number | null, required: string[], planLabel: string): Clearance {
   const limits: ClearanceLimit[] = [{ kind: "plan", id: "plan", label: planLabel, rpm: planned ?? 0 }];
   const redline = facts.values.get("redline");
   limits.push({ kind: "redline", id: "redline", label: redline?.value ? "redline" : "redline, not entered", rpm: redline?.value ?? 0 });
   for (const f of facts.snapshot.findings)
-    if (f.severity === "limiting" && !f.closed) limits.push({ kind: "finding", id: f.id, label: `finding: ${f.words}`, rpm: f.cap ?? 0 });
+    if (f.severity !== "watch" && !f.closed)
+      // A grounding finding allows nothing: sharpened from a limiting one it must not raise the figure.
+      limits.push({ kind: "finding", id: f.id, label: `finding: ${f.words}`, rpm: f.severity === "limiting" ? (f.cap ?? 0) : 0 });
   for (const gate of required)
-    for (const item of facts.itemsOf.get(gate) ?? []) {
-      const cap = restraintCap(facts, item);
+    for (const { item, current, result } of facts.gateFacts.get(gate)?.items ?? []) {
+      const cap = restraintCap(facts, item, current);
       if (cap === undefined) continue;
-      const stands = items.get(item.id)?.stands ?? false;
+      const stands = result?.stands ?? false;
       limits.push({
         kind: "restraint",
         id: item.id,

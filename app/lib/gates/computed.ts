@@ -1,11 +1,19 @@
 /** Items that nobody ticks: extinguishers, loose ends, the engine log, and the release's own conditions. Judged at `facts.at`. */
-import { type Facts, isComputed } from "#app/lib/gates/facts";
+import { allItems, type Facts } from "#app/lib/gates/facts";
 import type { Blocker, BlockerCode, ItemResult } from "#app/lib/gates/result";
 import type { Gate, Instant, Item, LooseEnd, Role, SystemKey } from "#app/lib/gates/snapshot";
 import { blocker, count, ownerOf } from "#app/lib/gates/who";
+import { isComputed } from "#app/lib/gates/work-facts";
 
 /** A reason why a computed item does not stand. */
-export type Lack = { code: BlockerCode; sentence: string; roles: [Role, ...Role[]]; page: Blocker["link"]["page"]; id?: string | null };
+export type Lack = {
+  code: BlockerCode;
+  sentence: string;
+  roles: [Role, ...Role[]];
+  barred?: string[];
+  page: Blocker["link"]["page"];
+  id?: string | null;
+};
 type Judged = { no: Lack[]; until: Instant | null };
 
 /** @returns the state of a computed item: `done` or `to do`, with its blockers and the instant at which time alone ends it. */
@@ -18,7 +26,7 @@ export function computedItem(facts: Facts, gate: Gate, item: Item): ItemResult {
       subject: ["item", item.id],
       title: item.words,
       sentence: f.sentence,
-      owner: ownerOf(facts, f.roles),
+      owner: ownerOf(facts, f.roles, f.barred),
       page: f.page,
       id: f.id ?? null,
       item: item.id,
@@ -68,13 +76,24 @@ function looseEnds(facts: Facts): Judged {
     .map(
       (l): Lack => ({
         code: "loose-end",
-        sentence: `Loose end not restored: ${l.what}. Restore it, and have a second person confirm it.`,
-        roles: ["builder", "inspector"],
+        ...looseEndSaid(l),
         page: "loose-ends",
         id: l.id,
       }),
     );
   return { no, until: null };
+}
+
+/** What to do about the first of `all` loose ends, and who may. */
+function looseEndSaid(l: LooseEnd, all = 1): Pick<Lack, "sentence" | "roles" | "barred"> {
+  const more = all > 1 ? `${count(all, "loose end")}, first: ` : "Loose end ";
+  return l.restored
+    ? {
+        sentence: `${more}restored but not seen: ${l.what}. A second person must look and confirm.`,
+        roles: ["builder", "inspector", "lead"],
+        barred: [l.restored.by],
+      }
+    : { sentence: `${more}not restored: ${l.what}. Restore it, and have a second person confirm it.`, roles: ["builder", "inspector"] };
 }
 
 /** An inspector accepted the loose end for the rung. From its due rung on that counts no more: it must be restored. */
@@ -117,16 +136,16 @@ export function releaseRecord(facts: Facts): Lack[] {
   if (findings.length)
     no.push({
       code: "finding-open",
-      sentence: `${count(findings.length, "finding")} not closed: ${findings[0]?.words}.`,
-      roles: ["inspector"],
+      sentence: `${count(findings.length, "finding")} not closed: ${findings[0]?.words}. ${findings[0]?.fixed ? "An inspector must look and close it." : "A builder fixes it and says how, then an inspector closes it."}`,
+      roles: [findings[0]?.fixed ? "inspector" : "builder"],
+      barred: findings[0]?.fixed ? [findings[0].fixed.by] : [],
       page: "findings",
     });
   const loose = facts.snapshot.looseEnds.filter((l) => !l.confirmed);
-  if (loose.length)
+  if (loose[0])
     no.push({
       code: "loose-end",
-      sentence: `${count(loose.length, "loose end")} not restored: ${loose[0]?.what}.`,
-      roles: ["builder"],
+      ...looseEndSaid(loose[0], loose.length),
       page: "loose-ends",
     });
   const values = facts.snapshot.values.filter((v) => (v.limit || v.card) && (v.value === null || v.source === null));
@@ -137,7 +156,7 @@ export function releaseRecord(facts: Facts): Lack[] {
       roles: ["lead", "builder"],
       page: "set-up",
     });
-  const killers = [...facts.items.values()].filter((i) => i.killer && !isComputed(i) && i.parts.some(defaultBand));
+  const killers = allItems(facts).filter((i) => i.killer && !isComputed(i) && i.parts.some(defaultBand));
   if (killers.length)
     no.push({
       code: "unconfirmed",

@@ -3,7 +3,7 @@
  * Pure: no I/O, clock, chance or hashing. The server runs it inside the transaction of every write that depends on it;
  * screens, mails, the API and the offline tablet use the same function.
  */
-import { type Facts, gatherFacts } from "#app/lib/gates/facts";
+import { type Facts, gatherFacts, itemOf } from "#app/lib/gates/facts";
 import { gateLimits, inOrder, newestWork, plannedNext, prerequisites } from "#app/lib/gates/gate-limits";
 import { absentGate, evaluateGate, hindrances } from "#app/lib/gates/gates";
 import { evaluateItem, type GateLimits } from "#app/lib/gates/items";
@@ -11,8 +11,9 @@ import { evaluateRelease } from "#app/lib/gates/release";
 import type { BoardResult, GateResult, ItemResult, RunResult } from "#app/lib/gates/result";
 import { RULES_VERSION } from "#app/lib/gates/rules-version";
 import { evaluateRun } from "#app/lib/gates/runs";
-import type { Gate, Instant, Item, Opening, Snapshot } from "#app/lib/gates/snapshot";
+import type { Instant, Opening, Snapshot } from "#app/lib/gates/snapshot";
 import { blocker, ownerOf } from "#app/lib/gates/who";
+import type { GateFacts, ItemFacts } from "#app/lib/gates/work-facts";
 
 /** A board and what it was worked out from; verdicts on acts take this. */
 export interface Evaluation {
@@ -34,10 +35,10 @@ export function evaluateBoard(snapshot: Snapshot, at: Instant): BoardResult {
 export function evaluate(snapshot: Snapshot, at: Instant): Evaluation {
   const facts = gatherFacts(snapshot, at);
   const waitsFor = prerequisites(facts);
-  const items = evaluateItems(facts, waitsFor);
-  const gates = evaluateGates(facts, items, waitsFor);
+  evaluateItems(facts, waitsFor);
+  const gates = evaluateGates(facts, waitsFor);
 
-  const board = { facts, items, gates };
+  const board = { facts, gates };
   const runs: RunResult[] = [];
   for (const run of facts.runs.values()) {
     const rung = facts.rungs.find((r) => r.key === run.run.rung);
@@ -46,7 +47,7 @@ export function evaluate(snapshot: Snapshot, at: Instant): Evaluation {
   let next: RunResult | null = null;
   if (facts.nextRung) {
     const planned = plannedNext(facts).map((r) => runs.find((x) => x.id === r.run.id) as RunResult);
-    next = planned.find((r) => r.state === "running" || r.go) ?? planned[0] ?? evaluateRun(board, facts.nextRung, null);
+    next = planned.find((r) => r.state === "running" || r.go || r.goLost) ?? planned[0] ?? evaluateRun(board, facts.nextRung, null);
     if (next.id === null) runs.unshift(next);
   }
 
@@ -57,7 +58,7 @@ export function evaluate(snapshot: Snapshot, at: Instant): Evaluation {
     result: {
       at,
       rulesVersion: RULES_VERSION,
-      items: Object.fromEntries(items),
+      items: itemResults(facts),
       gates: Object.fromEntries(gates),
       rungs: Object.fromEntries(
         facts.rungs.map((r) => [r.key, { key: r.key, settled: facts.settledBy.has(r.key), by: facts.settledBy.get(r.key) ?? null }]),
@@ -65,73 +66,68 @@ export function evaluate(snapshot: Snapshot, at: Instant): Evaluation {
       runs,
       nextRung: facts.nextRung?.key ?? null,
       next,
-      release: evaluateRelease(facts, items, gates),
+      release: evaluateRelease(facts, gates),
     },
   };
 }
 
-function evaluateItems(facts: Facts, waitsFor: Map<string, string[]>): Map<string, ItemResult> {
+/** Judges every item, each after those that it follows, and leaves the answer with its facts. */
+function evaluateItems(facts: Facts, waitsFor: Map<string, string[]>): void {
   const work = new Map<string, Instant | null>();
   const newest = (gate: string) => {
     if (!work.has(gate)) work.set(gate, newestWork(facts, gate));
     return work.get(gate) as Instant | null;
   };
   const limits = new Map<string, GateLimits>();
-  for (const gate of facts.gates.values()) limits.set(gate.id, gateLimits(facts, gate, waitsFor.get(gate.id) ?? [], newest));
-
-  const results = new Map<string, ItemResult>();
-  const judge = (gate: Gate, item: Item) =>
-    results.set(item.id, evaluateItem({ facts, gate, limits: limits.get(gate.id) as GateLimits, results }, item));
   // Most items follow nothing and need no order; the others come after what they follow.
   const following: string[] = [];
-  for (const gate of facts.gates.values())
-    for (const item of facts.itemsOf.get(gate.id) ?? [])
-      if (item.follows.length) following.push(item.id);
-      else judge(gate, item);
-  const { order, circle } = inOrder(following, (id) => facts.items.get(id)?.follows ?? []);
+  for (const [id, of] of facts.gateFacts) {
+    const own = gateLimits(facts, of.gate, waitsFor.get(id) ?? [], newest);
+    limits.set(id, own);
+    for (const item of of.items)
+      if (item.item.follows.length) following.push(item.item.id);
+      else item.result = evaluateItem(facts, own, item);
+  }
+  const { order, circle } = inOrder(following, (id) => itemOf(facts, id)?.follows ?? []);
   for (const id of [...order, ...circle]) {
-    const item = facts.items.get(id) as Item;
-    judge(facts.gates.get(item.gate) as Gate, item);
+    const item = facts.itemFacts.get(id) as ItemFacts;
+    item.result = evaluateItem(facts, limits.get(item.of.gate.id) as GateLimits, item);
   }
   // In a circle one item is judged before another that it follows has a result, and falls with it; the other must fall too.
   for (const id of circle) {
-    const r = results.get(id);
-    if (r?.stands)
-      results.set(id, {
-        ...r,
-        stands: false,
-        until: null,
-        state: "lapsed",
-        blockers: [
-          blocker({
-            code: "follows",
-            subject: ["item", id],
-            title: facts.items.get(id)?.words ?? "",
-            sentence: "Items follow each other in a circle. A lead must take one step of it away in the template.",
-            owner: ownerOf(facts, ["lead"]),
-            page: "gate",
-            id: facts.items.get(id)?.gate ?? null,
-            item: id,
-          }),
-        ],
-      });
+    const { item, result } = facts.itemFacts.get(id) as ItemFacts;
+    if (!result?.stands) continue;
+    const inCircle = blocker({
+      code: "follows",
+      subject: ["item", id],
+      title: item.words,
+      sentence: "Items follow each other in a circle. A lead must take one step of it away in the template.",
+      owner: ownerOf(facts, ["lead"]),
+      page: "gate",
+      id: item.gate,
+      item: id,
+    });
+    (facts.itemFacts.get(id) as ItemFacts).result = { ...result, stands: false, until: null, state: "lapsed", blockers: [inCircle] };
   }
-  return results;
 }
 
-function evaluateGates(facts: Facts, items: Map<string, ItemResult>, waitsFor: Map<string, string[]>): Map<string, GateResult> {
+function evaluateGates(facts: Facts, waitsFor: Map<string, string[]>): Map<string, GateResult> {
   const hinder = hindrances(facts);
   const results = new Map<string, GateResult>();
   const { order, circle } = inOrder([...facts.gates.keys()], (id) => waitsFor.get(id) ?? []);
-  const judge = (id: string, inCircle: boolean) => {
-    const gate = facts.gates.get(id) as Gate;
-    const own = (facts.itemsOf.get(id) ?? []).map((i) => items.get(i.id) as ItemResult);
-    results.set(id, evaluateGate(facts, gate, own, waitsFor.get(id) ?? [], results, hinder, inCircle));
-  };
+  const judge = (id: string, inCircle: boolean) =>
+    results.set(id, evaluateGate(facts, facts.gateFacts.get(id) as GateFacts, waitsFor.get(id) ?? [], results, hinder, inCircle));
   for (const id of order) judge(id, false);
   for (const id of circle) judge(id, true);
   const all = new Map<string, GateResult>();
   for (const gate of facts.snapshot.gates) all.set(gate.id, results.get(gate.id) ?? absentGate(gate));
+  return all;
+}
+
+/** Results by item id. */
+function itemResults(facts: Facts): Record<string, ItemResult> {
+  const all: Record<string, ItemResult> = {};
+  for (const [id, item] of facts.itemFacts) all[id] = item.result as ItemResult;
   return all;
 }
 

@@ -2,10 +2,11 @@
  * Rule 1 of a proof: does its evidence meet the item's present criterion?
  * Sheets are computed again, never trusted; nothing meets a criterion without its number.
  */
-import { atLeast, atMost } from "#app/lib/bench/compare";
+
+import { alike, atLeast, atMost } from "#app/lib/bench/compare";
 import { burstErrors, crankSummary } from "#app/lib/bench/crank";
-import { computeSheet, SHEET_VERSIONS, traitInputs, valuesTaken } from "#app/lib/bench/sheet";
-import { currentProof, type Facts } from "#app/lib/gates/facts";
+import { computeSheet, SHEET_VERSIONS, traitInputs, valuesTaken, valuesUsed } from "#app/lib/bench/sheet";
+import { type Facts, itemOf, proofsOf } from "#app/lib/gates/facts";
 import type { BlockerCode } from "#app/lib/gates/result";
 import type { Evidence, Item, Proof } from "#app/lib/gates/snapshot";
 import type { Criterion, Part, SheetKey, ValueKey } from "#app/lib/template/types";
@@ -19,22 +20,25 @@ const YES: Met = { ok: true };
 /** The band in force: its ends may come from values of the install. Null = a number is missing. SI, inclusive. */
 export function bandInForce(criterion: Criterion, valueOfInstall: (key: ValueKey) => number | null): Band | null {
   const band: Band = { min: criterion.band?.min ?? null, max: criterion.band?.max ?? null };
-  for (const limit of [criterion.limit, criterion.otherLimit]) {
-    if (!limit) continue;
-    const value = valueOfInstall(limit.key);
-    if (value === null) return null;
-    // Where the item has a number of its own at that end, the narrower of the two counts.
-    if (limit.end === "min") band.min = band.min === null ? value : Math.max(band.min, value);
-    else band.max = band.max === null ? value : Math.min(band.max, value);
-  }
+  if (criterion.limit || criterion.otherLimit)
+    for (const limit of [criterion.limit, criterion.otherLimit]) {
+      if (!limit) continue;
+      const value = valueOfInstall(limit.key);
+      if (value === null) return null;
+      // Where the item has a number of its own at that end, the narrower of the two counts.
+      if (limit.end === "min") band.min = band.min === null ? value : Math.max(band.min, value);
+      else band.max = band.max === null ? value : Math.min(band.max, value);
+    }
   return band.min === null && band.max === null ? null : band;
 }
+
+const bandNow = (facts: Facts, criterion: Criterion): Band | null => bandInForce(criterion, (key) => facts.values.get(key)?.value ?? null);
 
 /** What must be entered before anyone can prove this part: null when nothing is missing. */
 export function numberMissing(facts: Facts, part: Part): string | null {
   if (part.kind === "tick") return part.reference && !part.reference.text ? part.reference.asks : null;
   if (part.kind !== "measure" && part.kind !== "torque") return null;
-  return bandInForce(part.criterion, (key) => facts.values.get(key)?.value ?? null) ? null : part.label;
+  return bandNow(facts, part.criterion) ? null : part.label;
 }
 
 /** @returns whether the proof's evidence meets every part of the item, and the first part that it does not meet. */
@@ -47,9 +51,12 @@ export function evidenceMeets(facts: Facts, item: Item, proof: Proof): Met {
 }
 
 function partMet(facts: Facts, item: Item, part: Part, given: Evidence | null, proof: Proof): Met {
-  const missing = numberMissing(facts, part);
-  if (missing) return no("number-missing", `A number is missing: ${missing}. Enter it with where it was read.`);
   if (part.kind === "computed") return YES;
+  const band = part.kind === "measure" || part.kind === "torque" ? bandNow(facts, part.criterion) : null;
+  if (band === null) {
+    const missing = numberMissing(facts, part);
+    if (missing) return no("number-missing", `A number is missing: ${missing}. Enter it with where it was read.`);
+  }
   const optional = (part.kind === "photo" || part.kind === "reading") && part.optional;
   if (given === null) return optional ? YES : no("evidence-missing", `${evidenceName(part)} was not recorded. Prove it again with it.`);
   if (given.kind !== part.kind) return no("evidence-missing", `The item now asks for ${evidenceName(part).toLowerCase()}. Prove it again.`);
@@ -58,7 +65,7 @@ function partMet(facts: Facts, item: Item, part: Part, given: Evidence | null, p
     case "tick":
       return YES;
     case "measure":
-      return given.kind === "measure" ? inBand(facts, part.criterion, part.places.length, given.values, part.label) : YES;
+      return given.kind === "measure" ? inBand(band as Band, part.places.length, given.values, part.label) : YES;
     case "torque": {
       if (given.kind !== "torque") return YES;
       if (!proof.tools.length) return no("evidence-missing", "No wrench is named. Prove it again with the wrench from the crib.");
@@ -66,7 +73,7 @@ function partMet(facts: Facts, item: Item, part: Part, given: Evidence | null, p
         return no("tally-unequal", `${given.count} fasteners torqued, ${part.count} expected. Torque the rest.`);
       if (!(Number.isInteger(given.count) && given.count > 0))
         return no("evidence-missing", "How many fasteners were torqued was not recorded.");
-      return inBand(facts, part.criterion, part.places.length, given.values, part.label);
+      return inBand(band as Band, part.places.length, given.values, part.label);
     }
     case "tally":
       return given.kind === "tally" ? tallyMet(facts, item, part, given) : YES;
@@ -87,8 +94,7 @@ function partMet(facts: Facts, item: Item, part: Part, given: Evidence | null, p
   }
 }
 
-function inBand(facts: Facts, criterion: Criterion, places: number, values: number[], label: string): Met {
-  const band = bandInForce(criterion, (key) => facts.values.get(key)?.value ?? null) as Band;
+function inBand(band: Band, places: number, values: number[], label: string): Met {
   if (values.length !== places || !values.every(Number.isFinite)) return no("evidence-missing", `A value is missing: ${label}.`);
   // With room for the last binary digit: a limit entered in one unit and a reading in another must meet at the boundary.
   const out = values.some((v) => (band.min !== null && !atLeast(v, band.min)) || (band.max !== null && !atMost(v, band.max)));
@@ -120,16 +126,19 @@ function tallyMet(facts: Facts, item: Item, part: TallyPart, given: TallyEvidenc
       : YES;
   }
   if (!given.places.every((p) => whole(p.in))) return no("evidence-missing", "A count is missing.");
-  const step = part.of ? facts.proofsOf.get(part.of)?.at(-1) : undefined;
+  const step = part.of ? proofsOf(facts, part.of).at(-1) : undefined;
   const outs = step?.evidence.find((e): e is TallyEvidence => e?.kind === "tally");
   // A count that was found wrong is no measure for another one.
   if (!step || step.withdrawn || step.state !== "done" || !outs)
     return no(
       "tally-unequal",
-      `What was taken out has no count${part.of ? ` (${facts.items.get(part.of)?.words ?? item.words})` : ""}. Count that first.`,
+      `What was taken out has no count${part.of ? ` (${itemOf(facts, part.of)?.words ?? item.words})` : ""}. Count that first.`,
     );
-  const wanted = new Map(outs.places.map((p) => [p.place, p.out]));
-  const same = given.places.length === outs.places.length && given.places.every((p) => wanted.get(p.place) === p.in);
+  // As lists, not by name: a place named twice must not answer for one that is missing.
+  const listed = (list: { place: string; n: number | null }[]) => list.map((p) => `${p.place}\u0001${p.n}`).sort();
+  const out = listed(outs.places.map((p) => ({ place: p.place, n: p.out })));
+  const back = listed(given.places.map((p) => ({ place: p.place, n: p.in })));
+  const same = out.length === back.length && out.every((p, n) => p === back[n]);
   const sum = (list: (number | null)[]) => list.reduce<number>((s, n) => s + (n ?? 0), 0);
   return same
     ? YES
@@ -164,6 +173,14 @@ function compute(facts: Facts, given: Extract<Evidence, { kind: "sheet" }>) {
 function sheetMet(facts: Facts, key: SheetKey, given: Extract<Evidence, { kind: "sheet" }>): Met {
   if (given.version !== SHEET_VERSIONS[key])
     return no("sheet-outdated", "The calculation has changed since this sheet was saved. Work the sheet again.");
+  for (const { keys, used, label } of valuesUsed(key, given.inputs)) {
+    const known = keys.flatMap((k) => facts.values.get(k)?.value ?? []);
+    if (known.length && !known.some((v) => used !== undefined && alike(v, used)))
+      return no(
+        "sheet-outdated",
+        `The sheet did not use the install's ${label}. Correct it in Set-up if it is wrong there, then work the sheet again.`,
+      );
+  }
   for (const taken of valuesTaken(key)) {
     const used = given.took[taken];
     const value = facts.values.get(taken);
@@ -182,10 +199,9 @@ function sheetMet(facts: Facts, key: SheetKey, given: Extract<Evidence, { kind: 
  * Highest crankshaft speed (1/s) that the restraint sheets of this item allow, by the item's current proof, computed again.
  * @returns undefined when the item has no restraint sheet, null when its proof gives none.
  */
-export function restraintCap(facts: Facts, item: Item): number | null | undefined {
+export function restraintCap(facts: Facts, item: Item, proof: Proof | null): number | null | undefined {
   const parts = item.parts.map((p, n) => (p.kind === "sheet" && p.sheet === "restraint" ? n : -1)).filter((n) => n >= 0);
   if (!parts.length) return undefined;
-  const proof = currentProof(facts, item.id);
   let cap: number | null = null;
   for (const n of parts) {
     const given = proof?.evidence[n];

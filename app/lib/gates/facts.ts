@@ -6,7 +6,6 @@ import { type RunFacts, runFacts } from "#app/lib/gates/run-facts";
 import type {
   Acceptance,
   Confirmation,
-  Gate,
   Instant,
   Item,
   Keep,
@@ -20,38 +19,22 @@ import type {
   SystemKey,
   Tool,
 } from "#app/lib/gates/snapshot";
+import { soundSnapshot } from "#app/lib/gates/sound";
 import { when } from "#app/lib/gates/when";
+import { allProofs, gatherWork, group, NO_PROOFS, NO_SIGNATURES, type WorkFacts } from "#app/lib/gates/work-facts";
 import type { Value, ValueDef, ValueKey } from "#app/lib/template/types";
 
-export interface Edges {
-  needs: string[];
-  after: string[];
-  /** Union of both, without doubles. */
-  all: string[];
-}
-
-export interface Facts {
+export interface Facts extends WorkFacts {
   snapshot: Snapshot;
   at: Instant;
   members: Map<string, Member>;
-  /** Present gates only: not hidden, with at least one item. */
-  gates: Map<string, Gate>;
-  /** Visible items of present gates. */
-  items: Map<string, Item>;
-  itemsOf: Map<string, Item[]>;
-  /** By (counts, seq). */
-  proofsOf: Map<string, Proof[]>;
   confirmationsOf: Map<string, Confirmation[]>;
   acceptancesOf: Map<string, Acceptance[]>;
   keepsOf: Map<string, Keep[]>;
-  /** By seq. */
-  signaturesOf: Map<string, Signature[]>;
   openings: Map<SystemKey, { open: Opening | null; lastClosed: Opening | null }>;
+  /** Checks by the instant they were made. */
   tools: Map<string, Tool>;
   values: Map<ValueKey, ValueDef & Value>;
-  /** Visible steps that an item ends. */
-  endsSteps: Map<string, Item[]>;
-  edges: Map<string, Edges>;
   /** By order. */
   rungs: Rung[];
   runs: Map<string, RunFacts>;
@@ -65,70 +48,11 @@ export interface Facts {
   when: (instant: Instant) => string;
 }
 
-const group = <T>(rows: T[], key: (row: T) => string): Map<string, T[]> => {
-  const map = new Map<string, T[]>();
-  for (const row of rows) {
-    const k = key(row);
-    const list = map.get(k);
-    if (list) list.push(row);
-    else map.set(k, [row]);
-  }
-  return map;
-};
-
-/** Ids of the present gates that an edge leads to: an absent gate passes it on to what it needs or comes after itself. */
-function passThrough(targets: string[], present: Map<string, Gate>, every: Map<string, Gate>): string[] {
-  const found = new Set<string>();
-  const seen = new Set<string>();
-  const stack = [...targets].reverse();
-  while (stack.length) {
-    const id = stack.pop() as string;
-    if (seen.has(id)) continue;
-    seen.add(id);
-    if (present.has(id)) found.add(id);
-    else {
-      const gate = every.get(id);
-      if (gate) stack.push(...gate.after, ...gate.needs);
-    }
-  }
-  return [...found];
-}
-
-const compare = (a: number, b: number): number => (a < b ? -1 : a > b ? 1 : 0);
-const joined = (m: Member): Instant => m.roles.reduce((first, r) => Math.min(first, r.from), Number.POSITIVE_INFINITY);
-
-/** Records in the order in which they were made, so that the order in which they arrive cannot show in any answer. */
-function inSequence(s: Snapshot): Snapshot {
-  const bySeq = <T extends { seq: number }>(rows: T[]) => [...rows].sort((a, b) => a.seq - b.seq);
-  const byId = <T extends { id: string }>(rows: T[]) => [...rows].sort((a, b) => (a.id < b.id ? -1 : 1));
-  return {
-    ...s,
-    members: [...s.members].sort((a, b) => compare(joined(a), joined(b)) || (a.id < b.id ? -1 : 1)),
-    extinguishers: byId(s.extinguishers),
-    runs: byId(s.runs),
-    findings: bySeq(s.findings),
-    looseEnds: bySeq(s.looseEnds),
-    openings: bySeq(s.openings),
-    values: [...s.values].sort((a, b) => Number(b.key === "redline") - Number(a.key === "redline") || (a.key < b.key ? -1 : 1)),
-  };
-}
-
 /** @returns every look-up the rules need for the snapshot at `at`. Does not change its input. */
 export function gatherFacts(given: Snapshot, at: Instant): Facts {
-  const snapshot = inSequence(given);
+  const snapshot = soundSnapshot(given);
   const every = new Map(snapshot.gates.map((g) => [g.id, g]));
-  const itemsOf = group(
-    snapshot.items.filter((i) => !i.hidden && every.get(i.gate)?.hidden === false),
-    (i) => i.gate,
-  );
-  const gates = new Map(snapshot.gates.filter((g) => itemsOf.has(g.id)).map((g) => [g.id, g]));
-  const items = new Map<string, Item>();
-  for (const list of itemsOf.values()) for (const item of list) items.set(item.id, item);
-
-  const proofsOf = group(snapshot.proofs, (p) => p.item);
-  for (const list of proofsOf.values()) if (list.length > 1) list.sort((a, b) => a.counts - b.counts || a.seq - b.seq);
-  const signaturesOf = group(snapshot.signatures, (s) => s.gate);
-  for (const list of signaturesOf.values()) list.sort((a, b) => a.seq - b.seq);
+  const work = gatherWork(snapshot, every);
 
   const openings: Facts["openings"] = new Map();
   for (const opening of snapshot.openings)
@@ -144,17 +68,6 @@ export function gatherFacts(given: Snapshot, at: Instant): Facts {
         slot.lastClosed = opening;
     }
 
-  const endsSteps = new Map<string, Item[]>();
-  for (const item of items.values())
-    if (item.step?.endedBy) endsSteps.set(item.step.endedBy, [...(endsSteps.get(item.step.endedBy) ?? []), item]);
-
-  const edges = new Map<string, Edges>();
-  for (const gate of gates.values()) {
-    const needs = passThrough(gate.needs, gates, every);
-    const after = passThrough(gate.after, gates, every);
-    edges.set(gate.id, { needs, after, all: [...new Set([...needs, ...after])] });
-  }
-
   const runs = new Map(snapshot.runs.map((r) => [r.id, runFacts(r)]));
   const rungs = [...snapshot.rungs].sort((a, b) => a.order - b.order);
   const settledBy = new Map<string, string | null>();
@@ -164,7 +77,7 @@ export function gatherFacts(given: Snapshot, at: Instant): Facts {
       .filter((r) => rung.setBack.every((s) => (r.completedEnd as number) > s.recorded))
       .sort((a, b) => (b.completedEnd as number) - (a.completedEnd as number) || (a.run.id < b.run.id ? -1 : 1))[0];
     if (settling) settledBy.set(rung.key, settling.run.id);
-    else if (rung.leftOut) settledBy.set(rung.key, null);
+    else if (rung.leftOut && rung.setBack.every((s) => s.recorded < (rung.leftOut?.recorded ?? 0))) settledBy.set(rung.key, null);
   }
   const nextRung = rungs.find((r) => !settledBy.has(r.key)) ?? null;
   const newest = (list: (number | null)[]) => list.reduce<number | null>((m, x) => (x !== null && (m === null || x > m) ? x : m), null);
@@ -173,14 +86,8 @@ export function gatherFacts(given: Snapshot, at: Instant): Facts {
   return {
     snapshot,
     at,
-    gates,
-    items,
-    itemsOf,
-    proofsOf,
-    signaturesOf,
+    ...work,
     openings,
-    endsSteps,
-    edges,
     runs,
     rungs,
     settledBy,
@@ -189,7 +96,7 @@ export function gatherFacts(given: Snapshot, at: Instant): Facts {
     confirmationsOf: group(snapshot.confirmations, (c) => c.proof),
     acceptancesOf: group(snapshot.acceptances, (c) => c.proof),
     keepsOf: group(snapshot.keeps, (c) => c.proof),
-    tools: new Map(snapshot.tools.map((t) => [t.id, t])),
+    tools: new Map(snapshot.tools.map((t) => [t.id, { ...t, checks: [...t.checks].sort((a, b) => a.at - b.at) }])),
     values: new Map(snapshot.values.map((v) => [v.key, v])),
     allSettled: rungs.length > 0 && nextRung === null,
     newestEnd: newest([...runs.values()].map((r) => r.endedAt)),
@@ -205,15 +112,26 @@ export function gatherFacts(given: Snapshot, at: Instant): Facts {
 
 const earlier = (a: Opening | null, b: Opening): Opening => (!a || b.opened < a.opened || (b.opened === a.opened && b.seq < a.seq) ? b : a);
 
-/** The proof that speaks for an item now: the one that happened last, unless it is withdrawn. An older one never comes back. */
-export function currentProof(facts: Facts, item: string): Proof | null {
-  const last = facts.proofsOf.get(item)?.at(-1);
-  return last && !last.withdrawn ? last : null;
+export const itemOf = (facts: Facts, id: string): Item | undefined => facts.itemFacts.get(id)?.item;
+
+/** Visible items of all present gates. */
+export const allItems = (facts: Facts): Item[] => [...facts.itemFacts.values()].map((i) => i.item);
+
+export const itemsIn = (facts: Facts, gate: string): Item[] => facts.gateFacts.get(gate)?.items.map((i) => i.item) ?? [];
+
+/** By (counts, seq). */
+export function proofsOf(facts: Facts, item: string): readonly Proof[] {
+  const own = facts.itemFacts.get(item);
+  return own ? allProofs(own) : (facts.hiddenProofs.get(item) ?? NO_PROOFS);
 }
 
-export function isComputed(item: Item): boolean {
-  for (const part of item.parts) if (part.kind === "computed") return true;
-  return false;
+/** By seq. */
+export const signaturesOf = (facts: Facts, gate: string): readonly Signature[] => facts.gateFacts.get(gate)?.signatures ?? NO_SIGNATURES;
+
+/** The proof that speaks for an item now: the one that happened last, unless it is withdrawn. An older one never comes back. */
+export function currentProof(facts: Facts, item: string): Proof | null {
+  const last = proofsOf(facts, item).at(-1);
+  return last && !last.withdrawn ? last : null;
 }
 
 /** Whether the member held the role at that instant. */

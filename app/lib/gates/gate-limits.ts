@@ -1,5 +1,5 @@
 /** Which gates a run requires, what a gate waits for, and the newer-than rules that a gate puts on its proofs. */
-import { type Facts, isComputed } from "#app/lib/gates/facts";
+import type { Facts } from "#app/lib/gates/facts";
 import type { GateLimits } from "#app/lib/gates/items";
 import type { RunFacts } from "#app/lib/gates/run-facts";
 import type { Gate, Instant, Rung } from "#app/lib/gates/snapshot";
@@ -13,27 +13,34 @@ export function defaultRequired(facts: Facts, rung: Rung | null): string[] {
   return [...facts.gates.values()].filter(wanted).map((g) => g.id);
 }
 
+const isOpen = (r: RunFacts): boolean => r.plan !== null && !r.scrub && r.endedAt === null;
+
 /** Runs of the next rung that are planned and neither ended nor scrubbed, newest plan first. */
 export function plannedNext(facts: Facts): RunFacts[] {
-  const open = [...facts.runs.values()].filter((r) => r.run.rung === facts.nextRung?.key && r.plan && !r.scrub && r.endedAt === null);
+  const open = [...facts.runs.values()].filter((r) => r.run.rung === facts.nextRung?.key && isOpen(r));
   return open.sort((a, b) => (b.plan?.recorded ?? 0) - (a.plan?.recorded ?? 0) || (a.run.id < b.run.id ? -1 : 1));
 }
 
-/** Ids of the gates that the run requires: those of its plan, or the default for the rung where nothing is planned. */
+/** Ids of the gates that the run requires: those of its plan and those that its rung asks for today. */
 export function requiredBy(facts: Facts, run: RunFacts | null, rung: Rung | null): string[] {
-  return run?.plan ? run.plan.requiredGates.filter((id) => facts.gates.has(id)) : defaultRequired(facts, rung);
+  const today = defaultRequired(facts, rung);
+  if (!run?.plan) return today;
+  // A gate that came onto the board since the plan was made is asked at once.
+  return [...new Set([...run.plan.requiredGates.filter((id) => facts.gates.has(id)), ...today])];
 }
 
 /**
- * What each gate waits for. A walk-round waits for all other gates that the next run requires; where two attempts are
- * planned side by side, for those of both (so that it never stands only because one of them is dropped from view).
+ * What each gate waits for. A walk-round waits for all other gates that the next run requires; where other runs are planned beside
+ * it (another attempt, a settled rung once more), for theirs too: it is the walk-round of whichever comes first.
  */
 export function prerequisites(facts: Facts): Map<string, string[]> {
-  const planned = plannedNext(facts);
-  const next = planned.length ? planned.flatMap((r) => requiredBy(facts, r, facts.nextRung)) : requiredBy(facts, null, facts.nextRung);
+  const next = [
+    ...requiredBy(facts, null, facts.nextRung),
+    ...[...facts.runs.values()].filter(isOpen).flatMap((r) => requiredBy(facts, r, facts.rungs.find((g) => g.key === r.run.rung) ?? null)),
+  ];
   const all = new Map<string, string[]>();
-  for (const gate of facts.gates.values()) {
-    const own = facts.edges.get(gate.id)?.all ?? [];
+  for (const { gate, edges } of facts.gateFacts.values()) {
+    const own = edges.all;
     all.set(gate.id, gate.eachRun ? [...new Set([...own, ...next])].filter((id) => id !== gate.id) : own);
   }
   return all;
@@ -74,11 +81,9 @@ export function newestWork(facts: Facts, gate: string): Instant | null {
   const take = (at: Instant) => {
     if (newest === null || at > newest) newest = at;
   };
-  for (const item of facts.itemsOf.get(gate) ?? []) {
-    const last = facts.proofsOf.get(item.id)?.at(-1);
-    if (last) take(last.counts);
-  }
-  for (const s of facts.signaturesOf.get(gate) ?? []) take(s.recorded);
+  const work = facts.gateFacts.get(gate);
+  for (const { newest: last } of work?.items ?? []) if (last) take(last.counts);
+  for (const s of work?.signatures ?? []) take(s.recorded);
   return newest;
 }
 
@@ -96,11 +101,13 @@ function newerThan(
   if (gate.lookBack) {
     const id = gate.lookBack.kind === "run" ? gate.lookBack.run : facts.settledBy.get(gate.lookBack.rung);
     const end = id ? facts.runs.get(id)?.endedAt : null;
-    if (end === null || end === undefined)
-      return {
-        newerThan: null,
-        noRunYet: { code: "run-not-ended", sentence: "It looks back on a run that has not ended yet.", roles: ["lead"] },
-      };
+    if (end === null || end === undefined) {
+      const leftOut = gate.lookBack.kind === "rung" && facts.settledBy.has(gate.lookBack.rung);
+      const sentence = leftOut
+        ? "The run that it looks back on was left out. Mark it not applicable with that reason, and have an inspector accept it."
+        : "It looks back on a run that has not ended yet.";
+      return { newerThan: null, noRunYet: { code: "run-not-ended", sentence, roles: [leftOut ? "builder" : "lead"] } };
+    }
     return {
       newerThan: {
         at: end,
@@ -120,6 +127,10 @@ function newerThan(
   if (gate.requiredBy.kind === "release" && !gate.eachRun) return { newerThan: runCause, noRunYet: null };
   if (!gate.eachRun) return { newerThan: null, noRunYet: null };
   let limit: GateLimits["newerThan"] = runCause;
+  // An engine or propeller was changed: the next run may ask for less, but not for a look from before the change.
+  for (const { at, name } of facts.rungs.flatMap((r) => r.setBack.map((s) => ({ at: s.recorded, name: r.name }))))
+    if (limit === null || at > limit.at)
+      limit = { at, cause: { code: "run-since", sentence: `${name} was set back on ${facts.when(at)}, after this. Walk round again.` } };
   const lookBacks = [...facts.gates.values()].filter((g) => g.lookBack).map((g) => g.id);
   for (const id of new Set([...waitsFor, ...lookBacks])) {
     const at = id === gate.id ? null : work(id);
@@ -135,13 +146,16 @@ function newerThan(
   return { newerThan: limit, noRunYet: null };
 }
 
+const NO_LIMITS: GateLimits["after"] = new Map();
+
 function afterLimits(facts: Facts, gate: Gate): GateLimits["after"] {
-  const limits: GateLimits["after"] = new Map();
-  for (const id of facts.edges.get(gate.id)?.after ?? [])
-    for (const item of facts.itemsOf.get(id) ?? []) {
-      if (item.step || isComputed(item)) continue;
+  const after = facts.gateFacts.get(gate.id)?.edges.after ?? [];
+  if (!after.length) return NO_LIMITS;
+  const limits = new Map<string, { at: Instant; gate: string }>();
+  for (const id of after)
+    for (const { item, computed, newest: proof } of facts.gateFacts.get(id)?.items ?? []) {
+      if (item.step || computed) continue;
       // Withdrawn or not: taking a proof back must never let a later one count again.
-      const proof = facts.proofsOf.get(item.id)?.at(-1);
       if (!proof || proof.state === "na") continue;
       for (const system of item.systems) {
         const known = limits.get(system);

@@ -2,9 +2,10 @@
 import type { Facts } from "#app/lib/gates/facts";
 import { soonest } from "#app/lib/gates/items";
 import type { Blocker, GateResult, GateState, ItemResult } from "#app/lib/gates/result";
-import { coversNow, doersOf, fillPolicy, holding, wasSigned } from "#app/lib/gates/signing";
+import { coversNow, doersOf, holding, wasSigned } from "#app/lib/gates/signing";
 import type { Gate, Instant, SystemKey } from "#app/lib/gates/snapshot";
-import { blocker, count, ownerOf } from "#app/lib/gates/who";
+import { blocker, count, findingOwner, looseEndOwner, ownerOf } from "#app/lib/gates/who";
+import type { GateFacts } from "#app/lib/gates/work-facts";
 
 /** Findings and loose ends by what they stop, worked out once. */
 export interface Hindrances {
@@ -25,19 +26,32 @@ export function hindrances(facts: Facts): Hindrances {
 /** @param inCircle the gate waits for itself: it never stands. @param results gates evaluated before, which hold all that it waits for. */
 export function evaluateGate(
   facts: Facts,
-  gate: Gate,
-  items: ItemResult[],
+  of: GateFacts,
   waitsFor: string[],
   results: Map<string, GateResult>,
   hinder: Hindrances,
   inCircle: boolean,
 ): GateResult {
-  const own = facts.itemsOf.get(gate.id) ?? [];
-  const blockers: Blocker[] = items.flatMap((i) => i.blockers);
-  if (!gate.lookBack) blockers.push(...groundingBlockers(facts, gate, hinder), ...looseEndBlockers(facts, gate, hinder));
+  const { gate } = of;
+  const blockers: Blocker[] = [];
+  let done = 0;
+  let until: Instant | null = null;
+  for (const { result } of of.items) {
+    const { stands, until: ends, blockers: own } = result as ItemResult;
+    if (stands) {
+      done++;
+      until = soonest(until, ends);
+    } else blockers.push(...own);
+  }
+  if (!gate.lookBack) blockers.push(...groundingBlockers(facts, of, hinder), ...looseEndBlockers(facts, gate, hinder));
   const complete = blockers.length === 0;
 
-  const missing = waitsFor.filter((id) => !results.get(id)?.stands);
+  const missing: string[] = [];
+  for (const id of waitsFor) {
+    const other = results.get(id);
+    if (other?.stands) until = soonest(until, other.until);
+    else missing.push(id);
+  }
   for (const id of missing) {
     const other = facts.gates.get(id);
     blockers.push(
@@ -48,7 +62,7 @@ export function evaluateGate(
         page: "gate",
         id,
         sentence: inCircle
-          ? `${gate.name} and ${other?.name} wait for each other. A lead must take one edge away in the template.`
+          ? `${gate.name} waits, directly or through others, for gates that form a circle. A lead must take one edge away in the template.`
           : `${other?.name ?? "Another gate"} must stand signed first.`,
         owner: ownerOf(facts, inCircle ? ["lead"] : ["builder", "inspector", "lead"]),
       }),
@@ -56,8 +70,8 @@ export function evaluateGate(
   }
   const ready = complete && missing.length === 0 && !inCircle;
 
-  const covers = coversNow(own, items);
-  const signed = fillPolicy(facts, gate, holding(facts, gate, covers));
+  const covers = coversNow(of);
+  const signed = holding(facts, of, covers);
   const stands = ready && signed.length === gate.policy.length;
   if (ready && !stands) blockers.push(signatureBlocker(facts, gate, signed.length, covers, signed[0]?.by));
 
@@ -66,14 +80,9 @@ export function evaluateGate(
   if (stands) state = "signed";
   else if (ready && signed.length) state = "half signed";
   else if (ready) state = "ready";
-  else if (!complete && wasSigned(facts, gate)) state = "lapsed";
+  else if (!complete && wasSigned(facts, of)) state = "lapsed";
   else state = waiting ? "waiting" : "in work";
 
-  let until: Instant | null = null;
-  if (stands) {
-    for (const i of items) until = soonest(until, i.until);
-    for (const id of waitsFor) until = soonest(until, results.get(id)?.until ?? null);
-  }
   return {
     id: gate.id,
     state,
@@ -81,11 +90,11 @@ export function evaluateGate(
     complete,
     ready,
     stands,
-    until,
+    until: stands ? until : null,
     covers,
     holding: signed.map((s) => s.id),
-    done: items.filter((i) => i.stands).length,
-    of: items.length,
+    done,
+    of: of.items.length,
     prerequisites: waitsFor,
     blockers,
   };
@@ -108,9 +117,9 @@ export const absentGate = (gate: Gate): GateResult => ({
   blockers: [],
 });
 
-function groundingBlockers(facts: Facts, gate: Gate, hinder: Hindrances): Blocker[] {
+function groundingBlockers(facts: Facts, of: GateFacts, hinder: Hindrances): Blocker[] {
   if (!hinder.grounding.size) return [];
-  const systems = new Set((facts.itemsOf.get(gate.id) ?? []).flatMap((i) => i.systems));
+  const systems = new Set(of.items.flatMap((i) => i.item.systems));
   return [...systems]
     .flatMap((s) => hinder.grounding.get(s) ?? [])
     .map((f) =>
@@ -121,12 +130,13 @@ function groundingBlockers(facts: Facts, gate: Gate, hinder: Hindrances): Blocke
         page: "findings",
         id: f.id,
         sentence: f.fixed ? "Fixed; an inspector must look and close it." : "A builder fixes it and says how, then an inspector closes it.",
-        owner: f.fixed ? ownerOf(facts, ["inspector"], [f.fixed.by]) : ownerOf(facts, ["builder", "inspector"]),
+        owner: findingOwner(facts, f),
       }),
     );
 }
 
 function looseEndBlockers(facts: Facts, gate: Gate, hinder: Hindrances): Blocker[] {
+  if (!hinder.dueGate.size) return [];
   return (hinder.dueGate.get(gate.id) ?? []).map((l) =>
     blocker({
       code: "loose-end",
@@ -137,7 +147,7 @@ function looseEndBlockers(facts: Facts, gate: Gate, hinder: Hindrances): Blocker
       sentence: l.restored
         ? "Restored; a second person must look and confirm."
         : "It is due before this gate. Restore it, and have a second person confirm it.",
-      owner: l.restored ? ownerOf(facts, ["builder", "inspector", "lead"], [l.restored.by]) : ownerOf(facts, ["builder", "inspector"]),
+      owner: looseEndOwner(facts, l),
     }),
   );
 }

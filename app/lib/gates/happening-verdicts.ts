@@ -32,6 +32,8 @@ const already = (e: Evaluation, at: Own, title: string, sentence: string): Verdi
 
 // ---------------------------------------------------------------- findings
 
+export const mayRaise = (e: Evaluation, a: { member: string }): Verdict => needsMember(e, a.member) ?? OK;
+
 const atFinding = (id: string): Own => ({ subject: ["finding", id], page: "findings", id });
 const findingOf = (e: Evaluation, id: string) => e.snapshot.findings.find((f) => f.id === id);
 const closedAlready = (e: Evaluation, f: Finding): Verdict | null =>
@@ -77,6 +79,10 @@ export function mayGrade(
   if (!f) return notFound(e, "finding");
   const cannot = closedAlready(e, f) ?? needsMember(e, a.member);
   if (cannot) return cannot;
+  if (a.severity === "limiting" && !(a.cap !== null && Number.isFinite(a.cap) && a.cap >= 0))
+    return order(e, atFinding(f.id), "No speed given", "A limiting finding needs the highest speed that it allows, in rpm, 0 or more.", [
+      "inspector",
+    ]);
   return weight(a.severity, a.cap) >= weight(f.severity, f.cap) ? OK : (needsRole(e, a.member, ["inspector"], "lower a finding") ?? OK);
 }
 
@@ -138,6 +144,10 @@ export function mayAcceptLooseEnd(e: Evaluation, a: { looseEnd: string; member: 
 
 // ---------------------------------------------------------------- openings, rungs, review
 
+export const mayOpen = (e: Evaluation, a: { member: string }): Verdict => needsMember(e, a.member) ?? OK;
+export const mayCloseOpening = (e: Evaluation, a: { member: string }): Verdict =>
+  needsRole(e, a.member, ["builder", "inspector"], "close an opening") ?? OK;
+
 /** An inspector marks an opening as recorded by mistake. */
 export function mayMarkMistake(e: Evaluation, a: { opening: string; member: string }): Verdict {
   const o = e.snapshot.openings.find((x) => x.id === a.opening);
@@ -182,13 +192,23 @@ export function mayAnswerExceedance(e: Evaluation, a: { exceedance: string; memb
   const run = e.snapshot.runs.find((r) => r.exceedances.some((x) => x.id === a.exceedance));
   const exceedance = run?.exceedances.find((x) => x.id === a.exceedance);
   if (!run || !exceedance) return notFound(e, "exceedance");
-  if (a.finding !== null && !findingOf(e, a.finding)) return notFound(e, "finding");
+  const finding = a.finding === null ? null : findingOf(e, a.finding);
+  if (finding === undefined) return notFound(e, "finding");
   const cannot =
     a.finding === null
       ? needsRole(e, a.member, ["inspector"], "answer an exceedance without a finding")
       : needsRole(e, a.member, ["builder", "inspector", "lead"], "answer an exceedance");
   if (cannot) return cannot;
-  return exceedance.answered === null
-    ? OK
-    : already(e, { subject: ["run", run.id], page: "run", id: run.id }, "Answered already", "A record answers it.");
+  const place: Own = { subject: ["run", run.id], page: "run", id: run.id };
+  if (exceedance.answered !== null) return already(e, place, "Answered already", "A record answers it.");
+  const started = e.facts.runs.get(run.id)?.start?.recorded ?? Number.POSITIVE_INFINITY;
+  return finding?.closed && finding.closed.recorded < started
+    ? order(
+        e,
+        place,
+        "Closed before the run",
+        "That finding was closed before this run: raise a new one, or choose one that is about this run.",
+        ["builder", "inspector"],
+      )
+    : OK;
 }

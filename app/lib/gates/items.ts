@@ -1,7 +1,8 @@
 /** From an item's proofs to its state: the eight rules of a proof, in order, and the computed items. */
+
 import { computedItem } from "#app/lib/gates/computed";
 import { evidenceMeets, numberMissing } from "#app/lib/gates/evidence";
-import { currentProof, type Facts, isComputed, nameOf } from "#app/lib/gates/facts";
+import { type Facts, nameOf, proofsOf } from "#app/lib/gates/facts";
 import {
   acceptanceFails,
   type Cause,
@@ -12,9 +13,10 @@ import {
   toolFails,
   validUntil,
 } from "#app/lib/gates/proofs";
-import type { ItemResult, ItemState } from "#app/lib/gates/result";
-import type { Gate, Instant, Item, Proof } from "#app/lib/gates/snapshot";
+import type { Blocker, ItemResult, ItemState } from "#app/lib/gates/result";
+import type { Instant, Item, Proof } from "#app/lib/gates/snapshot";
 import { blocker, ownerOf } from "#app/lib/gates/who";
+import { allProofs, type ItemFacts } from "#app/lib/gates/work-facts";
 
 /** Newer-than rules of a gate, worked out once for all of its items. */
 export interface GateLimits {
@@ -23,39 +25,37 @@ export interface GateLimits {
   /** Set when a look-back gate has no ended run to look back on. */
   noRunYet: Cause | null;
   /** Per system: the newest current proof of a gate that this one comes *after*. */
-  after: Map<string, { at: Instant; gate: string }>;
+  after: ReadonlyMap<string, { at: Instant; gate: string }>;
 }
 
-export interface ItemContext {
-  facts: Facts;
-  gate: Gate;
-  limits: GateLimits;
-  /** Results of the items that this one follows, evaluated before. */
-  results: Map<string, ItemResult>;
-}
+/** Shared by every item that stands: most do, and none of them needs a list of its own. */
+const NONE = Object.freeze([]) as unknown as Blocker[];
 
-/** @returns the item's state at `facts.at`, every failing rule as a blocker (first cause first), and until when it stands. */
-export function evaluateItem(ctx: ItemContext, item: Item): ItemResult {
-  const { facts, gate } = ctx;
-  if (isComputed(item)) return computedItem(facts, gate, item);
-  const proof = currentProof(facts, item.id);
-  if (!proof) return notStanding(ctx, item, null, "to do", [nothingYet(facts, item)]);
+/**
+ * @param own the item with what is recorded of it; those that it follows have been evaluated before.
+ * @returns its state at `facts.at`, every failing rule as a blocker (first cause first), and until when it stands.
+ */
+export function evaluateItem(facts: Facts, limits: GateLimits, own: ItemFacts): ItemResult {
+  const { item, current: proof } = own;
+  const { gate } = own.of;
+  if (own.computed) return computedItem(facts, gate, item);
+  if (!proof) return notStanding(facts, item, null, "to do", [nothingYet(facts, own)]);
 
   const lookBack = gate.lookBack !== null;
-  if (ctx.limits.noRunYet) return notStanding(ctx, item, proof, "to do", [ctx.limits.noRunYet]);
   if (proof.state === "na") {
     if (item.killer && gate.eachRun)
-      return notStanding(ctx, item, proof, "to do", [
+      return notStanding(facts, item, proof, "to do", [
         { code: "na-not-allowed", sentence: "This item guards a life and is asked before each run: it cannot be not applicable. Do it." },
       ]);
     const old = revisionFails(item, proof);
-    if (old) return notStanding(ctx, item, proof, "lapsed", [old]);
+    if (old) return notStanding(facts, item, proof, "lapsed", [old]);
     const waits = acceptanceFails(facts, proof);
-    if (waits) return notStanding(ctx, item, proof, "second eyes", [waits]);
-    return { id: item.id, state: "not applicable", stands: true, until: null, proof: proof.id, blockers: [] };
+    if (waits) return notStanding(facts, item, proof, "second eyes", [waits]);
+    return { id: item.id, state: "not applicable", stands: true, until: null, proof: proof.id, blockers: NONE };
   }
+  if (limits.noRunYet) return notStanding(facts, item, proof, "to do", [limits.noRunYet]);
   if (proof.state === "failed")
-    return notStanding(ctx, item, proof, "to do", [
+    return notStanding(facts, item, proof, "to do", [
       {
         code: "item-failed",
         sentence: `${nameOf(facts, proof.did)} found it not right on ${facts.when(proof.counts)}${proof.note ? `: ${proof.note}` : ""}. Put it right and prove it again.`,
@@ -63,7 +63,7 @@ export function evaluateItem(ctx: ItemContext, item: Item): ItemResult {
     ]);
 
   const met = evidenceMeets(facts, item, proof);
-  if (!met.ok) return notStanding(ctx, item, proof, "to do", [met]);
+  if (!met.ok) return notStanding(facts, item, proof, "to do", [met]);
 
   const lapsed: Cause[] = [];
   const add = (cause: Cause | null) => {
@@ -80,22 +80,24 @@ export function evaluateItem(ctx: ItemContext, item: Item): ItemResult {
       until = validUntil(facts, item, gate, proof);
       if (until !== null && until <= facts.at) add({ code: "ran-out", sentence: `Ran out on ${facts.when(until)}. Do it again.` });
     }
-    add(newerThanFails(ctx, item, proof, counts));
-    const followed = followsFail(ctx, item, proof);
-    for (const cause of followed.causes) add(cause);
-    until = soonest(until, followed.until);
+    add(newerThanFails(facts, limits, item, proof, counts));
+    if (item.follows.length || own.ends.length) {
+      const followed = followsFail(facts, own, proof);
+      for (const cause of followed.causes) add(cause);
+      until = soonest(until, followed.until);
+    }
   }
   const second = secondPersonFails(facts, item, proof);
-  if (lapsed.length) return notStanding(ctx, item, proof, "lapsed", second ? [...lapsed, second] : lapsed);
-  if (second) return notStanding(ctx, item, proof, "second eyes", [second]);
-  return { id: item.id, state: "done", stands: true, until, proof: proof.id, blockers: [] };
+  if (lapsed.length) return notStanding(facts, item, proof, "lapsed", second ? [...lapsed, second] : lapsed);
+  if (second) return notStanding(facts, item, proof, "second eyes", [second]);
+  return { id: item.id, state: "done", stands: true, until, proof: proof.id, blockers: NONE };
 }
 
 /** The earlier of two ends; null = never. */
 export const soonest = (a: Instant | null, b: Instant | null): Instant | null => (a === null ? b : b === null ? a : Math.min(a, b));
 
-function nothingYet(facts: Facts, item: Item): Cause {
-  for (const part of item.parts) {
+function nothingYet(facts: Facts, own: ItemFacts): Cause {
+  for (const part of own.item.parts) {
     const missing = numberMissing(facts, part);
     if (missing)
       return {
@@ -104,7 +106,7 @@ function nothingYet(facts: Facts, item: Item): Cause {
         roles: ["builder", "lead", "inspector"],
       };
   }
-  const last = facts.proofsOf.get(item.id)?.at(-1);
+  const last = own.newest;
   return last?.withdrawn
     ? {
         code: "item-withdrawn",
@@ -113,8 +115,9 @@ function nothingYet(facts: Facts, item: Item): Cause {
     : { code: "item-to-do", sentence: "Not done yet." };
 }
 
-function newerThanFails({ facts, limits }: ItemContext, item: Item, proof: Proof, counts: Instant): Cause | null {
+function newerThanFails(facts: Facts, limits: GateLimits, item: Item, proof: Proof, counts: Instant): Cause | null {
   if (limits.newerThan && proof.counts <= limits.newerThan.at) return limits.newerThan.cause;
+  if (!limits.after.size) return null;
   for (const system of item.systems) {
     const other = limits.after.get(system);
     if (other && counts <= other.at)
@@ -126,23 +129,19 @@ function newerThanFails({ facts, limits }: ItemContext, item: Item, proof: Proof
   return null;
 }
 
-const FOLLOWS_NOTHING = { causes: [], until: null } as const;
-
 /** Rule 8: what it follows stands with an older proof; a step it rests on still held; a step it ends is over. */
-function followsFail({ facts, results }: ItemContext, item: Item, proof: Proof): { causes: readonly Cause[]; until: Instant | null } {
-  if (!item.follows.length && !facts.endsSteps.has(item.id)) return FOLLOWS_NOTHING;
+function followsFail(facts: Facts, { item, ends }: ItemFacts, proof: Proof): { causes: Cause[]; until: Instant | null } {
   const causes: Cause[] = [];
   let until: Instant | null = null;
   for (const id of item.follows) {
-    const other = facts.items.get(id);
-    if (!other) continue;
+    const followed = facts.itemFacts.get(id);
+    if (!followed) continue;
+    const { item: other, current: otherProof, result } = followed;
     if (other.step) {
-      const cause = stepFails(facts, other, proof);
+      const cause = stepFails(facts, followed, proof);
       if (cause) causes.push(cause);
       continue;
     }
-    const result = results.get(id);
-    const otherProof = currentProof(facts, id);
     if (!result?.stands)
       causes.push({ code: "follows", sentence: `It follows “${other.words}”, which does not stand. Do that first, then this again.` });
     else {
@@ -154,8 +153,7 @@ function followsFail({ facts, results }: ItemContext, item: Item, proof: Proof):
         });
     }
   }
-  for (const step of facts.endsSteps.get(item.id) ?? []) {
-    const newest = facts.proofsOf.get(step.id)?.at(-1);
+  for (const { item: step, newest } of ends) {
     if (newest && newest.counts >= proof.counts)
       causes.push({
         code: "step-newer",
@@ -165,8 +163,12 @@ function followsFail({ facts, results }: ItemContext, item: Item, proof: Proof):
   return { causes, until };
 }
 
-function stepFails(facts: Facts, step: Item, proof: Proof): Cause | null {
-  const older = (facts.proofsOf.get(step.id) ?? []).filter((p) => p.counts < proof.counts);
+/** By the instant that counts; of one instant, by the order in which they were recorded. */
+const before = (a: Proof, b: Proof): boolean => a.counts < b.counts || (a.counts === b.counts && a.seq < b.seq);
+
+function stepFails(facts: Facts, own: ItemFacts, proof: Proof): Cause | null {
+  const step = own.item;
+  const older = allProofs(own).filter((p) => p.counts < proof.counts);
   const rest = older.at(-1);
   const again = `Do “${step.words}” first, then this again.`;
   if (!rest || rest.withdrawn) return { code: "step-missing", sentence: `It rests on “${step.words}”, which was not so then. ${again}` };
@@ -184,12 +186,12 @@ function stepFails(facts: Facts, step: Item, proof: Proof): Cause | null {
     return { code: "step-too-old", sentence: `It rests on “${step.words}”, done more than ${hours} h before. ${again}` };
   }
   const ended = step.step?.endedBy;
-  if (ended && (facts.proofsOf.get(ended) ?? []).some((p) => p.counts > rest.counts && p.counts < proof.counts))
+  if (ended && proofsOf(facts, ended).some((p) => before(rest, p) && before(p, proof)))
     return { code: "step-ended", sentence: `“${step.words}” was over when this was done. ${again}` };
   return null;
 }
 
-function notStanding({ facts, gate }: ItemContext, item: Item, proof: Proof | null, state: ItemState, causes: Cause[]): ItemResult {
+function notStanding(facts: Facts, item: Item, proof: Proof | null, state: ItemState, causes: Cause[]): ItemResult {
   const blockers = causes.map((c) =>
     blocker({
       code: c.code,
@@ -197,7 +199,7 @@ function notStanding({ facts, gate }: ItemContext, item: Item, proof: Proof | nu
       title: item.words,
       sentence: c.sentence,
       page: "gate",
-      id: gate.id,
+      id: item.gate,
       item: item.id,
       owner: ownerOf(facts, c.roles ?? ["builder", "inspector"], c.barred),
     }),

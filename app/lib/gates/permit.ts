@@ -37,6 +37,18 @@ export const no = (e: Evaluation, r: Refusal): Verdict =>
 export const notFound = (e: Evaluation, what: string): Verdict =>
   no(e, { code: "not-found", title: "Not found", sentence: `This ${what} is not on this install. Go back to the board.`, roles: ["lead"] });
 
+/** A run that was started, ended or scrubbed takes no more of it. */
+export const runOver = (e: Evaluation, id: string, state: string): Verdict =>
+  no(e, {
+    subject: ["run", id],
+    page: "run",
+    id,
+    code: "run-over",
+    title: `The run is ${state}`,
+    sentence: `It is ${state}; plan another run of this rung instead.`,
+    roles: ["lead"],
+  });
+
 const words: Record<Role, string> = { lead: "a lead", builder: "a builder", inspector: "an inspector", crew: "a crew member" };
 const either = (roles: Role[]): string => roles.map((r) => words[r]).join(" or ");
 

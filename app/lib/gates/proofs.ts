@@ -23,7 +23,7 @@ export function toolFails(facts: Facts, proof: Proof): Cause | null {
   for (const id of proof.tools) {
     const tool = facts.tools.get(id);
     const name = tool?.name ?? "The tool";
-    const checks = [...(tool?.checks ?? [])].sort((a, b) => a.at - b.at);
+    const checks = tool?.checks ?? [];
     const at = proof.counts;
     const newest = checks.filter((c) => c.at <= at).at(-1)?.at;
     // Of several checks at one instant the worst counts, so that their order cannot matter.

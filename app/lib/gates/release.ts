@@ -3,7 +3,7 @@ import { releaseOpenings, releaseRecord } from "#app/lib/gates/computed";
 import { type Facts, heldRole } from "#app/lib/gates/facts";
 import { soonest } from "#app/lib/gates/items";
 import { rank, rootsOf } from "#app/lib/gates/rank";
-import type { Blocker, GateResult, ItemResult, ReleaseResult } from "#app/lib/gates/result";
+import type { Blocker, GateResult, ReleaseResult } from "#app/lib/gates/result";
 import { reviewBlockers } from "#app/lib/gates/runs";
 import { sameCovers } from "#app/lib/gates/signing";
 import type { Gate, Instant, ReleaseSignature } from "#app/lib/gates/snapshot";
@@ -18,7 +18,7 @@ const LACK_TITLES: Partial<Record<Blocker["code"], string>> = {
 
 const releaseOnly = (g: Gate) => g.requiredBy.kind === "release" && !g.lookBack;
 
-export function evaluateRelease(facts: Facts, items: Map<string, ItemResult>, gates: Map<string, GateResult>): ReleaseResult {
+export function evaluateRelease(facts: Facts, gates: Map<string, GateResult>): ReleaseResult {
   const required = [...facts.gates.values()].filter((g) => g.requiredBy.kind !== "runs").map((g) => g.id);
   const blockers: Blocker[] = [];
   const lead = ownerOf(facts, ["lead"]);
@@ -35,7 +35,7 @@ export function evaluateRelease(facts: Facts, items: Map<string, ItemResult>, ga
       }),
     );
   for (const run of facts.runs.values()) {
-    const first = reviewBlockers({ facts, items, gates }, run)[0];
+    const first = reviewBlockers({ facts, gates }, run)[0];
     if (first)
       blockers.push(
         blocker({
@@ -58,7 +58,7 @@ export function evaluateRelease(facts: Facts, items: Map<string, ItemResult>, ga
         subject: ["release", facts.snapshot.install.id],
         title: LACK_TITLES[lack.code] ?? "Not ready for release",
         sentence: lack.sentence,
-        owner: ownerOf(facts, lack.roles),
+        owner: ownerOf(facts, lack.roles, lack.barred),
         page: lack.page,
         id: lack.id ?? null,
       }),

@@ -184,6 +184,8 @@ export interface RunResult {
   blockers: Blocker[];
   /** GO in force at `at`, and when it ends. */
   go: { id: string; ends: Instant } | null;
+  /** GO was called and its window is open, but the run is no longer clear: HOLD must be written. */
+  goLost: boolean;
   /** What keeps it from being started now (on top of `blockers`); empty when it may start. */
   startBlockers: Blocker[];
   /** What is left to do after it ended; empty before and when reviewed. */

@@ -16,7 +16,8 @@ export interface RunFacts {
   scrub: Act<"scrub"> | null;
   /** Newest of go, hold and take-back. */
   word: Act<"go"> | Act<"hold"> | Act<"take-back"> | null;
-  lastHold: Act<"hold"> | null;
+  /** Newest HOLD, or start taken back, which holds the run too: answers given before it speak for nothing after it. */
+  lastHold: Act<"hold"> | Act<"take-back"> | null;
   logRead: Act<"log-read"> | null;
   noLog: Act<"no-log"> | null;
 }
@@ -39,14 +40,14 @@ export function runFacts(run: Run): RunFacts {
   for (const plan of run.plans) if (!facts.plan || plan.version > facts.plan.version) facts.plan = plan;
   for (const act of [...run.acts].sort((a, b) => a.seq - b.seq)) {
     if (act.act === "go" || act.act === "hold" || act.act === "take-back") facts.word = act;
-    if (act.act === "hold") facts.lastHold = act;
+    if (act.act === "hold" || act.act === "take-back") facts.lastHold = act;
     if (act.act === "start") {
       facts.start = act;
       facts.endedAt = null;
       facts.outcome = null;
     } else if (act.act === "take-back") facts.start = null;
     else if (act.act === "ended") facts.endedAt = act.at;
-    else if (act.act === "outcome") facts.outcome = act.outcome;
+    else if (act.act === "outcome") facts.outcome = facts.start?.unstarted ? "cut short" : act.outcome;
     else if (act.act === "scrub") facts.scrub = act;
     else if (act.act === "log-read") facts.logRead = act;
     else if (act.act === "no-log") facts.noLog = act;
@@ -56,7 +57,8 @@ export function runFacts(run: Run): RunFacts {
   return facts;
 }
 
-/** GO in force at `at`: the newest word is GO, nothing started since, and its end has not come. */
-export function goInForce(facts: RunFacts, at: Instant): Act<"go"> | null {
-  return facts.word?.act === "go" && !facts.start && !facts.scrub && at < facts.word.ends ? facts.word : null;
+/** GO called and neither used up nor over: the newest word is GO, nothing started since, and its window is open. */
+export function goCalled(facts: RunFacts, at: Instant): Act<"go"> | null {
+  const { word } = facts;
+  return word?.act === "go" && !facts.start && !facts.scrub && at < word.ends ? word : null;
 }

@@ -1,9 +1,9 @@
-/** May this member do this now? Acts on runs: plan, acknowledge, answer, GO, HOLD, SCRUB, start, end. */
+/** May this member do this now? Acts on runs that are planned: acknowledge, answer, GO, HOLD, SCRUB, start, end. */
 import { crewOf } from "#app/lib/gates/crew";
 import { type Evaluation, evaluate } from "#app/lib/gates/evaluate";
 import { heldRole } from "#app/lib/gates/facts";
 import { soonest } from "#app/lib/gates/items";
-import { needsMember, needsRole, no, notFound, OK, refuse } from "#app/lib/gates/permit";
+import { needsMember, needsRole, no, notFound, OK, refuse, runOver } from "#app/lib/gates/permit";
 import type { RunResult, Verdict } from "#app/lib/gates/result";
 import type { RunFacts } from "#app/lib/gates/run-facts";
 import type { Instant } from "#app/lib/gates/snapshot";
@@ -17,27 +17,9 @@ function find(e: Evaluation, id: string): Found {
 }
 
 const at = (id: string) => ({ subject: ["run", id] as ["run", string], page: "run" as const, id });
-const over = (e: Evaluation, id: string, state: string): Verdict =>
-  no(e, {
-    ...at(id),
-    code: "run-over",
-    title: `The run is ${state}`,
-    sentence: `It is ${state}; plan another run of this rung instead.`,
-    roles: ["lead"],
-  });
-
-/** @param a.run null = a new run of `rung`. */
-export function mayPlan(e: Evaluation, a: { run: string | null; rung: string; member: string }): Verdict {
-  const role = needsRole(e, a.member, ["lead"], "plan a run");
-  if (role) return role;
-  if (!e.facts.rungs.some((r) => r.key === a.rung)) return notFound(e, "rung");
-  if (a.run === null) return OK;
-  const f = find(e, a.run);
-  if (f.verdict) return f.verdict;
-  return f.run.start || f.run.scrub ? over(e, a.run, f.result.state) : OK;
-}
-
 function inCrew(e: Evaluation, run: RunFacts, member: string, act: string): Verdict | null {
+  const outsider = needsMember(e, member);
+  if (outsider) return outsider;
   return crewOf(run).includes(member)
     ? null
     : no(e, {
@@ -49,22 +31,22 @@ function inCrew(e: Evaluation, run: RunFacts, member: string, act: string): Verd
       });
 }
 
-const stale = (e: Evaluation, run: RunFacts, version: number): Verdict | null =>
+const stale = (e: Evaluation, run: RunFacts, version: number, act: string): Verdict | null =>
   run.plan?.version === version
     ? null
     : no(e, {
         ...at(run.run.id),
         code: "stale",
         title: "The card has changed",
-        sentence: `It is version ${run.plan?.version ?? 0} now. Read it again, then answer.`,
+        sentence: `It is version ${run.plan?.version ?? 0} now. Read it again, then ${act}.`,
         roles: ["crew"],
       });
 
 export function mayAcknowledge(e: Evaluation, a: { run: string; member: string; version: number }): Verdict {
   const f = find(e, a.run);
   if (f.verdict) return f.verdict;
-  if (f.run.start || f.run.scrub) return over(e, a.run, f.result.state);
-  return inCrew(e, f.run, a.member, "acknowledge its card") ?? stale(e, f.run, a.version) ?? OK;
+  if (f.run.start || f.run.scrub) return runOver(e, a.run, f.result.state);
+  return inCrew(e, f.run, a.member, "acknowledge its card") ?? stale(e, f.run, a.version, "answer") ?? OK;
 }
 
 export function mayAnswer(e: Evaluation, a: { run: string; member: string; version: number; answer: "go" | "no-go" }): Verdict {
@@ -74,8 +56,8 @@ export function mayAnswer(e: Evaluation, a: { run: string; member: string; versi
   if (crew) return crew;
   // Bad news is always taken: a no-go needs neither the newest card nor an open run.
   if (a.answer === "no-go") return OK;
-  if (f.run.start || f.run.scrub) return over(e, a.run, f.result.state);
-  const old = stale(e, f.run, a.version);
+  if (f.run.start || f.run.scrub) return runOver(e, a.run, f.result.state);
+  const old = stale(e, f.run, a.version, "answer");
   if (old) return old;
   return f.run.run.acks.some((k) => k.by === a.member && k.version === a.version)
     ? OK
@@ -90,7 +72,7 @@ export function mayAnswer(e: Evaluation, a: { run: string; member: string; versi
 
 export function mayRecordWind(e: Evaluation, a: { run: string; member: string }): Verdict {
   const f = find(e, a.run);
-  return f.verdict ?? needsMember(e, a.member) ?? (f.run?.scrub || f.run?.endedAt ? over(e, a.run, f.result?.state ?? "over") : OK);
+  return f.verdict ?? needsMember(e, a.member) ?? (f.run?.scrub || f.run?.endedAt ? runOver(e, a.run, f.result?.state ?? "over") : OK);
 }
 
 /** When a GO called now would end: its window from the planned start, or earlier with what it stands on. Null = no planned start. */
@@ -100,7 +82,8 @@ export function goEnds(e: Evaluation, run: string): Instant | null {
   return start === null ? null : soonest(start + e.snapshot.settings.goWindow, f.result?.until ?? null);
 }
 
-export function mayCallGo(e: Evaluation, a: { run: string; member: string }): Verdict {
+/** @param a.version of the card that the lead saw; left out: asks only whether GO may be called now. */
+export function mayCallGo(e: Evaluation, a: { run: string; member: string; version?: number }): Verdict {
   const f = find(e, a.run);
   if (f.verdict) return f.verdict;
   const role = needsRole(e, a.member, ["lead"], "call GO");
@@ -113,6 +96,8 @@ export function mayCallGo(e: Evaluation, a: { run: string; member: string }): Ve
       sentence: `GO was called and stands until ${e.facts.when(f.result.go.ends)}.`,
       roles: ["lead"],
     });
+  const old = a.version === undefined ? null : stale(e, f.run, a.version, "call GO");
+  if (old) return old;
   if (!f.result.clear) return refuse(...f.result.blockers);
   const start = f.run.run.plannedStart;
   if (start === null)
@@ -146,7 +131,7 @@ export function mayCallNoGo(e: Evaluation, a: { run: string; member: string }): 
   if (f.result.state === "planned" || f.result.state === "held") return OK;
   return f.result.state === "called"
     ? no(e, { ...at(a.run), code: "order", title: "GO stands", sentence: "Call HOLD first: it tells the crew at once.", roles: ["lead"] })
-    : over(e, a.run, f.result.state);
+    : runOver(e, a.run, f.result.state);
 }
 
 /** HOLD from any member, on a run that has not ended. */
@@ -155,7 +140,7 @@ export function mayHold(e: Evaluation, a: { run: string; member: string }): Verd
   if (f.verdict) return f.verdict;
   const outsider = needsMember(e, a.member);
   if (outsider) return outsider;
-  return f.run.scrub || f.run.endedAt !== null ? over(e, a.run, f.result.state) : OK;
+  return f.run.scrub || f.run.endedAt !== null ? runOver(e, a.run, f.result.state) : OK;
 }
 
 export function mayScrub(e: Evaluation, a: { run: string; member: string }): Verdict {
@@ -178,6 +163,8 @@ export function mayScrub(e: Evaluation, a: { run: string; member: string }): Ver
 
 /** Lead, or whoever holds run lead or recorder on this run. */
 function leadsRun(e: Evaluation, run: RunFacts, member: string, act: string): Verdict | null {
+  const outsider = needsMember(e, member);
+  if (outsider) return outsider;
   const places = run.plan?.positions.filter((p) => p.member === member).map((p) => p.position) ?? [];
   if (heldRole(e.facts, member, "lead", e.at) || places.includes("runlead") || places.includes("recorder")) return null;
   return no(e, {
@@ -194,18 +181,40 @@ export function mayStart(e: Evaluation, a: { run: string; member: string }): Ver
   if (f.verdict) return f.verdict;
   const place = leadsRun(e, f.run, a.member, "start the run");
   if (place) return place;
-  if (f.run.start || f.run.scrub) return over(e, a.run, f.result.state);
+  if (f.run.start || f.run.scrub) return runOver(e, a.run, f.result.state);
   const blockers = [...f.result.blockers, ...f.result.startBlockers];
   return blockers.length ? refuse(...blockers) : OK;
 }
 
-/** Take the start back (never fired), report the end, or state the outcome. */
-export function mayReport(e: Evaluation, a: { run: string; member: string; report: "take-back" | "ended" | "outcome" }): Verdict {
+/**
+ * Take the start back (never fired), report the end, or state the outcome.
+ * @param a.outcome with `outcome`. A run that nobody started here stays cut short; one that is reviewed may only be made worse.
+ */
+export function mayReport(
+  e: Evaluation,
+  a: { run: string; member: string; report: "take-back" | "ended" | "outcome"; outcome?: "completed" | "cut short" },
+): Verdict {
   const f = find(e, a.run);
   if (f.verdict) return f.verdict;
   const place = leadsRun(e, f.run, a.member, "report on the run");
   if (place) return place;
   const running = f.run.start !== null && f.run.endedAt === null;
+  if (a.report === "outcome" && a.outcome !== "cut short" && f.run.start?.unstarted)
+    return no(e, {
+      ...at(a.run),
+      code: "order",
+      title: "Nobody started it here",
+      sentence: "A run without start, crew and card proves nothing: it stays cut short. Plan another run of this rung.",
+      roles: ["lead"],
+    });
+  if (a.report === "outcome" && a.outcome !== "cut short" && f.result.state === "reviewed" && f.run.outcome === "cut short")
+    return no(e, {
+      ...at(a.run),
+      code: "order",
+      title: "The run is reviewed",
+      sentence: "It was reviewed as cut short. Plan another run of this rung.",
+      roles: ["lead"],
+    });
   const right = a.report === "outcome" ? f.run.endedAt !== null : running;
   return right
     ? OK

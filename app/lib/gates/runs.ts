@@ -7,52 +7,52 @@ import type { Facts } from "#app/lib/gates/facts";
 import { requiredBy } from "#app/lib/gates/gate-limits";
 import { soonest } from "#app/lib/gates/items";
 import { rank, rootsOf } from "#app/lib/gates/rank";
-import type { Blocker, GateResult, ItemResult, RunResult, RunState } from "#app/lib/gates/result";
-import { goInForce, type RunFacts } from "#app/lib/gates/run-facts";
+import type { Blocker, Clearance, GateResult, RunResult, RunState } from "#app/lib/gates/result";
+import { goCalled, type RunFacts } from "#app/lib/gates/run-facts";
 import type { Instant, Rung, Wind } from "#app/lib/gates/snapshot";
-import { blocker, count, inSentence, ownerOf, ownersAmong } from "#app/lib/gates/who";
+import { blocker, count, findingOwner, inSentence, looseEndOwner, ownerOf, ownersAmong } from "#app/lib/gates/who";
 
 interface Board {
   facts: Facts;
-  items: Map<string, ItemResult>;
   gates: Map<string, GateResult>;
 }
 
 /** @param run null = the next rung, not planned yet. */
 export function evaluateRun(board: Board, rung: Rung, run: RunFacts | null): RunResult {
-  const { facts, gates, items } = board;
+  const { facts, gates } = board;
   const required = requiredBy(facts, run, rung);
   const planned = run?.plan?.rpm ?? rung.rpm;
-  const clearance = clearanceOf(
-    facts,
-    planned,
-    required,
-    items,
-    run?.plan ? `plan, run card version ${run.plan.version}` : "the rung's own rpm",
-  );
+  const clearance = clearanceOf(facts, planned, required, run?.plan ? `plan, run card version ${run.plan.version}` : "the rung's own rpm");
   const review = run ? reviewBlockers(board, run) : [];
-  const go = run ? goInForce(run, facts.at) : null;
-  const state = run ? stateOf(run, review, !!go) : "planned";
   const base = {
     id: run?.run.id ?? null,
     rung: rung.key,
     label: run?.run.label ?? rung.key,
-    state,
     clearance,
     requiredGates: required,
-    go: go && { id: go.id, ends: go.ends },
+    go: null,
+    goLost: false,
   };
 
-  if (run && (state === "scrubbed" || state === "running" || state === "ended" || state === "reviewed")) {
-    const over = blocker({
+  const over = run ? overState(run, review) : null;
+  if (run && over) {
+    const stop = blocker({
       code: "run-over",
       subject: ["run", run.run.id],
-      title: `Run ${run.run.label} is ${state}`,
-      sentence: state === "running" ? "Report it ended first." : "Plan another run of this rung.",
+      title: `Run ${run.run.label} is ${over}`,
+      sentence: over === "running" ? "Report it ended first." : "Plan another run of this rung.",
       owner: ownerOf(facts, ["lead"]),
       page: "build-up",
     });
-    return { ...base, clear: false, until: null, blockers: [over], startBlockers: [over], reviewBlockers: state === "ended" ? review : [] };
+    return {
+      ...base,
+      state: over,
+      clear: false,
+      until: null,
+      blockers: [stop],
+      startBlockers: [stop],
+      reviewBlockers: over === "ended" ? review : [],
+    };
   }
 
   const blockers = rank(
@@ -62,7 +62,7 @@ export function evaluateRun(board: Board, rung: Rung, run: RunFacts | null): Run
       ...findingBlockers(facts),
       ...looseEndBlockers(facts, rung),
       ...limitBlockers(facts),
-      ...planBlockers(facts, rung, run, clearance.rpm, clearance.binds?.label ?? ""),
+      ...planBlockers(facts, rung, run, clearance),
       ...(run?.plan ? [...positionBlockers(facts, run, rung), ...rollCallBlockers(facts, run), ...windBlockers(facts, run)] : []),
     ],
     gates,
@@ -71,19 +71,33 @@ export function evaluateRun(board: Board, rung: Rung, run: RunFacts | null): Run
   let until: Instant | null = null;
   if (clear && run) {
     for (const id of required) until = soonest(until, gates.get(id)?.until ?? null);
+    // It also rests on the reviews of the runs before it.
+    for (const gate of facts.gates.values())
+      if (gate.lookBack?.kind === "run" && facts.runs.get(gate.lookBack.run)?.start)
+        until = soonest(until, gates.get(gate.id)?.until ?? null);
     until = soonest(soonest(until, newestWind(run)?.dayEnds ?? null), crewUntil(facts, run));
   }
-  return { ...base, clear, until, blockers, startBlockers: run ? startBlockers(facts, run, !!go) : [], reviewBlockers: [] };
+  // GO is over with its card and with what it stood on, even if nobody has written HOLD yet.
+  const called = run ? goCalled(run, facts.at) : null;
+  const go = clear && called?.version === run?.plan?.version && called ? { id: called.id, ends: called.ends } : null;
+  return {
+    ...base,
+    state: go ? "called" : run?.word ? "held" : "planned",
+    go,
+    goLost: called !== null && go === null,
+    clear,
+    until,
+    blockers,
+    startBlockers: run ? startBlockers(facts, run, !!go) : [],
+    reviewBlockers: [],
+  };
 }
 
-function stateOf(run: RunFacts, review: Blocker[], called: boolean): RunState {
-  if (run.start) {
-    if (run.endedAt === null) return "running";
-    return review.length ? "ended" : "reviewed";
-  }
-  if (run.scrub) return "scrubbed";
-  if (run.word === null) return "planned";
-  return called ? "called" : "held";
+/** The state of a run that was started or scrubbed; null = it may still be called. */
+function overState(run: RunFacts, review: Blocker[]): RunState | null {
+  if (!run.start) return run.scrub ? "scrubbed" : null;
+  if (run.endedAt === null) return "running";
+  return review.length ? "ended" : "reviewed";
 }
 
 /** A gate that only a grounding finding stops: the finding stands in the list by itself, and stops the run by itself. */
@@ -153,7 +167,7 @@ function findingBlockers(facts: Facts): Blocker[] {
         sentence: f.fixed
           ? "Fixed; an inspector must look and close it."
           : "It grounds every run. A builder fixes it, then an inspector closes it.",
-        owner: f.fixed ? ownerOf(facts, ["inspector"], [f.fixed.by]) : ownerOf(facts, ["builder", "inspector"]),
+        owner: findingOwner(facts, f),
       }),
     );
 }
@@ -171,13 +185,16 @@ function looseEndBlockers(facts: Facts, rung: Rung): Blocker[] {
         sentence: l.restored
           ? "Restored; a second person must look and confirm."
           : `Restore it, or have an inspector accept it for run ${rung.key}.`,
-        owner: l.restored ? ownerOf(facts, ["builder", "inspector", "lead"], [l.restored.by]) : ownerOf(facts, ["builder", "inspector"]),
+        owner: looseEndOwner(facts, l),
       }),
     );
 }
 
 function limitBlockers(facts: Facts): Blocker[] {
-  const open = facts.snapshot.values.filter((v) => (v.card || v.key === "redline") && (v.value === null || v.source === null));
+  const open: { key: string; label: string }[] = facts.snapshot.values.filter(
+    (v) => (v.card || v.key === "redline") && (v.value === null || v.source === null),
+  );
+  if (!facts.values.has("redline")) open.unshift({ key: "redline", label: "Redline" });
   if (!open.length) return [];
   const first = open.slice(0, 3).map((v) => inSentence(v.label));
   return [
@@ -192,7 +209,7 @@ function limitBlockers(facts: Facts): Blocker[] {
   ];
 }
 
-function planBlockers(facts: Facts, rung: Rung, run: RunFacts | null, cleared: number, binds: string): Blocker[] {
+function planBlockers(facts: Facts, rung: Rung, run: RunFacts | null, { rpm: cleared, binds }: Clearance): Blocker[] {
   const lead = ownerOf(facts, ["lead"]);
   if (!run?.plan)
     return [
@@ -205,7 +222,9 @@ function planBlockers(facts: Facts, rung: Rung, run: RunFacts | null, cleared: n
         page: "build-up",
       }),
     ];
-  if (cleared >= run.plan.rpm) return [];
+  // A grounding finding stands in the list by itself.
+  const grounded = binds?.kind === "finding" && facts.snapshot.findings.some((f) => f.id === binds.id && f.severity === "grounding");
+  if (cleared >= run.plan.rpm || grounded) return [];
   return [
     blocker({
       code: "clearance",
@@ -213,7 +232,7 @@ function planBlockers(facts: Facts, rung: Rung, run: RunFacts | null, cleared: n
       title: `Cleared to ${rpmText(cleared)} only`,
       page: "run",
       id: run.run.id,
-      sentence: `The plan goes to ${rpmText(run.plan.rpm)}; what binds is: ${binds}. Raise that, or plan a lower run.`,
+      sentence: `The plan goes to ${rpmText(run.plan.rpm)}; what binds is: ${binds?.label}. Raise that, or plan a lower run.`,
       owner: lead,
     }),
   ];
@@ -241,7 +260,7 @@ function startBlockers(facts: Facts, run: RunFacts, called: boolean): Blocker[] 
   const minutes = Math.round(facts.snapshot.settings.freshness / 60_000);
   const at = { page: "run" as const, id: run.run.id };
   if (!called) {
-    const over = run.word?.act === "go";
+    const over = run.word?.act === "go" && facts.at >= run.word.ends;
     out.push(
       blocker({
         code: over ? "go-over" : "go-missing",
@@ -305,14 +324,14 @@ export function reviewBlockers({ facts, gates }: Board, run: RunFacts): Blocker[
   const open = run.run.exceedances.filter((x) => x.answered === null);
   if (open[0])
     add("exceedance", `${count(open.length, "exceedance")} not answered`, open[0].sentence, ownerOf(facts, ["builder", "inspector"]));
-  const post = [...facts.gates.values()].find((g) => g.lookBack?.kind === "run" && g.lookBack.run === id);
-  if (!post)
+  const post = [...facts.gates.values()].filter((g) => g.lookBack?.kind === "run" && g.lookBack.run === id).map((g) => g.id);
+  if (!post.length)
     add(
       "gate-missing",
       "No post-run gate",
       "The post-run inspection of this run is not on the board. The lead adds it.",
       ownerOf(facts, ["lead"]),
     );
-  else if (!gates.get(post.id)?.stands) out.push(...rootsOf(facts, gates, [post.id]));
+  else if (!post.every((g) => gates.get(g)?.stands)) out.push(...rootsOf(facts, gates, post));
   return out;
 }

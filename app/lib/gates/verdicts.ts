@@ -1,14 +1,15 @@
 /**
- * May this member do this now? Acts on items and gates. Page, action and API ask the same function, so they say the same sentence.
- * Bad news (failing proof, withdrawal, opening) is taken from any member; good news only where the rules let it count.
+ * May this member do this now? Acts on items and their proofs. Page, action and API ask the same function, so they say the same
+ * sentence. Bad news (failing proof, withdrawal) is taken from any member; good news only where the rules let it count.
  */
+
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import { numberMissing } from "#app/lib/gates/evidence";
-import { currentProof, heldRole, isComputed, nameOf } from "#app/lib/gates/facts";
+import { currentProof, heldRole, itemOf, nameOf } from "#app/lib/gates/facts";
 import { needsMember, needsRole, no, notFound, OK, refuse } from "#app/lib/gates/permit";
 import type { BlockerCode, Verdict } from "#app/lib/gates/result";
-import { doersOf, sameCovers } from "#app/lib/gates/signing";
-import type { Cover, Proof, Role, SigningRole } from "#app/lib/gates/snapshot";
+import type { Proof, Role } from "#app/lib/gates/snapshot";
+import { isComputed } from "#app/lib/gates/work-facts";
 
 const subjectOf = (gate: string) => ({ subject: ["gate", gate] as ["gate", string], page: "gate" as const, id: gate });
 
@@ -17,7 +18,7 @@ export function mayProve(
   e: Evaluation,
   a: { item: string; member: string; as: Role; state: Proof["state"]; late: boolean; told?: boolean },
 ): Verdict {
-  const item = e.facts.items.get(a.item);
+  const item = itemOf(e.facts, a.item);
   const gate = item && e.facts.gates.get(item.gate);
   if (!item || !gate) return notFound(e, "item");
   const at = subjectOf(gate.id);
@@ -41,6 +42,17 @@ export function mayProve(
       roles: ["builder", "inspector"],
     });
   if (!heldRole(e.facts, a.member, a.as, e.at)) return needsRole(e, a.member, [a.as], "prove it so") ?? OK;
+  const signed = e.result.gates[gate.id]?.stands && e.result.items[item.id]?.stands;
+  const toldFirst: Verdict | null =
+    signed && !a.told
+      ? no(e, {
+          ...at,
+          code: "already",
+          title: `${gate.name} stands signed`,
+          sentence: "A new proof makes its signatures lapse. Say that you know, and it is taken.",
+          roles: ["builder"],
+        })
+      : null;
   if (a.state === "na")
     return item.killer && gate.eachRun
       ? no(e, {
@@ -50,7 +62,7 @@ export function mayProve(
           sentence: "This item guards a life: it cannot be marked not applicable. Do it.",
           roles: ["builder"],
         })
-      : OK;
+      : (toldFirst ?? OK);
   for (const part of item.parts) {
     const missing = numberMissing(e.facts, part);
     if (missing)
@@ -75,15 +87,7 @@ export function mayProve(
     const waits = result?.blockers.filter((b) => b.code === "gate-waits") ?? [];
     if (waits.length) return refuse(...waits.map((b) => ({ ...b, sentence: `${b.sentence} Until then this item is guarded.` })));
   }
-  if (result?.stands && e.result.items[item.id]?.stands && !a.told)
-    return no(e, {
-      ...at,
-      code: "already",
-      title: `${gate.name} stands signed`,
-      sentence: "A new proof makes its signatures lapse. Say that you know, and it is taken.",
-      roles: ["builder"],
-    });
-  return OK;
+  return toldFirst ?? OK;
 }
 
 export function mayWithdrawProof(e: Evaluation, a: { proof: string; member: string }): Verdict {
@@ -114,7 +118,7 @@ const ownWork = (e: Evaluation, proof: Proof, member: string, act: string, roles
 
 function present(e: Evaluation, id: string): { proof: Proof; verdict: null } | { proof: null; verdict: Verdict } {
   const proof = e.snapshot.proofs.find((p) => p.id === id);
-  if (!proof || !e.facts.items.has(proof.item)) return { proof: null, verdict: notFound(e, "proof") };
+  if (!proof || !itemOf(e.facts, proof.item)) return { proof: null, verdict: notFound(e, "proof") };
   if (currentProof(e.facts, proof.item)?.id !== id)
     return {
       proof: null,
@@ -140,7 +144,7 @@ export function mayConfirm(e: Evaluation, a: { proof: string; member: string; as
   if (held) return held;
   const own = ownWork(e, found.proof, a.member, "look and confirm", roles);
   if (own) return own;
-  const item = e.facts.items.get(found.proof.item);
+  const item = itemOf(e.facts, found.proof.item);
   if (found.proof.state !== "done" || !(item?.secondEyes || found.proof.late))
     return no(e, { code: "order", title: "No second person asked", sentence: "This proof needs no confirmation.", roles });
   if (!e.result.items[found.proof.item]?.blockers.some((b) => b.code === "needs-second-eyes"))
@@ -165,7 +169,10 @@ export function mayAccept(e: Evaluation, a: { proof: string; member: string }): 
     : no(e, { code: "order", title: "Nothing to accept", sentence: "This proof is not marked not applicable.", roles: ["inspector"] });
 }
 
-const KEEPABLE: BlockerCode[] = ["system-opened-since", "after-gate", "follows", "needs-second-eyes"];
+/** What a keep puts right: an opening since, or a gate worked on since that this one comes after. */
+const KEPT: BlockerCode[] = ["system-opened-since", "after-gate"];
+/** What may stand beside it, for it is put right by another act. */
+const BESIDE: BlockerCode[] = ["follows", "needs-second-eyes"];
 
 export function mayKeep(e: Evaluation, a: { proof: string; member: string }): Verdict {
   const found = present(e, a.proof);
@@ -174,7 +181,7 @@ export function mayKeep(e: Evaluation, a: { proof: string; member: string }): Ve
   if (role) return role;
   const own = ownWork(e, found.proof, a.member, "keep", ["inspector"]);
   if (own) return own;
-  const item = e.facts.items.get(found.proof.item);
+  const item = itemOf(e.facts, found.proof.item);
   if (item && e.facts.gates.get(item.gate)?.eachRun)
     return no(e, {
       code: "order",
@@ -185,7 +192,9 @@ export function mayKeep(e: Evaluation, a: { proof: string; member: string }): Ve
   const result = e.result.items[found.proof.item];
   if (result?.state !== "lapsed")
     return no(e, { code: "order", title: "Not lapsed", sentence: "Only a lapsed proof can be kept.", roles: ["inspector"] });
-  const other = result.blockers.find((b) => !KEEPABLE.includes(b.code));
+  const other =
+    result.blockers.find((b) => !KEPT.includes(b.code) && !BESIDE.includes(b.code)) ??
+    (result.blockers.some((b) => KEPT.includes(b.code)) ? undefined : result.blockers[0]);
   if (other)
     return no(e, {
       code: "order",
@@ -195,118 +204,3 @@ export function mayKeep(e: Evaluation, a: { proof: string; member: string }): Ve
     });
   return OK;
 }
-
-/** @param a.covers what the signer was shown; null asks only whether they may sign now. */
-export function maySign(e: Evaluation, a: { gate: string; member: string; as: SigningRole; covers: Cover[] | null }): Verdict {
-  const gate = e.facts.gates.get(a.gate);
-  const result = e.result.gates[a.gate];
-  if (!gate || !result?.present) return notFound(e, "gate");
-  const at = subjectOf(gate.id);
-  if (!gate.policy.length)
-    return no(e, {
-      ...at,
-      code: "order",
-      title: "No signatures of its own",
-      sentence: `${gate.name} is covered by the two signatures of the release.`,
-      roles: ["lead"],
-    });
-  const place = result.holding.length;
-  const act = place ? `countersign ${gate.name}` : `sign ${gate.name} first`;
-  const wanted = (gate.policy[place] ?? gate.policy.at(-1)) as [SigningRole, ...SigningRole[]];
-  // Who the person is comes before how the gate stands: a wrong role is told so whatever the gate's state.
-  const countersigning = a.as !== "builder";
-  const asked = countersigning
-    ? (gate.policy.at(-1) as [SigningRole, ...SigningRole[]])
-    : (gate.policy[0] as [SigningRole, ...SigningRole[]]);
-  const role = needsRole(e, a.member, asked, countersigning ? `countersign ${gate.name}` : `sign ${gate.name} first`);
-  if (role) return role;
-  const held = needsRole(e, a.member, [a.as], countersigning ? `countersign ${gate.name}` : act);
-  if (held) return held;
-  const doers = doersOf(e.facts, result.covers);
-  if (countersigning && doers.has(a.member))
-    return no(e, {
-      ...at,
-      code: "own-work",
-      title: "Your own work",
-      sentence: `You did or recorded part of ${gate.name} yourself. Whoever countersigns did none of it: another ${a.as} must.`,
-      roles: wanted,
-      barred: [...doers],
-    });
-  if (result.stands)
-    return no(e, {
-      ...at,
-      code: "already",
-      title: `${gate.name} stands signed`,
-      sentence: "It has all its signatures. Nothing is left to sign.",
-      roles: wanted,
-    });
-  if (!result.ready) return refuse(...result.blockers.filter((b) => b.code !== "not-signed"));
-  if (!wanted.includes(a.as)) {
-    const first = place === 0;
-    return no(e, {
-      ...at,
-      code: "order",
-      title: first ? "The builder signs first" : "Already signed by a builder",
-      sentence: first
-        ? `${gate.name} waits for the ${wanted.join(" or ")}'s signature; you countersign after it.`
-        : `The first signature is there. ${gate.name} waits for the ${wanted.join(" or ")}.`,
-      roles: wanted,
-    });
-  }
-  const firstSigner = e.snapshot.signatures.find((s) => s.id === result.holding[0])?.by;
-  if (place && firstSigner === a.member)
-    return no(e, {
-      ...at,
-      code: "own-work",
-      title: "You signed first",
-      sentence: "Two people sign a gate: another person must countersign.",
-      roles: wanted,
-      barred: [a.member],
-    });
-  if (a.covers && !sameCovers(a.covers, result.covers))
-    return no(e, {
-      ...at,
-      code: "stale",
-      title: "The gate has changed",
-      sentence: "A proof was added or changed since you opened this sheet. Read it again, then sign.",
-      roles: wanted,
-    });
-  return OK;
-}
-
-export function mayWithdrawSignature(e: Evaluation, a: { signature: string; member: string }): Verdict {
-  const signature = e.snapshot.signatures.find((s) => s.id === a.signature);
-  if (!signature) return notFound(e, "signature");
-  if (signature.withdrawn)
-    return no(e, { code: "already", title: "Already withdrawn", sentence: "This signature was withdrawn before.", roles: ["inspector"] });
-  return signature.by === a.member ? OK : (needsRole(e, a.member, ["inspector"], "withdraw another person's signature") ?? OK);
-}
-
-/** The lead shapes the board freely until the first proof. */
-export function mayShape(e: Evaluation, a: { member: string }): Verdict {
-  return (
-    needsRole(e, a.member, ["lead"], "change the board") ??
-    (e.snapshot.proofs.length
-      ? no(e, {
-          code: "order",
-          title: "Work has begun",
-          sentence: "After the first proof, what asks for less waits for an inspector's acceptance.",
-          roles: ["inspector"],
-        })
-      : OK)
-  );
-}
-
-export const mayEnterNumber = (e: Evaluation, a: { item: string; member: string }): Verdict =>
-  e.facts.items.has(a.item)
-    ? (needsRole(e, a.member, ["builder", "lead", "inspector"], "enter a maker's number") ?? OK)
-    : notFound(e, "item");
-export const mayConfirmValue = (e: Evaluation, a: { member: string }): Verdict =>
-  needsRole(e, a.member, ["lead", "builder", "inspector"], "enter ratings and limits") ?? OK;
-export const mayOpen = (e: Evaluation, a: { member: string }): Verdict => needsMember(e, a.member) ?? OK;
-export const mayCloseOpening = (e: Evaluation, a: { member: string }): Verdict =>
-  needsRole(e, a.member, ["builder", "inspector"], "close an opening") ?? OK;
-export const mayEditCrib = (e: Evaluation, a: { member: string }): Verdict =>
-  needsRole(e, a.member, ["builder", "lead", "inspector"], "keep the crib") ?? OK;
-export const mayInvite = (e: Evaluation, a: { member: string }): Verdict => needsRole(e, a.member, ["lead"], "invite people") ?? OK;
-export const mayRaise = (e: Evaluation, a: { member: string }): Verdict => needsMember(e, a.member) ?? OK;

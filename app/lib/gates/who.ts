@@ -1,7 +1,7 @@
 /** Who can clear a blocker: every "no" names members, or says whom to invite or what comes first. */
 import { type Facts, heldAnyRole, heldRole } from "#app/lib/gates/facts";
 import type { Blocker, BlockerCode, SubjectKind } from "#app/lib/gates/result";
-import type { Role } from "#app/lib/gates/snapshot";
+import type { Finding, LooseEnd, Role } from "#app/lib/gates/snapshot";
 
 const articles: Record<Role, string> = { lead: "a lead", builder: "a builder", inspector: "an inspector", crew: "a crew member" };
 
@@ -18,6 +18,14 @@ export function ownerOf(facts: Facts, roles: [Role, ...Role[]], barred: string[]
   const other = barred.length ? `${articles[role].replace(/^an? /, "another ")}` : articles[role];
   return { role, members, next: members.length ? null : `Nobody here can: invite ${other} on the Crew page.` };
 }
+
+/** A builder fixes a finding; an inspector, another person, closes it. */
+export const findingOwner = (facts: Facts, f: Finding): Blocker["owner"] =>
+  f.fixed ? ownerOf(facts, ["inspector"], [f.fixed.by]) : ownerOf(facts, ["builder"]);
+
+/** Builder or inspector restores a loose end; then a second person looks. */
+export const looseEndOwner = (facts: Facts, l: LooseEnd): Blocker["owner"] =>
+  l.restored ? ownerOf(facts, ["builder", "inspector", "lead"], [l.restored.by]) : ownerOf(facts, ["builder", "inspector"]);
 
 interface Draft {
   code: BlockerCode;

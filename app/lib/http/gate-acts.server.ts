@@ -1,5 +1,8 @@
 // The acts of a gate's page: one form, one service each. What cannot be taken goes back with the text as it was typed.
+
 import type { z } from "zod";
+import { itemOf } from "#app/lib/gates/facts";
+import { instantOfLocal } from "#app/lib/gates/local-time";
 import type { InstallContext } from "#app/lib/http/install.server";
 import type { Refused } from "#app/lib/http/respond.server";
 import { commandIdSchema } from "#app/lib/schemas/act";
@@ -23,7 +26,6 @@ import { withdrawProof } from "#app/lib/services/withdraw-proof.server";
 import { withdrawSignature } from "#app/lib/services/withdraw-signature.server";
 import { format, parseEntry, type UnitSystem } from "#app/lib/units/display";
 import { type EntryError, type ReadEntry, readEntry } from "#app/lib/views/evidence-form";
-import { instantAt } from "#app/lib/views/local-time";
 
 export interface GateReply {
   item: string | null;
@@ -101,7 +103,7 @@ async function simple<S extends z.ZodType, T>(
 
 async function prove(acting: Acting, intent: "prove" | "preview" | "failed" | "na", photosRefused: EntryError[]): Promise<GateActed> {
   const { install, form, item: id } = acting;
-  const item = id ? install.e.facts.items.get(id) : undefined;
+  const item = id ? itemOf(install.e.facts, id) : undefined;
   if (!item) return back(acting, 404, [], notFound("That item"));
   const read = readEntry(item, form, { snapshot: install.snapshot, units: install.me.units, now: install.now });
   if (intent === "preview") return preview(acting, read);
@@ -141,9 +143,11 @@ function lateOf({ form, install }: Acting): { at: number | null; errors: EntryEr
   const did = text(form, "did");
   if (!typed)
     return { at: null, errors: did && did !== install.me.id ? [{ field: "at", message: "Somebody else did it: enter when." }] : [] };
-  const at = instantAt(typed, install.snapshot.install.timeZone);
-  if (at === null) return { at, errors: [{ field: "at", message: "Enter day and time, such as 3 December, 14:10." }] };
-  return { at, errors: at > install.now ? [{ field: "at", message: "That time has not come yet. Enter when it was done." }] : [] };
+  const [date = "", time = ""] = typed.split("T");
+  const read = instantOfLocal(date, time, install.snapshot.install.timeZone);
+  if (!read.ok) return { at: null, errors: [{ field: "at", message: read.sentence }] };
+  const early = read.at > install.now;
+  return { at: read.at, errors: early ? [{ field: "at", message: "That time has not come yet. Enter when it was done." }] : [] };
 }
 
 function preview(acting: Acting, read: ReadEntry): GateActed {
@@ -162,7 +166,7 @@ function preview(acting: Acting, read: ReadEntry): GateActed {
 async function number(acting: Acting): Promise<GateActed> {
   const { form, install, item: id } = acting;
   const n = Number(text(form, "part"));
-  const part = id ? install.e.facts.items.get(id)?.parts[n] : undefined;
+  const part = id ? itemOf(install.e.facts, id)?.parts[n] : undefined;
   const errors: EntryError[] = [];
   const field = (name: string) => `n${n}.${name}`;
   const end = (name: "min" | "max", units: UnitSystem): number | null => {
@@ -198,7 +202,7 @@ function same(typed: number, there: number | null, quantity: Parameters<typeof f
 
 function replyOf({ form, item }: Acting): GateReply {
   const typed: Record<string, string[]> = {};
-  for (const [name, value] of form.entries()) if (typeof value === "string") typed[name] = [...(typed[name] ?? []), value];
+  for (const name of new Set(form.keys())) typed[name] = form.getAll(name).filter((value) => typeof value === "string");
   return { item, typed, errors: [], refusal: null, result: null };
 }
 

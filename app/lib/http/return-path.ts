@@ -7,7 +7,9 @@ export function returnPath(path: string | null | undefined, fallback = "/hangar"
   const base = "http://here.invalid";
   try {
     const url = new URL(path, base);
-    return url.origin === base ? url.pathname + url.search + url.hash : fallback;
+    // "/.//elsewhere" becomes "//elsewhere", which a browser reads as another site.
+    const here = url.origin === base && !url.pathname.startsWith("//");
+    return here ? url.pathname + url.search + url.hash : fallback;
   } catch {
     return fallback;
   }

@@ -2,7 +2,9 @@
  * What a signer is shown and signs: the words of the signature's meaning, and the sheet as plain text.
  * The page shows this very text; it is stored with the signature and its hash goes into the chain. Times with zone, numbers in SI.
  */
+
 import type { Evaluation } from "#app/lib/gates/evaluate";
+import { itemOf } from "#app/lib/gates/facts";
 import type { Cover, SigningRole } from "#app/lib/gates/snapshot";
 import { when } from "#app/lib/gates/when";
 import { evidenceWords } from "#app/lib/record/evidence-words";
@@ -49,7 +51,7 @@ export function shownRelease(e: Evaluation, as: "lead" | "inspector"): string {
 }
 
 function coverLine(e: Evaluation, cover: Cover): string {
-  const item = e.facts.items.get(cover.item);
+  const item = itemOf(e.facts, cover.item);
   if (!item) throw new Error("A cover of an item that is not on the board");
   const head = `${item.key} (revision ${cover.revision}) ${item.words}`;
   const proof = e.snapshot.proofs.find((p) => p.id === cover.proof);

@@ -37,6 +37,7 @@ const run = z.object({
   requiredGates: z.array(z.string()),
   blockers,
   go: z.object({ id: z.string(), ends: instant }).nullable(),
+  goLost: z.boolean(),
   startBlockers: blockers,
   reviewBlockers: blockers,
 });

@@ -1,13 +1,13 @@
 /** The crib's forms as a page sends them: text and dates in, the services' input out. Masses are typed in the person's units. Pure. */
 import { z } from "zod";
-import { commandIdSchema, idSchema, noteSchema } from "#app/lib/schemas/act";
+import { commandIdSchema, idSchema, noteSchema, textSchema } from "#app/lib/schemas/act";
 import { addExtinguisherSchema, addToolSchema, dateSchema } from "#app/lib/schemas/crib";
 import { parseEntry, type UnitSystem } from "#app/lib/units/display";
 
 const commandId = commandIdSchema;
 const date = (message: string) => z.string(message).pipe(dateSchema);
-const name = (message: string) => z.string(message).trim().min(2, message).max(120);
-const said = (message: string) => z.string(message).pipe(noteSchema.unwrap().min(3, message));
+const name = (message: string) => textSchema(message, 120, 2);
+const said = (message: string) => textSchema(message, 2000);
 
 export const addToolForm = z.object({
   intent: z.literal("add-tool"),

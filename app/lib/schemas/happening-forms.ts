@@ -1,14 +1,13 @@
 /** The forms of openings, loose ends and findings as a page sends them: text in, the services' input out. Speeds are typed in rpm. Pure. */
 import { z } from "zod";
+import { instantOfLocal } from "#app/lib/gates/local-time";
 import { when } from "#app/lib/gates/when";
-import { commandIdSchema, idSchema, noteSchema, systemSchema } from "#app/lib/schemas/act";
+import { commandIdSchema, idSchema, noteSchema, systemSchema, textSchema } from "#app/lib/schemas/act";
 import { acceptLooseEndSchema, makeLooseEndSchema } from "#app/lib/schemas/happenings";
-import { instantOfLocal } from "#app/lib/schemas/local-time";
 import { parseEntry, type UnitSystem } from "#app/lib/units/display";
 
 const commandId = commandIdSchema;
-/** Words that say why; `message` where they are missing: an empty field comes as none. */
-const words = (message: string) => z.string(message).trim().min(3, message).max(1000, "Use at most 1,000 characters.");
+const words = (message: string) => textSchema(message, 1000);
 
 // ---------------------------------------------------------------- openings
 
@@ -60,7 +59,7 @@ const wholeNumber = z
 
 export const makeLooseEndForm = z.object({
   commandId,
-  what: z.string("Say what it is.").pipe(makeLooseEndSchema.shape.what),
+  what: makeLooseEndSchema.shape.what,
   count: wholeNumber,
   system: systemSchema,
   why: words("Say why it is off, in a few words."),
@@ -80,7 +79,7 @@ export const looseEndForm = z.object({ commandId, looseEnd: idSchema });
 export const acceptLooseEndForm = z.object({
   commandId,
   looseEnd: idSchema,
-  rung: z.string("Choose the run.").pipe(acceptLooseEndSchema.shape.rung),
+  rung: acceptLooseEndSchema.shape.rung,
   reason: words("Say why the run can go with it, in a few words."),
 });
 

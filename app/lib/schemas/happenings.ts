@@ -1,6 +1,6 @@
 /** Forms about openings, loose ends and findings. */
 import { z } from "zod";
-import { idSchema, noteSchema, reasonSchema, rotationSchema, systemSchema } from "#app/lib/schemas/act";
+import { idSchema, noteSchema, reasonSchema, rotationSchema, systemSchema, textSchema } from "#app/lib/schemas/act";
 
 export const openSystemSchema = z.object({
   systems: z.array(systemSchema).min(1, "Choose at least one system."),
@@ -15,7 +15,7 @@ export type CloseOpening = z.output<typeof closeOpeningSchema>;
 export type MarkMistake = z.output<typeof markMistakeSchema>;
 
 export const makeLooseEndSchema = z.object({
-  what: z.string().trim().min(3, "Say what it is.").max(200),
+  what: textSchema("Say what it is.", 200),
   count: z.number().int().min(1).max(1000),
   system: systemSchema,
   why: reasonSchema,
@@ -27,7 +27,11 @@ export const makeLooseEndSchema = z.object({
   askedBy: idSchema.nullable().default(null),
 });
 export const looseEndSchema = z.object({ looseEnd: idSchema });
-export const acceptLooseEndSchema = z.object({ looseEnd: idSchema, rung: z.string().min(1).max(8), reason: reasonSchema });
+export const acceptLooseEndSchema = z.object({
+  looseEnd: idSchema,
+  rung: z.string("Choose the run.").min(1, "Choose the run.").max(8, "Choose the run."),
+  reason: reasonSchema,
+});
 export type MakeLooseEnd = z.output<typeof makeLooseEndSchema>;
 export type LooseEndRef = z.output<typeof looseEndSchema>;
 export type AcceptLooseEnd = z.output<typeof acceptLooseEndSchema>;

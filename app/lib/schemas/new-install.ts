@@ -8,16 +8,7 @@ import { createInstallSchema } from "#app/lib/schemas/set-up";
 import type { ValueDef, ValueKey } from "#app/lib/template/types";
 import { format, parseEntry, type UnitSystem } from "#app/lib/units/display";
 
-export const LONGEST_REGISTRATION = 12;
-
-export const identitySchema = createInstallSchema.pick({ name: true, timeZone: true }).extend({
-  registration: z
-    .string()
-    .trim()
-    .toUpperCase()
-    .min(2, "Enter the registration, as painted on the side.")
-    .max(LONGEST_REGISTRATION, `Use at most ${LONGEST_REGISTRATION} characters.`),
-});
+export const identitySchema = createInstallSchema.pick({ registration: true, name: true, timeZone: true });
 
 /** What a value starts from, as its field shows it; empty where only the maker can say. */
 export const presetText = (def: ValueDef, units: UnitSystem): string =>

@@ -12,7 +12,7 @@ export function valueForm(def: ValueDef & Value, units: UnitSystem) {
   const shown = def.value === null ? null : format(def.quantity, def.value, units, def.shownIn).value;
   return z.object({
     commandId: commandIdSchema,
-    key: z.literal(def.key),
+    key: z.literal(def.key, "The form has lost which value it is for. Load the page again."),
     value: z
       .string()
       .default("")
@@ -23,7 +23,7 @@ export function valueForm(def: ValueDef & Value, units: UnitSystem) {
         context.addIssue({ code: "custom", message: read.sentence });
         return z.NEVER;
       }),
-    source: z.string("Say where it was read, such as the manual and its page.").pipe(sourceSchema),
+    source: sourceSchema,
   });
 }
 
@@ -38,3 +38,5 @@ export const addMemberForm = z.object({
 });
 
 export const endRoleForm = z.object({ commandId: commandIdSchema, member: idSchema, role: roleSchema });
+
+export const mailAgainForm = z.object({ commandId: commandIdSchema, mail: idSchema });

@@ -1,9 +1,12 @@
 /** Forms of the set-up: a new install, its people, its ratings and limits, the maker's numbers of its items. */
 import { z } from "zod";
-import { idSchema, roleSchema, sourceSchema } from "#app/lib/schemas/act";
+import { idSchema, roleSchema, sourceSchema, textSchema } from "#app/lib/schemas/act";
 import { traitsSchema } from "#app/lib/template/traits";
 
-const timeZoneSchema = z.string().refine((zone) => {
+/** It is painted on the strip of every page, which has room for so many. */
+export const LONGEST_REGISTRATION = 12;
+
+const timeZoneSchema = z.string("Choose a time zone.").refine((zone) => {
   try {
     new Intl.DateTimeFormat("en", { timeZone: zone });
     return true;
@@ -13,8 +16,8 @@ const timeZoneSchema = z.string().refine((zone) => {
 }, "Choose a time zone.");
 
 export const createInstallSchema = z.object({
-  registration: z.string().trim().min(2, "Enter the registration.").max(20),
-  name: z.string().trim().min(2, "Give the install a name.").max(80),
+  registration: textSchema("Enter the registration, as painted on the side.", LONGEST_REGISTRATION, 2).toUpperCase(),
+  name: textSchema("Give the install a name.", 80, 2),
   timeZone: timeZoneSchema,
   traits: traitsSchema,
   /** SI by value key; `source` null = not confirmed. */

@@ -2,7 +2,7 @@
 import { z } from "zod";
 import { idSchema, reasonSchema } from "#app/lib/schemas/act";
 
-export const pinSchema = z.string().min(1, "Enter your PIN.").max(72);
+export const pinSchema = z.string("Enter your PIN.").min(1, "Enter your PIN.").max(72, "No PIN is as long as this.");
 export const coverSchema = z.object({ item: idSchema, revision: z.number().int(), proof: idSchema.nullable() });
 
 export const signGatesSchema = z.object({

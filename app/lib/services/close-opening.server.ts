@@ -1,5 +1,5 @@
 // The system is closed up again. What it was proved by before is done anew.
-import { mayCloseOpening } from "#app/lib/gates/verdicts";
+import { mayCloseOpening } from "#app/lib/gates/happening-verdicts";
 import type { CloseOpening } from "#app/lib/schemas/happenings";
 import { writeClosing } from "#app/lib/services/open-system.server";
 import { done, notFound, type Outcome, refusalOf } from "#app/lib/services/outcome";

@@ -1,7 +1,7 @@
 // A command is done once. Its first outcome is kept in the transaction that did it and given again to whoever repeats it.
 // A refusal is not kept: it changed nothing, so the same command is judged afresh when it comes again.
 import { eq } from "drizzle-orm";
-import type { Tx } from "#app/db/client.server";
+import type { Reader, Tx } from "#app/db/client.server";
 import { commands } from "#app/db/schema/commands";
 import { canonical } from "#app/lib/record/canonical";
 import { hashOf } from "#app/lib/record/chain";
@@ -17,8 +17,8 @@ export interface Command {
 }
 
 /** The first outcome of this command, a refusal when its id was used for something else, or null when it is new. */
-export async function replayOf<T>(tx: Tx, command: Command): Promise<Outcome<T> | null> {
-  const [row] = await tx.select().from(commands).where(eq(commands.id, command.id));
+export async function replayOf<T>(reader: Reader, command: Command): Promise<Outcome<T> | null> {
+  const [row] = await reader.select().from(commands).where(eq(commands.id, command.id));
   if (!row) return null;
   if (
     row.userId !== command.userId ||

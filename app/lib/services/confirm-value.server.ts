@@ -1,15 +1,15 @@
 // Enters or confirms a rating or limit, with where it was read. Every item that uses it gets a new revision where the value changes,
-// and the ladder's speeds follow. A value that was confirmed before is an inspector's to change once work has begun.
+// and the ladder's speeds follow.
 import { and, eq } from "drizzle-orm";
 import { installs } from "#app/db/schema/installs";
 import { items } from "#app/db/schema/items";
 import { rungs } from "#app/db/schema/rungs";
 import { values } from "#app/db/schema/values";
+import { isInspectorsToChange, mayConfirmValue } from "#app/lib/gates/set-up-verdicts";
 import type { Item } from "#app/lib/gates/snapshot";
-import { mayConfirmValue } from "#app/lib/gates/verdicts";
 import type { ConfirmValue } from "#app/lib/schemas/set-up";
 import { withIds } from "#app/lib/services/board-rows";
-import { done, notFound, type Outcome, refusalOf, refuse } from "#app/lib/services/outcome";
+import { done, type Outcome, refusalOf } from "#app/lib/services/outcome";
 import { roleOf } from "#app/lib/services/parts.server";
 import { type Act, type Doing, perform } from "#app/lib/services/perform.server";
 import { carryOver, same } from "#app/lib/template/carry-over";
@@ -20,21 +20,14 @@ type Revised = { item: string; revision: number }[];
 
 export function confirmValue(act: Act, input: ConfirmValue): Promise<Outcome<{ revised: Revised }>> {
   return perform({ ...act, kind: "confirm-value", input }, async (d) => {
-    const refusal = refusalOf(mayConfirmValue(d.e, { member: d.member.id }));
-    if (refusal) return refusal;
     const { key, value, source } = input;
     const known = d.e.snapshot.values.find((v) => v.key === key);
-    if (!known) return notFound("That rating or limit");
-    const changed = known.value !== value;
-    const taken = changed && known.source !== null && d.e.snapshot.proofs.length > 0;
-    if (taken && !d.member.roles.includes("inspector"))
-      return refuse(
-        403,
-        "not-your-role",
-        `${known.label} was confirmed (${known.source}) and work has begun. An inspector must change it.`,
-      );
-    const revised = changed ? await carryThrough(d, known.key, value) : [];
-    const as = taken ? "inspector" : roleOf(d.member, "lead", "builder", "inspector");
+    const changes = known?.value !== value;
+    const refusal = refusalOf(mayConfirmValue(d.e, { member: d.member.id, value: { key, changes } }));
+    if (refusal) return refusal;
+    if (!known) throw new Error("A value was allowed that is not there");
+    const revised = changes ? await carryThrough(d, known.key, value) : [];
+    const as = changes && isInspectorsToChange(d.e, key) ? "inspector" : roleOf(d.member, "lead", "builder", "inspector");
     await d.record(as, { type: "value-confirmed", data: { key, value, source, revised } });
     await d.tx
       .update(values)

@@ -1,7 +1,7 @@
 // Sets an install up: its board is generated from the answers about the engine and the values known so far.
 // Whoever sets it up is its lead.
 
-import { eq } from "drizzle-orm";
+import { and, eq, gt } from "drizzle-orm";
 import { write } from "#app/db/client.server";
 import { gates } from "#app/db/schema/gates";
 import { installs } from "#app/db/schema/installs";
@@ -17,10 +17,14 @@ import { FIRST } from "#app/lib/record/chain";
 import type { CreateInstall } from "#app/lib/schemas/set-up";
 import { boardRows } from "#app/lib/services/board-rows";
 import { remember, replayOf } from "#app/lib/services/commands.server";
-import { done, notFound, type Outcome } from "#app/lib/services/outcome";
+import { done, notFound, type Outcome, refuse } from "#app/lib/services/outcome";
 import { recordWriter } from "#app/lib/services/record-writer.server";
 import { generate } from "#app/lib/template/generate";
 import type { GeneratedBoard, ValueKey } from "#app/lib/template/types";
+
+const DAY = 24 * 60 * 60_000;
+/** Of one account; nobody builds as many, and each makes some hundred rows. */
+export const INSTALLS_A_DAY = 20;
 
 export interface NewInstall {
   install: string;
@@ -42,6 +46,13 @@ export function createInstall(
     if (first) return first;
     const [person] = await tx.select({ id: users.id, name: users.name }).from(users).where(eq(users.id, actor.userId));
     if (!person) return notFound("Your account");
+    const lately = await tx.$count(installs, and(eq(installs.createdBy, person.id), gt(installs.createdAt, clock() - DAY)));
+    if (lately >= INSTALLS_A_DAY)
+      return refuse(
+        409,
+        "too-many-installs",
+        `You have set up ${lately} installs within 24 hours, as many as one account may. Nothing was made; set this one up tomorrow.`,
+      );
     const installId = newId();
     const { registration, name, timeZone, traits } = input;
     const rows = boardRows(installId, board, input.values, newId);

@@ -1,7 +1,8 @@
 // The crib's acts: tools and extinguishers come in, and are checked. A bad check reaches back to the last good one by itself.
 import { extinguisherChecks, extinguishers, toolChecks, tools } from "#app/db/schema/crib";
-import { endOfDate } from "#app/lib/gates/day";
-import { mayEditCrib, mayRaise } from "#app/lib/gates/verdicts";
+import { mayRaise } from "#app/lib/gates/happening-verdicts";
+import { endOfDate } from "#app/lib/gates/local-time";
+import { mayEditCrib } from "#app/lib/gates/set-up-verdicts";
 import type { AddExtinguisher, AddTool, RecordLook, RecordToolCheck } from "#app/lib/schemas/crib";
 import { done, invalid, notFound, type Outcome, refusalOf } from "#app/lib/services/outcome";
 import { roleOf } from "#app/lib/services/parts.server";

@@ -1,10 +1,11 @@
 // Enters a maker's number or reference of an item, with where it was read. A missing number and a narrower band hold at once;
-// the default confirmed as it is changes nothing but its source; a wider band is an inspector's to enter once work has begun.
+// the default confirmed as it is changes nothing but its source.
 import { eq } from "drizzle-orm";
 import { items } from "#app/db/schema/items";
-import { mayEnterNumber } from "#app/lib/gates/verdicts";
+import { itemOf } from "#app/lib/gates/facts";
+import { mayEnterNumber } from "#app/lib/gates/set-up-verdicts";
 import type { EnterNumber } from "#app/lib/schemas/set-up";
-import { done, invalid, notFound, type Outcome, refusalOf, refuse } from "#app/lib/services/outcome";
+import { done, invalid, notFound, type Outcome, refusalOf } from "#app/lib/services/outcome";
 import { roleOf } from "#app/lib/services/parts.server";
 import { type Act, perform } from "#app/lib/services/perform.server";
 import type { Part } from "#app/lib/template/types";
@@ -16,20 +17,17 @@ export function enterNumber(act: Act, input: EnterNumber): Promise<Outcome<{ ite
   return perform({ ...act, kind: "enter-number", input }, async (d) => {
     const refusal = refusalOf(mayEnterNumber(d.e, { item: input.item, member: d.member.id }));
     if (refusal) return refusal;
-    const item = d.e.facts.items.get(input.item);
+    const item = itemOf(d.e.facts, input.item);
     const part = item?.parts[input.part];
     if (!item || !part) return notFound("That part of the item");
     const entered = enter(part, input);
     if (typeof entered === "string") return invalid(entered);
-    if (entered.asksLess && d.e.snapshot.proofs.length > 0 && !d.member.roles.includes("inspector"))
-      return refuse(
-        403,
-        "not-your-role",
-        "This asks for less than the number that is there. Work has begun, so an inspector must enter it.",
-      );
+    const { asksLess } = entered;
+    const less = refusalOf(mayEnterNumber(d.e, { item: input.item, member: d.member.id, asksLess }));
+    if (less) return less;
     const revision = item.revision + (entered.changed ? 1 : 0);
     const parts = item.parts.map((p, n) => (n === input.part ? entered.part : p));
-    const as = entered.asksLess ? roleOf(d.member, "inspector", "lead") : roleOf(d.member, "builder", "lead", "inspector");
+    const as = asksLess ? roleOf(d.member, "inspector", "lead") : roleOf(d.member, "builder", "lead", "inspector");
     const said = input.text ?? input.band;
     await d.record(as, {
       type: "number-entered",

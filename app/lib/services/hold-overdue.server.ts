@@ -31,7 +31,7 @@ function holdIn(installId: string): Promise<number> {
     for (const run of e.result.runs) {
       const facts = run.id ? e.facts.runs.get(run.id) : undefined;
       const go = facts?.word?.act === "go" && !facts.start && !facts.scrub ? facts.word : null;
-      if (!go || (run.go && run.clear)) continue;
+      if (!go || run.go) continue;
       const [first] = run.blockers;
       const over = `Its window ended on ${e.facts.when(go.ends)}.`;
       // In the name of the lead whose GO it ends; `auto` says that the board wrote it.

@@ -1,6 +1,8 @@
 // Something is removed, capped or left off for now. Where no item asked for it, making it is an opening of its system too.
+
 import { looseEnds } from "#app/db/schema/loose-ends";
-import { mayRaise } from "#app/lib/gates/verdicts";
+import { itemOf } from "#app/lib/gates/facts";
+import { mayRaise } from "#app/lib/gates/happening-verdicts";
 import type { MakeLooseEnd } from "#app/lib/schemas/happenings";
 import { writeOpening } from "#app/lib/services/open-system.server";
 import { done, invalid, notFound, type Outcome, refusalOf } from "#app/lib/services/outcome";
@@ -14,7 +16,7 @@ export function makeLooseEnd(act: Act, input: MakeLooseEnd): Promise<Outcome<{ l
     const { what, count, system, why, due, askedBy } = input;
     if (due.kind === "gate" ? !d.e.facts.gates.has(due.gate) : !d.e.facts.rungs.some((r) => r.key === due.rung))
       return notFound("The gate or rung it is due before");
-    const asking = askedBy === null ? null : d.e.facts.items.get(askedBy);
+    const asking = askedBy === null ? null : itemOf(d.e.facts, askedBy);
     if (asking === undefined) return notFound("That item");
     if (asking && asking.offersLooseEnd?.system !== system) return invalid(`${asking.key} does not ask for a loose end of this system.`);
     const as = roleOf(d.member, "builder", "inspector");

@@ -2,7 +2,7 @@
 import { and, eq, isNull } from "drizzle-orm";
 import { memberRoles, members } from "#app/db/schema/members";
 import { users } from "#app/db/schema/users";
-import { mayInvite } from "#app/lib/gates/verdicts";
+import { mayInvite } from "#app/lib/gates/set-up-verdicts";
 import { newId } from "#app/lib/ids";
 import type { AddMember, EndRole } from "#app/lib/schemas/set-up";
 import { done, notFound, type Outcome, refusalOf, refuse } from "#app/lib/services/outcome";

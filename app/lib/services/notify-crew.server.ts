@@ -1,6 +1,6 @@
 // Puts the crew's mail about a run into the outbox, in the transaction of the act that it tells about.
 // Read by everybody with a position on the run, and by every lead.
-import { eq, inArray } from "drizzle-orm";
+import { and, eq, gt, inArray, isNull } from "drizzle-orm";
 import type { Tx } from "#app/db/client.server";
 import { installs } from "#app/db/schema/installs";
 import { outbox } from "#app/db/schema/outbox";
@@ -9,7 +9,7 @@ import { users } from "#app/db/schema/users";
 import { env } from "#app/lib/env.server";
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import type { Blocker, RunResult } from "#app/lib/gates/result";
-import type { Snapshot } from "#app/lib/gates/snapshot";
+import type { RunAct, Snapshot } from "#app/lib/gates/snapshot";
 import type { RunMailKind, RunMailModel } from "#app/lib/mail/compose/model";
 import { composeRunMail } from "#app/lib/mail/compose/run-mail";
 import { enqueue } from "#app/lib/mail/outbox.server";
@@ -28,6 +28,9 @@ export interface CrewNews {
   stops: Blocker[];
   head: { seq: number; hash: string };
 }
+
+/** For so long a HOLD of a run that is held already is no news to who was mailed about it, ms. */
+const HOLD_IS_NEWS_FOR = 2 * 60_000;
 
 /** The standing words of product and card: nothing here replaces whoever has the last word on the aircraft. */
 const CAUTIONS = [
@@ -51,7 +54,9 @@ export async function notifyCrew(tx: Tx, news: CrewNews): Promise<void> {
     .filter((a) => a.act === "go" && a.id !== news.actId)
     .sort((a, b) => a.seq - b.seq)
     .at(-1);
+  const told = news.kind === "hold" ? await toldOfHold(tx, news, run.acts) : [];
   for (const reader of readers) {
+    if (told.includes(reader.id)) continue;
     const mail = composeRunMail(news.kind, model, { member: reader.id, name: reader.name, units: reader.units });
     const answers = go ? await messageIdOf(tx, `go:${go.id}:${reader.id}`) : undefined;
     await enqueue(tx, {
@@ -64,6 +69,20 @@ export async function notifyCrew(tx: Tx, news: CrewNews): Promise<void> {
       dedupeKey: `${news.kind}:${news.actId}:${reader.id}`,
     });
   }
+}
+
+/** Who was mailed just now that this run is held, with no GO since. */
+async function toldOfHold(tx: Tx, { actId, e }: CrewNews, acts: RunAct[]): Promise<(string | null)[]> {
+  const called = Math.max(0, ...acts.filter((a) => a.act === "go").map((a) => a.seq));
+  const holds = acts.filter((a) => a.act === "hold" && a.id !== actId && a.seq > called).map((a) => a.id);
+  const lately = and(
+    eq(outbox.installId, e.snapshot.install.id),
+    eq(outbox.kind, "hold"),
+    gt(outbox.createdAt, e.at - HOLD_IS_NEWS_FOR),
+    isNull(outbox.failedAt),
+  );
+  const mails = await tx.select({ reader: outbox.toUserId, key: outbox.dedupeKey }).from(outbox).where(lately);
+  return mails.filter((m) => holds.some((id) => m.key === `hold:${id}:${m.reader}`)).map((m) => m.reader);
 }
 
 async function messageIdOf(tx: Tx, dedupeKey: string): Promise<string | undefined> {

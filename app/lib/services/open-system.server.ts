@@ -1,7 +1,7 @@
 // A system was opened up or disturbed: every proof of it lapses until it is done again. Closed in the same act where it is over.
 import { openingClosings, openings } from "#app/db/schema/openings";
+import { mayOpen } from "#app/lib/gates/happening-verdicts";
 import type { Role } from "#app/lib/gates/snapshot";
-import { mayOpen } from "#app/lib/gates/verdicts";
 import type { OpenSystem } from "#app/lib/schemas/happenings";
 import { done, type Outcome, refusalOf } from "#app/lib/services/outcome";
 import { roleOf } from "#app/lib/services/parts.server";

@@ -21,6 +21,16 @@ export interface Act {
   commandId: string;
 }
 
+export type NamedAct = Act & { kind: string; input: unknown };
+
+export const commandOf = ({ installId, actor, commandId, kind, input }: NamedAct): Command => ({
+  id: commandId,
+  userId: actor.userId,
+  installId,
+  kind,
+  input,
+});
+
 export interface Doing {
   tx: Tx;
   installId: string;
@@ -43,13 +53,9 @@ class Refused extends Error {
  * Does one act. `work` returns `done(value)` or a refusal; a refusal leaves nothing behind.
  * A repeated command returns what its first time returned. Not a member: 404.
  */
-export async function perform<T>(
-  act: Act & { kind: string; input: unknown },
-  work: (doing: Doing) => Promise<Outcome<T>>,
-): Promise<Outcome<T>> {
-  const command: Command = { id: act.commandId, userId: act.actor.userId, installId: act.installId, kind: act.kind, input: act.input };
+export async function perform<T>(act: NamedAct, work: (doing: Doing) => Promise<Outcome<T>>): Promise<Outcome<T>> {
   try {
-    return await write((tx) => inTransaction(tx, command, work));
+    return await write((tx) => inTransaction(tx, commandOf(act), work));
   } catch (error) {
     if (error instanceof Refused) return error.refusal;
     throw error;
@@ -66,7 +72,7 @@ async function inTransaction<T>(tx: Tx, command: Command, work: (doing: Doing) =
   const record: Doing["record"] = (as, body, id) => writer.record({ by: userId, as }, body, id);
   const outcome = await work({ tx, installId, e, now: writer.now, member, writer, record });
   if (!outcome.ok) throw new Refused(outcome);
-  if (e.result.runs.some((r) => r.go)) {
+  if (e.result.runs.some((r) => r.go || r.goLost)) {
     const who = { by: userId, as: member.roles[0] ?? "crew" };
     await holdWhatIsNotClear({ tx, writer, e: await evaluateIn(tx, installId, writer.now), who });
   }

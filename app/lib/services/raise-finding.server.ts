@@ -2,7 +2,7 @@
 import { and, eq } from "drizzle-orm";
 import { files } from "#app/db/schema/files";
 import { findings } from "#app/db/schema/findings";
-import { mayRaise } from "#app/lib/gates/verdicts";
+import { mayRaise } from "#app/lib/gates/happening-verdicts";
 import type { RaiseFinding } from "#app/lib/schemas/happenings";
 import { done, invalid, type Outcome, refusalOf } from "#app/lib/services/outcome";
 import { roleOf } from "#app/lib/services/parts.server";

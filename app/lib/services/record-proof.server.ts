@@ -1,7 +1,9 @@
 // Records one proof of one item. Its evidence is checked for shape here; whether it meets the criterion is derived, not stored.
+
 import { and, eq, inArray } from "drizzle-orm";
 import { files } from "#app/db/schema/files";
 import { proofs } from "#app/db/schema/proofs";
+import { itemOf } from "#app/lib/gates/facts";
 import type { Evidence } from "#app/lib/gates/snapshot";
 import { mayProve } from "#app/lib/gates/verdicts";
 import { checkEvidence } from "#app/lib/schemas/evidence";
@@ -13,7 +15,7 @@ import { type Act, type Doing, perform } from "#app/lib/services/perform.server"
 export function recordProof(act: Act, input: RecordProof): Promise<Outcome<{ proof: string }>> {
   return perform({ ...act, kind: "record-proof", input }, async (d) => {
     const { item: itemId, state, did, at } = input;
-    const item = d.e.facts.items.get(itemId);
+    const item = itemOf(d.e.facts, itemId);
     if (!item) return notFound("That item");
     const late = at !== null;
     // A failing proof is bad news: it names whatever role the person holds.

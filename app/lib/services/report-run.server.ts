@@ -1,7 +1,7 @@
 // What is reported of a started run: its end and its outcome; and an engine run that nobody started here, recorded afterwards.
 import { runActs, runs } from "#app/db/schema/runs";
+import { mayRaise } from "#app/lib/gates/happening-verdicts";
 import { mayReport } from "#app/lib/gates/run-verdicts";
-import { mayRaise } from "#app/lib/gates/verdicts";
 import { newId } from "#app/lib/ids";
 import type { EndRun, RungReason, StateOutcome } from "#app/lib/schemas/run";
 import { done, invalid, notFound, type Outcome, refusalOf } from "#app/lib/services/outcome";
@@ -28,7 +28,7 @@ async function writeEnd(d: Doing, run: string, at: number): Promise<void> {
 
 export function stateOutcome(act: Act, input: StateOutcome): Promise<Outcome<{ run: string }>> {
   return perform({ ...act, kind: "state-outcome", input }, async (d) => {
-    const refusal = refusalOf(mayReport(d.e, { run: input.run, member: d.member.id, report: "outcome" }));
+    const refusal = refusalOf(mayReport(d.e, { run: input.run, member: d.member.id, report: "outcome", outcome: input.outcome }));
     if (refusal) return refusal;
     await writeOutcome(d, input);
     return done({ run: input.run });

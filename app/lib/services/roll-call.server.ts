@@ -1,6 +1,6 @@
 // The crew reads the card and says go or no-go; somebody reads the wind at the aircraft.
 import { acks, answers, winds } from "#app/db/schema/runs";
-import { endOfDay } from "#app/lib/gates/day";
+import { endOfDay } from "#app/lib/gates/local-time";
 import { mayAcknowledge, mayAnswer, mayRecordWind } from "#app/lib/gates/run-verdicts";
 import type { AnswerRollCall, RecordWind, RunVersion } from "#app/lib/schemas/run";
 import { done, invalid, type Outcome, refusalOf } from "#app/lib/services/outcome";

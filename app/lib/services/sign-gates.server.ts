@@ -1,7 +1,7 @@
 // Signs or countersigns the gates of one sheet with one PIN entry: a signature of its own for each, all or none.
 import { signatures } from "#app/db/schema/signatures";
 import { RULES_VERSION } from "#app/lib/gates/rules-version";
-import { maySign } from "#app/lib/gates/verdicts";
+import { maySign } from "#app/lib/gates/signing-verdicts";
 import { hashOf } from "#app/lib/record/chain";
 import { meaningOf, shownGate } from "#app/lib/record/shown";
 import type { SignGates } from "#app/lib/schemas/signing";

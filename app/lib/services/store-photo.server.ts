@@ -1,15 +1,17 @@
 // Takes in a picture: judged by its bytes, freed of what the camera wrote about place and device, kept by its hash, then its row.
-// Bytes first, row in the transaction: a crash between leaves bytes that nobody can reach, never a row without bytes.
-import { eq, sql } from "drizzle-orm";
-import { db } from "#app/db/client.server";
+// Bytes first, row in the transaction: a crash between leaves bytes that nobody can reach, never a row without bytes. What can be
+// refused is refused before, so that a refusal leaves nothing on the disk.
+import { eq } from "drizzle-orm";
+import { db, type Reader } from "#app/db/client.server";
 import { memberOf } from "#app/db/queries/membership.server";
 import { files } from "#app/db/schema/files";
-import { mayRaise } from "#app/lib/gates/verdicts";
-import { done, invalid, notFound, type Outcome, refusalOf } from "#app/lib/services/outcome";
+import { mayRaise } from "#app/lib/gates/happening-verdicts";
+import { replayOf } from "#app/lib/services/commands.server";
+import { done, invalid, notFound, type Outcome, type Refusal, refusalOf } from "#app/lib/services/outcome";
 import { roleOf } from "#app/lib/services/parts.server";
-import { type Act, perform } from "#app/lib/services/perform.server";
+import { type Act, commandOf, perform } from "#app/lib/services/perform.server";
 import { imageType } from "#app/lib/storage/image-type";
-import { keepBytes } from "#app/lib/storage/local.server";
+import { hashOfBytes, keepBytes } from "#app/lib/storage/local.server";
 import { stripMetadata } from "#app/lib/storage/strip-metadata";
 
 /** Limits, common practice: a phone's picture is 3 to 8 MB. */
@@ -24,14 +26,15 @@ export async function storePhoto(act: Act, input: { bytes: Uint8Array; name: str
   const clean = image && stripMetadata(bytes, image.type);
   if (!image || !clean) return invalid("This is no JPEG, PNG or WebP picture, or it is damaged. Take it again.");
   if (image.width * image.height > PHOTO_LIMITS.pixels) return invalid("The picture has more than 60 million pixels. Send a smaller one.");
-  const hash = await keepBytes(clean);
+  const hash = hashOfBytes(clean);
   const name = safeName(input.name);
-  return perform({ ...act, kind: "store-photo", input: { hash, name } }, async (d) => {
-    const refusal = refusalOf(mayRaise(d.e, { member: d.member.id }));
+  const named = { ...act, kind: "store-photo", input: { hash, name } };
+  const before = (await replayOf<{ file: string }>(db(), commandOf(named))) ?? (await full(db(), act.installId));
+  if (before) return before;
+  await keepBytes(clean);
+  return perform(named, async (d) => {
+    const refusal = refusalOf(mayRaise(d.e, { member: d.member.id })) ?? (await full(d.tx, d.installId));
     if (refusal) return refusal;
-    const [count] = await d.tx.select({ n: sql<number>`count(*)` }).from(files).where(eq(files.installId, d.installId));
-    if ((count?.n ?? 0) >= PHOTO_LIMITS.perInstall)
-      return invalid(`This install has ${PHOTO_LIMITS.perInstall} pictures already, as many as it can hold.`);
     const row = { hash, size: clean.length, name };
     const { id } = await d.record(roleOf(d.member, "builder", "inspector"), { type: "file-stored", data: { ...row, mime: image.type } });
     await d.tx.insert(files).values({ id, installId: d.installId, ...row, type: image.type, createdAt: d.now, by: d.member.id });
@@ -39,9 +42,13 @@ export async function storePhoto(act: Act, input: { bytes: Uint8Array; name: str
   });
 }
 
-/** For display alone: no path, no control characters, at most 100 characters. */
+async function full(reader: Reader, installId: string): Promise<Refusal | null> {
+  if ((await reader.$count(files, eq(files.installId, installId))) < PHOTO_LIMITS.perInstall) return null;
+  return invalid(`This install has ${PHOTO_LIMITS.perInstall} pictures already, as many as it can hold.`);
+}
+
+/** For display alone: no path, no character that cannot be seen, at most 100 characters. */
 function safeName(name: string): string {
-  // biome-ignore lint/suspicious/noControlCharactersInRegex: control characters are what is taken out
-  const plain = name.replace(/^.*[\\/]|[\u0000-\u001f\u007f]/g, "");
+  const plain = name.replace(/^.*[\\/]|[\p{Cc}\p{Cf}]/gu, "");
   return plain.trim().slice(0, 100) || "photo";
 }

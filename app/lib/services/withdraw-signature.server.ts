@@ -1,9 +1,8 @@
 // The signer or an inspector takes a signature back. It stays in the record; what it signed stands no longer.
 import { releaseSignatureWithdrawals, signatureWithdrawals } from "#app/db/schema/signatures";
-import { needsRole } from "#app/lib/gates/permit";
-import { mayWithdrawSignature } from "#app/lib/gates/verdicts";
+import { mayWithdrawReleaseSignature, mayWithdrawSignature } from "#app/lib/gates/signing-verdicts";
 import type { WithdrawSignature } from "#app/lib/schemas/signing";
-import { done, notFound, type Outcome, refusalOf, refuse } from "#app/lib/services/outcome";
+import { done, type Outcome, refusalOf } from "#app/lib/services/outcome";
 import { roleOf } from "#app/lib/services/parts.server";
 import { type Act, perform } from "#app/lib/services/perform.server";
 
@@ -24,11 +23,7 @@ export function withdrawSignature(act: Act, input: WithdrawSignature): Promise<O
 export function withdrawReleaseSignature(act: Act, input: WithdrawSignature): Promise<Outcome<{ withdrawal: string }>> {
   return perform({ ...act, kind: "withdraw-release-signature", input }, async (d) => {
     const { signature, reason } = input;
-    const found = d.e.snapshot.releaseSignatures.find((s) => s.id === signature);
-    if (!found) return notFound("That signature");
-    if (found.withdrawn) return refuse(409, "already", "This signature was withdrawn before.");
-    const role = found.by === d.member.id ? null : needsRole(d.e, d.member.id, ["inspector"], "withdraw another person's signature");
-    const refusal = role && refusalOf(role);
+    const refusal = refusalOf(mayWithdrawReleaseSignature(d.e, { signature, member: d.member.id }));
     if (refusal) return refusal;
     const base = await d.record(roleOf(d.member, "inspector", "lead"), {
       type: "release-signature-withdrawn",

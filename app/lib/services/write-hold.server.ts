@@ -40,9 +40,9 @@ export async function writeHold({ tx, writer, e, run, who, reason, auto }: Hold)
   return base.id;
 }
 
-/** Holds every run whose GO is in force although it is not clear. Returns how many. */
+/** Holds every run whose GO was called and which is no longer clear. Returns how many. */
 export async function holdWhatIsNotClear(hold: Omit<Hold, "run" | "reason" | "auto">): Promise<number> {
-  const stopped = hold.e.result.runs.filter((r) => r.go && !r.clear);
+  const stopped = hold.e.result.runs.filter((r) => r.goLost);
   for (const run of stopped) {
     const [first] = run.blockers;
     await writeHold({ ...hold, run, reason: first ? `${first.title}. ${first.sentence}` : "The run is no longer clear.", auto: true });

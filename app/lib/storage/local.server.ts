@@ -12,9 +12,12 @@ function pathOf(hash: string): string {
   return join(root(), hash.slice(0, 2), hash);
 }
 
+/** SHA-256, hex: the name under which `keepBytes` keeps them. */
+export const hashOfBytes = (bytes: Uint8Array): string => createHash("sha256").update(bytes).digest("hex");
+
 /** Keeps the bytes and returns their SHA-256, hex. On return they are on the disk. */
 export async function keepBytes(bytes: Uint8Array): Promise<string> {
-  const hash = createHash("sha256").update(bytes).digest("hex");
+  const hash = hashOfBytes(bytes);
   const path = pathOf(hash);
   if (await exists(path)) return hash;
   await mkdir(join(root(), hash.slice(0, 2)), { recursive: true, mode: 0o700 });

@@ -45,7 +45,7 @@ export function applies(text: string | undefined, words: ReadonlySet<TraitWord>)
   return text === undefined || holds(parseCondition(text), words);
 }
 
-/** The facts that make the condition what it is for these words. */
+/** The facts that make the condition hold, or not hold, for these words: "there is a fuel return line". */
 function facts(condition: Condition, words: ReadonlySet<TraitWord>): string[] {
   if (condition.op === "word") {
     const phrases = TRAIT_WORDS[condition.word];
@@ -57,8 +57,9 @@ function facts(condition: Condition, words: ReadonlySet<TraitWord>): string[] {
   return telling.flatMap((part) => facts(part, words));
 }
 
+/** What makes these conditions hold or not hold, each fact once; empty where there are none. */
+export const why = (texts: string[], words: ReadonlySet<TraitWord>): string =>
+  [...new Set(texts.flatMap((text) => facts(parseCondition(text), words)))].join(" and ");
+
 /** Why the condition does not hold, in words: "no carburettor and no alternate air". Empty where it holds. */
-export function whyNot(text: string, words: ReadonlySet<TraitWord>): string {
-  const condition = parseCondition(text);
-  return holds(condition, words) ? "" : [...new Set(facts(condition, words))].join(" and ");
-}
+export const whyNot = (text: string, words: ReadonlySet<TraitWord>): string => (applies(text, words) ? "" : why([text], words));

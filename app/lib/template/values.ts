@@ -114,6 +114,9 @@ const STARTING_AND_SITE: ValueRow[] = [
 
 const ROWS = [...RATINGS, ...SPEEDS, ...LIMITS, ...STARTING_AND_SITE];
 
+/** Every value by its key, for words about one that an install may not ask for any more. */
+export const VALUE_LABELS: ReadonlyMap<string, string> = new Map(ROWS.map((row) => [row.key, row.label]));
+
 /** The values that an install with these traits is asked for, with presets (SI) and where those come from. */
 export function valueDefs(traits: Traits): ValueDef[] {
   const words = traitWords(traits);

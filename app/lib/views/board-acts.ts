@@ -1,10 +1,13 @@
 /** What one person can do now, most useful first, by asking the rules' own verdicts. Each is a link to the place. */
+
 import type { Evaluation } from "#app/lib/gates/evaluate";
-import { currentProof, isComputed } from "#app/lib/gates/facts";
+import { allItems, currentProof, itemsIn } from "#app/lib/gates/facts";
 import type { GateResult } from "#app/lib/gates/result";
+import { maySign } from "#app/lib/gates/signing-verdicts";
 import type { Item, SigningRole } from "#app/lib/gates/snapshot";
-import { mayAccept, mayConfirm, maySign } from "#app/lib/gates/verdicts";
+import { mayAccept, mayConfirm } from "#app/lib/gates/verdicts";
 import { count } from "#app/lib/gates/who";
+import { isComputed } from "#app/lib/gates/work-facts";
 import type { Viewer } from "#app/lib/views/board";
 import { crewActs } from "#app/lib/views/board-crew";
 import { boardOf, gateOf, runOf } from "#app/lib/views/places";
@@ -57,7 +60,7 @@ function signActs(e: Evaluation, me: Viewer): ActView[] {
 
 function secondPersonActs(e: Evaluation, me: Viewer): ActView[] {
   const install = e.snapshot.install.id;
-  const waiting = [...e.facts.items.values()].flatMap((item) => {
+  const waiting = allItems(e.facts).flatMap((item) => {
     const proof = currentProof(e.facts, item.id);
     if (!proof) return [];
     const roles = (["inspector", "builder", "lead"] as const).filter((r) => me.roles.includes(r));
@@ -107,8 +110,6 @@ function workActs(e: Evaluation, me: Viewer): ActView[] {
 
 /** The first item of a gate that somebody has to prove: not done, and everything that it follows stands. */
 export function nextItem(e: Evaluation, gate: string): Item | null {
-  const items = (e.facts.itemsOf.get(gate) ?? []).filter(
-    (i) => !isComputed(i) && ["to do", "lapsed"].includes(e.result.items[i.id]?.state ?? ""),
-  );
+  const items = itemsIn(e.facts, gate).filter((i) => !isComputed(i) && ["to do", "lapsed"].includes(e.result.items[i.id]?.state ?? ""));
   return items.find((i) => i.follows.every((f) => e.result.items[f]?.stands ?? true)) ?? items[0] ?? null;
 }

@@ -1,5 +1,7 @@
 /** The board for a program: the evaluator's answer under the head of the install, and the tag that tells one answer from another. */
+
 import type { Evaluation } from "#app/lib/gates/evaluate";
+import { itemOf } from "#app/lib/gates/facts";
 import { canonical } from "#app/lib/record/canonical";
 import { hashOf } from "#app/lib/record/chain";
 import type { BoardAnswer } from "#app/lib/schemas/board-api";
@@ -21,7 +23,7 @@ export function boardAnswer(e: Evaluation, head: { seq: number; hash: string }):
       const gate = e.snapshot.gates.find((g) => g.id === id);
       return { key: gate?.key ?? "", name: gate?.name ?? "" };
     }),
-    items: named(items, (id) => ({ key: e.facts.items.get(id)?.key ?? "" })),
+    items: named(items, (id) => ({ key: itemOf(e.facts, id)?.key ?? "" })),
   };
 }
 

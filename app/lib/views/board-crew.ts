@@ -1,10 +1,11 @@
 /** What a crew member needs of the next run: the own place, the run in short, the words that stop it, and what is still to be said. */
+
+import { rpmText } from "#app/lib/gates/clearance";
 import { newestAnswer } from "#app/lib/gates/crew";
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import { POSITIONS } from "#app/lib/template/positions";
 import type { ActView } from "#app/lib/views/board-acts";
 import { runOf } from "#app/lib/views/places";
-import { rpmText } from "#app/lib/views/shown-states";
 
 export interface CrewView {
   /** Null where this person has no place on the next run. */

@@ -1,9 +1,12 @@
 /** What the Line is drawn from: gates, walk-round, the ladder of runs and the release, as the evaluator sees them now. */
+
+import type { ValveState } from "#app/components/ui/states";
+import { rpmText } from "#app/lib/gates/clearance";
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import type { GateResult, RunResult } from "#app/lib/gates/result";
 import type { Gate, Rung } from "#app/lib/gates/snapshot";
 import { boardOf, gateOf, runOf } from "#app/lib/views/places";
-import { noteOf, rpmText, type ValveState, valveOf, waitsFor } from "#app/lib/views/shown-states";
+import { noteOf, valveOf, waitsFor } from "#app/lib/views/shown-states";
 
 export interface StopView {
   state: ValveState;
@@ -75,7 +78,7 @@ function gateView(e: Evaluation, gate: Gate, judged: GateResult, balloon: number
     needs: gate.needs,
     after: gate.after,
     state: valveOf(judged.state),
-    note: noteOf(e.snapshot, e.result.gates, judged, e.at),
+    note: noteOf(e, judged),
     part: judged.of ? judged.done / judged.of : 0,
     balloon,
     full: fullOf(e, judged),
@@ -142,7 +145,7 @@ function stopOf(e: Evaluation, gate: Gate): StopView | null {
   if (!judged?.present) return null;
   return {
     state: valveOf(judged.state),
-    note: noteOf(e.snapshot, e.result.gates, judged, e.at),
+    note: noteOf(e, judged),
     href: gateOf(e.snapshot.install.id, gate.id),
   };
 }

@@ -2,6 +2,8 @@
  * The board as one person sees it: the answer, what stops us, the Line, the clearance and what this person can do now.
  * Pure: an evaluation and a person in, plain data out.
  */
+
+import { rpmText } from "#app/lib/gates/clearance";
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import type { Blocker, RunResult } from "#app/lib/gates/result";
 import type { Role } from "#app/lib/gates/snapshot";
@@ -10,7 +12,6 @@ import { type ActView, actsOf } from "#app/lib/views/board-acts";
 import { type CrewView, crewViewOf } from "#app/lib/views/board-crew";
 import { type LineView, lineOf } from "#app/lib/views/board-line";
 import { nameIn, type Place, placeOf, whoClears } from "#app/lib/views/places";
-import { rpmText } from "#app/lib/views/shown-states";
 
 export interface AnswerView {
   title: string;

@@ -2,8 +2,8 @@
 import { rpmText } from "#app/lib/gates/clearance";
 import { POSITION_NAMES } from "#app/lib/gates/crew";
 import type { Evaluation } from "#app/lib/gates/evaluate";
+import { mayPlan } from "#app/lib/gates/plan-verdicts";
 import type { RunResult } from "#app/lib/gates/result";
-import { mayPlan } from "#app/lib/gates/run-verdicts";
 import type { Rung } from "#app/lib/gates/snapshot";
 import { count } from "#app/lib/gates/who";
 import { type LineRunView, lineOf } from "#app/lib/views/board-line";

@@ -2,8 +2,8 @@
 import { POSITION_NAMES } from "#app/lib/gates/crew";
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import { heldAnyRole } from "#app/lib/gates/facts";
+import { mayInvite } from "#app/lib/gates/set-up-verdicts";
 import type { Member, Role } from "#app/lib/gates/snapshot";
-import { mayInvite } from "#app/lib/gates/verdicts";
 import { count } from "#app/lib/gates/who";
 import type { Viewer } from "#app/lib/views/board";
 

@@ -1,6 +1,7 @@
 /** Days of the crib: when a check runs out, in words and along the rule of the twelve months to come. Pure. */
+
+import { localOf } from "#app/lib/gates/local-time";
 import type { Instant } from "#app/lib/gates/snapshot";
-import { localOf } from "#app/lib/schemas/local-time";
 
 const DAY = 86_400_000;
 const YEAR = 365 * DAY;

@@ -1,8 +1,9 @@
 /** The crib as its page shows it: tools and extinguishers, in date or not, and what hangs on each. Pure. */
+
 import type { Evaluation } from "#app/lib/gates/evaluate";
-import { currentProof } from "#app/lib/gates/facts";
+import { allItems, currentProof } from "#app/lib/gates/facts";
+import { mayEditCrib } from "#app/lib/gates/set-up-verdicts";
 import type { Extinguisher, Instant, Tool } from "#app/lib/gates/snapshot";
-import { mayEditCrib } from "#app/lib/gates/verdicts";
 import { count } from "#app/lib/gates/who";
 import { format, type UnitSystem } from "#app/lib/units/display";
 import { type DueState, type DueView, dateAfter, dueView, monthTicks, worstOf } from "#app/lib/views/crib-dates";
@@ -115,7 +116,7 @@ interface Used {
 
 /** Items whose present proof names the tool. */
 function proofsWith(e: Evaluation, tool: string): Used[] {
-  return [...e.facts.items.values()].flatMap((item) => {
+  return allItems(e.facts).flatMap((item) => {
     const proof = currentProof(e.facts, item.id);
     if (!proof?.tools.includes(tool)) return [];
     return [{ item: item.id, key: item.key, counts: proof.counts, stands: e.result.items[item.id]?.stands ?? false }];
@@ -159,7 +160,7 @@ function bottleHangs(x: Extinguisher, state: DueState | undefined): string {
 
 /** The evaluator's own answer to the item that asks for extinguishers. */
 function enoughOf(e: Evaluation): CribView["enough"] {
-  const item = [...e.facts.items.values()].find((i) => i.parts.some((p) => p.kind === "computed" && p.rule === "extinguishers"));
+  const item = allItems(e.facts).find((i) => i.parts.some((p) => p.kind === "computed" && p.rule === "extinguishers"));
   const judged = item && e.result.items[item.id];
   if (!judged) return null;
   return {

@@ -2,15 +2,15 @@
  * Reading an item's row back: what was typed, in the person's units, as evidence in SI, or a sentence for each field at fault.
  * Whether it is in its band is told here too, before it is recorded; the evaluator has the last word.
  */
-import { computeSheet, readSheetForm, SHEET_VERSIONS, traitInputs, valuesTaken } from "#app/lib/bench/sheet";
+import { computeSheet, readSheetForm, SHEET_FORMS, SHEET_VERSIONS, traitInputs, valuesTaken } from "#app/lib/bench/sheet";
 import type { SheetResult } from "#app/lib/bench/sheet-result";
 import { wrenchSetting } from "#app/lib/bench/torque";
 import { bandInForce } from "#app/lib/gates/evidence";
+import { instantOfLocal, localOf } from "#app/lib/gates/local-time";
 import type { Evidence, Item, Snapshot } from "#app/lib/gates/snapshot";
-import type { Criterion, Part, ValueKey } from "#app/lib/template/types";
+import type { Criterion, Part, SheetKey, ValueKey } from "#app/lib/template/types";
 import { format, formatBand, parseEntry, type UnitSystem } from "#app/lib/units/display";
 import type { Quantity } from "#app/lib/units/quantity";
-import { dayAt, instantAt } from "#app/lib/views/local-time";
 
 export interface EntryError {
   /** Name of the field and, where it is sent once per row, its row: "p0.value.1". */
@@ -178,7 +178,8 @@ function readCrank(r: Reader, n: number): Evidence | null {
   const before = r.errors.length;
   const bursts = began.flatMap((time, row) => {
     if (!time && !seconds[row] && !pressure[row]) return [];
-    const at = instantAt(`${dayAt(r.at.now, timeZone)}T${time}`, timeZone);
+    const read = instantOfLocal(localOf(r.at.now, timeZone).date, time, timeZone);
+    const at = read.ok ? read.at : null;
     if (at === null)
       r.errors.push({ field: `p${n}.began.${row}`, message: `Burst ${row + 1}: enter when it began, by the clock at the install.` });
     else if (at > r.at.now) r.errors.push({ field: `p${n}.began.${row}`, message: `Burst ${row + 1}: that time has not come yet today.` });
@@ -202,7 +203,9 @@ function readSheet(r: Reader, part: PartOf<"sheet">, n: number): Evidence | null
   for (const [name, value] of r.form.entries())
     if (name.startsWith(prefix) && typeof value === "string") {
       const key = name.slice(prefix.length);
-      fields.set(key, [...(fields.get(key) ?? []), value]);
+      const there = fields.get(key);
+      if (there) there.push(value);
+      else fields.set(key, [value]);
     }
   for (const [name, value] of Object.entries(traitInputs(part.sheet, r.at.snapshot.traits))) fields.set(name, [value]);
   const { units } = r.at;
@@ -211,6 +214,7 @@ function readSheet(r: Reader, part: PartOf<"sheet">, n: number): Evidence | null
     for (const { field, sentence } of read.errors) r.errors.push({ field: `${prefix}${rowLast(field)}`, message: sentence });
     return null;
   }
+  asInstalled(r, part.sheet, fields, read.inputs);
   const done = computeSheet(part.sheet, read.inputs);
   if (done.ok) r.sheets[n] = done.result;
   const took: Partial<Record<ValueKey, number>> = {};
@@ -219,6 +223,19 @@ function readSheet(r: Reader, part: PartOf<"sheet">, n: number): Evidence | null
     if (value != null) took[key] = value;
   }
   return { kind: "sheet", sheet: part.sheet, version: SHEET_VERSIONS[part.sheet], inputs: read.inputs, took };
+}
+
+/** A value of the install that stands in its field as it was filled in is that value, not its rounded text. */
+function asInstalled(r: Reader, sheet: SheetKey, fields: Map<string, string[]>, inputs: Record<string, unknown>): void {
+  for (const field of SHEET_FORMS[sheet].fields) {
+    const [typed] = fields.get(field.name) ?? [];
+    if (field.kind !== "quantity" || typed === undefined || typeof inputs[field.name] !== "number") continue;
+    for (const source of field.prefill) {
+      const value = source.kind === "value" ? r.at.snapshot.values.find((v) => v.key === source.key)?.value : null;
+      if (value != null && format(field.quantity, value, r.at.units, field.as?.[r.at.units]).value === typed.trim())
+        inputs[field.name] = value;
+    }
+  }
 }
 
 /** "straps.1.wll" as the row names it: "straps.wll.1". */

@@ -1,9 +1,10 @@
 /** The findings of an install: open ones first, what each does to the runs in words, and what this person may do about it. Pure. */
+
 import { rpmText } from "#app/lib/gates/clearance";
 import type { Evaluation } from "#app/lib/gates/evaluate";
-import { mayClose, mayFix, mayGrade } from "#app/lib/gates/happening-verdicts";
+import { itemsIn } from "#app/lib/gates/facts";
+import { mayClose, mayFix, mayGrade, mayRaise } from "#app/lib/gates/happening-verdicts";
 import type { Finding, Instant } from "#app/lib/gates/snapshot";
-import { mayRaise } from "#app/lib/gates/verdicts";
 import { count } from "#app/lib/gates/who";
 import type { Viewer } from "#app/lib/views/board";
 import { type May, mayOf } from "#app/lib/views/may";
@@ -172,7 +173,7 @@ function effectOf(e: Evaluation, f: Finding): string {
   if (f.severity === "watch") return "Stops no run; looked at again after each one, and closed before the release.";
   if (f.severity === "grounding") {
     const gates = [...e.facts.gates.values()]
-      .filter((g) => !g.lookBack && (e.facts.itemsOf.get(g.id) ?? []).some((i) => i.systems.includes(f.system)))
+      .filter((g) => !g.lookBack && itemsIn(e.facts, g.id).some((i) => i.systems.includes(f.system)))
       .map((g) => g.short);
     return `Stops every run${gates.length ? `, and these gates: ${listOf(gates)}` : ""}.`;
   }

@@ -2,16 +2,20 @@
  * One item's row on its gate page: its state and reason, what was given, what is asked, and which acts this person may do now,
  * each by the rules' own verdict.
  */
+
+import type { NutState } from "#app/components/ui/states";
 import type { Evaluation } from "#app/lib/gates/evaluate";
-import { currentProof, isComputed } from "#app/lib/gates/facts";
-import type { Verdict } from "#app/lib/gates/result";
+import { currentProof, proofsOf } from "#app/lib/gates/facts";
+import type { ItemState, Verdict } from "#app/lib/gates/result";
+import { mayEnterNumber } from "#app/lib/gates/set-up-verdicts";
 import type { Item, Role } from "#app/lib/gates/snapshot";
-import { mayAccept, mayConfirm, mayEnterNumber, mayKeep, mayProve, mayWithdrawProof } from "#app/lib/gates/verdicts";
+import { mayAccept, mayConfirm, mayKeep, mayProve, mayWithdrawProof } from "#app/lib/gates/verdicts";
+import { isComputed } from "#app/lib/gates/work-facts";
 import type { UnitSystem } from "#app/lib/units/display";
 import { type PartView, partViews } from "#app/lib/views/gate-parts";
 import { type ProofView, proofView } from "#app/lib/views/gate-proof";
 import { anchorOf, whoClears } from "#app/lib/views/places";
-import { type NutState, nutOf } from "#app/lib/views/shown-states";
+import { nutOf } from "#app/lib/views/shown-states";
 
 export interface Ask {
   ok: boolean;
@@ -70,7 +74,7 @@ export function itemView(e: Evaluation, item: Item, no: number, me: Reader): Ite
   const following = item.follows.every((f) => e.result.items[f]?.stands ?? true);
   const open =
     !computed && !result.stands && result.state !== "second eyes" && prove.ok && following && !waitsForAcceptance(result.blockers);
-  const newest = [...(e.facts.proofsOf.get(item.id) ?? [])].reverse();
+  const newest = [...proofsOf(e.facts, item.id)].reverse();
   return {
     id: item.id,
     anchor: anchorOf(item.id),
@@ -87,7 +91,7 @@ export function itemView(e: Evaluation, item: Item, no: number, me: Reader): Ite
       ...(item.step ? ["step"] : []),
     ],
     nut: nutOf(result.state),
-    word: result.state === "second eyes" ? "1 of 2" : result.state === "not applicable" ? "does not apply" : result.state,
+    word: wordOf(result.state, computed),
     reasons: result.stands
       ? []
       : result.blockers.map((b) => ({ title: b.title, sentence: b.sentence, who: whoClears(e.snapshot, b.owner) })),
@@ -107,6 +111,13 @@ export function itemView(e: Evaluation, item: Item, no: number, me: Reader): Ite
     withdraw: proof ? ask(mayWithdrawProof(e, { proof: proof.id, member: me.id })) : null,
     enterNumber: ask(mayEnterNumber(e, { item: item.id, member: me.id })),
   };
+}
+
+/** Under the nut, in the row's own words: nobody does a computed item, and of two people one was there. */
+function wordOf(state: ItemState, computed: boolean): string {
+  if (state === "second eyes") return "1 of 2";
+  if (state === "not applicable") return "does not apply";
+  return computed && state === "to do" ? "not yet" : state;
 }
 
 const waitsForAcceptance = (blockers: { code: string }[]): boolean => blockers.some((b) => b.code === "needs-acceptance");

@@ -2,11 +2,12 @@
  * What an item's row asks for, part by part, in the units of the person who reads it.
  * Pure: the item's criteria in, plain fields for the form out.
  */
+
 import type { AmountField, FormField, Prefill } from "#app/lib/bench/form";
 import { SHEET_FORMS, traitInputs } from "#app/lib/bench/sheet";
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import { bandInForce, numberMissing } from "#app/lib/gates/evidence";
-import { currentProof } from "#app/lib/gates/facts";
+import { currentProof, proofsOf } from "#app/lib/gates/facts";
 import type { Item } from "#app/lib/gates/snapshot";
 import type { Criterion, Part, SheetKey, ValueKey } from "#app/lib/template/types";
 import { symbolOf } from "#app/lib/units/convert";
@@ -161,7 +162,7 @@ type TallyPart = Extract<Part, { kind: "tally" }>;
 
 /** Rows of a count: as they were last counted; for what goes back in, those that came out. */
 function placesOf(e: Evaluation, item: Item, part: TallyPart): { place: string; out: number | null }[] {
-  const from = part.mode === "in" && part.of ? e.facts.proofsOf.get(part.of)?.at(-1) : currentProof(e.facts, item.id);
+  const from = part.mode === "in" && part.of ? proofsOf(e.facts, part.of).at(-1) : currentProof(e.facts, item.id);
   const given = from?.evidence.find((g) => g?.kind === "tally");
   if (given?.kind === "tally" && given.places.length)
     return given.places.map(({ place, out }) => ({ place, out: part.mode === "in" ? out : null }));

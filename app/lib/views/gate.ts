@@ -1,12 +1,15 @@
 /** A gate's page as one person sees it: where it stands on the pipe, its items, its signatures and the one next thing. */
+
+import type { ValveState } from "#app/components/ui/states";
 import type { Evaluation } from "#app/lib/gates/evaluate";
+import { itemsIn, signaturesOf } from "#app/lib/gates/facts";
 import type { GateResult } from "#app/lib/gates/result";
+import { maySign, mayWithdrawSignature } from "#app/lib/gates/signing-verdicts";
 import type { Gate, Signature, SigningRole } from "#app/lib/gates/snapshot";
-import { maySign, mayWithdrawSignature } from "#app/lib/gates/verdicts";
 import { count } from "#app/lib/gates/who";
 import { type ItemView, itemView, type Reader } from "#app/lib/views/gate-item";
 import { anyOf, boardOf, gateOf, nameIn, type Place, placeOf, whoClears } from "#app/lib/views/places";
-import { type ValveState, valveOf } from "#app/lib/views/shown-states";
+import { valveOf } from "#app/lib/views/shown-states";
 
 export interface FeedView {
   id: string;
@@ -54,7 +57,7 @@ export function gateView(e: Evaluation, gateId: string, me: Reader): GateView | 
   const gate = e.facts.gates.get(gateId);
   const result = e.result.gates[gateId];
   if (!gate || !result?.present) return null;
-  const items = (e.facts.itemsOf.get(gateId) ?? []).map((item, i) => itemView(e, item, i + 1, me));
+  const items = itemsIn(e.facts, gateId).map((item, i) => itemView(e, item, i + 1, me));
   return {
     id: gate.id,
     key: gate.key,
@@ -70,7 +73,7 @@ export function gateView(e: Evaluation, gateId: string, me: Reader): GateView | 
       .filter((b) => ["gate-waits", "grounding", "loose-end"].includes(b.code))
       .map((b) => ({ title: b.title, sentence: b.sentence, place: placeOf(e.snapshot, b.link) })),
     items,
-    ...signaturesOf(e, gate, result, me),
+    ...signaturesView(e, gate, result, me),
     foot: footOf(e, gate, result, items, me),
   };
 }
@@ -148,8 +151,8 @@ const SAYS: Record<SigningRole, string> = {
   lead: "countersigned as lead",
 };
 
-function signaturesOf(e: Evaluation, gate: Gate, result: GateResult, me: Reader): Pick<GateView, "signatures" | "former"> {
-  const all = e.facts.signaturesOf.get(gate.id) ?? [];
+function signaturesView(e: Evaluation, gate: Gate, result: GateResult, me: Reader): Pick<GateView, "signatures" | "former"> {
+  const all = signaturesOf(e.facts, gate.id);
   const given = result.holding.flatMap((id) => all.filter((s) => s.id === id));
   const open = gate.policy.slice(given.length).map((roles, i): SignatureView => {
     const owner = i === 0 && result.ready ? result.blockers.find((b) => b.code === "not-signed")?.owner : undefined;
@@ -166,7 +169,7 @@ function signaturesOf(e: Evaluation, gate: Gate, result: GateResult, me: Reader)
   const held = given.map(
     (s): SignatureView => ({
       id: s.id,
-      role: SAYS[s.as],
+      role: result.state === "lapsed" ? `${SAYS[s.as]}, lapsed` : SAYS[s.as],
       name: nameIn(e.snapshot, s.by),
       time: e.facts.when(s.recorded),
       waits: false,
@@ -211,7 +214,9 @@ function footOf(e: Evaluation, gate: Gate, result: GateResult, items: ItemView[]
     };
   if (!left.length) return waitingFoot(e, result, gate);
   const mine = left.find((i) => i.confirm?.ok || i.accept?.ok) ?? left.find((i) => i.open || (i.prove.numberMissing && i.enterNumber.ok));
-  const kinds = left.map((i) => `${i.no} ${i.nut === "second-eyes" ? "second eyes" : i.nut === "lapsed" ? "lapsed" : "to do"}`);
+  const kinds = left.map(
+    (i, n) => `${n === 0 ? "item " : ""}${i.no} ${i.nut === "second-eyes" ? "second eyes" : i.nut === "lapsed" ? "lapsed" : "to do"}`,
+  );
   const says = `${count(left.length, "item")} left before ${result.state === "waiting" ? "it can be signed" : "anyone can sign"}`;
   const note = kinds.length > 6 ? `${kinds.slice(0, 5).join(", ")} and ${kinds.length - 5} more` : kinds.join(", ");
   if (!mine) return { says, note: `${left[0]?.reasons[0]?.who ? `${left[0].reasons[0].who} ` : ""}${note}`, act: toBoard(e) };

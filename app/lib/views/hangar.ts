@@ -2,6 +2,8 @@
  * The hangar: every install of one person, where each stands and what waits there for them, the one that waits most first.
  * Pure: evaluations in, plain data out.
  */
+import type { ValveState } from "#app/components/ui/states";
+import { rpmText } from "#app/lib/gates/clearance";
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import type { Instant, Role } from "#app/lib/gates/snapshot";
 import { count } from "#app/lib/gates/who";
@@ -10,7 +12,6 @@ import { type ActView, waitingFor } from "#app/lib/views/board-acts";
 import { type LineRunView, lineOf } from "#app/lib/views/board-line";
 import { boardOf, whoClears } from "#app/lib/views/places";
 import { dayWhen } from "#app/lib/views/run-words";
-import { rpmText, type ValveState } from "#app/lib/views/shown-states";
 
 export interface HangarRow {
   id: string;

@@ -1,9 +1,10 @@
 /** The loose ends of an install, by what they block soonest: when each is due, what it stops, and what this person may do about it. Pure. */
+
 import { acceptedFor } from "#app/lib/gates/computed";
 import type { Evaluation } from "#app/lib/gates/evaluate";
-import { mayAcceptLooseEnd, mayConfirmRestored, mayRestore } from "#app/lib/gates/happening-verdicts";
+import { allItems } from "#app/lib/gates/facts";
+import { mayAcceptLooseEnd, mayConfirmRestored, mayRaise, mayRestore } from "#app/lib/gates/happening-verdicts";
 import type { LooseEnd, Rung } from "#app/lib/gates/snapshot";
-import { mayRaise } from "#app/lib/gates/verdicts";
 import { count } from "#app/lib/gates/who";
 import type { Viewer } from "#app/lib/views/board";
 import { type May, mayOf } from "#app/lib/views/may";
@@ -83,7 +84,7 @@ export function looseEndsView(e: Evaluation, me: Viewer, details: LooseEndDetail
     past: past.map(({ l, tag }) => ({ id: l.id, anchor: anchorOfLooseEnd(l.id), says: pastWords(e, l, tag, details[l.id]?.count ?? 1) })),
     systems: systemsOn(e),
     due: dueChoices(e),
-    asking: [...e.facts.items.values()].flatMap((i) =>
+    asking: allItems(e.facts).flatMap((i) =>
       i.offersLooseEnd
         ? [{ value: i.id, label: `${i.key}: ${lowerFirst(i.offersLooseEnd.what)} (${systemWords([i.offersLooseEnd.system])})` }]
         : [],

@@ -1,10 +1,13 @@
 /** The install's mail as its page lists it: to whom, what, when, and what became of it. Pure. */
 import { count } from "#app/lib/gates/who";
+import type { May } from "#app/lib/views/may";
 import { dayWhen, timeOrWhen } from "#app/lib/views/run-words";
 
 export interface MailRow {
   id: string;
   kind: string;
+  /** Of the record that it tells about. */
+  act: string;
   to: string;
   name: string | null;
   subject: string;
@@ -18,12 +21,15 @@ export interface MailRow {
 
 export interface MailLine {
   id: string;
+  anchor: string;
   to: string;
   state: MailRow["state"];
   /** "sent 5 Dec 09:21 CET, after 3 tries". */
   words: string;
   /** What the mail server said. */
   error: string | null;
+  /** Where it was given up: whether the reader may send it again. */
+  again: May | null;
 }
 
 /** One act's mails: the same subject to several people. */
@@ -42,15 +48,17 @@ export interface MailView {
   groups: MailGroup[];
 }
 
-export function mailView(rows: MailRow[], now: number, timeZone: string): MailView {
+export const anchorOfMail = (id: string): string => `mail-${id}`;
+
+export function mailView(rows: MailRow[], now: number, timeZone: string, again: (row: MailRow) => May): MailView {
   const of = (state: MailRow["state"]) => rows.filter((r) => r.state === state).length;
   const [sent, waiting, lost] = [of("sent"), of("waiting"), of("given up")];
   const parts = [sent ? `${sent} sent` : "", waiting ? `${waiting} not through yet` : "", lost ? `${lost} given up` : ""];
   const groups = new Map<string, MailGroup>();
   for (const row of rows) {
-    const key = `${row.createdAt} ${row.subject}`;
+    const key = `${row.act || row.createdAt} ${row.subject}`;
     const group = groups.get(key) ?? { id: row.id, subject: row.subject, written: dayWhen(row.createdAt, timeZone), lines: [] };
-    group.lines.push(line(row, now, timeZone));
+    group.lines.push(line(row, now, timeZone, again));
     groups.set(key, group);
   }
   return {
@@ -61,9 +69,17 @@ export function mailView(rows: MailRow[], now: number, timeZone: string): MailVi
   };
 }
 
-function line(row: MailRow, now: number, timeZone: string): MailLine {
+function line(row: MailRow, now: number, timeZone: string, again: (row: MailRow) => May): MailLine {
   const { id, state, name, to } = row;
-  return { id, state, to: name ? `${name}, ${to}` : to, words: words(row, now, timeZone), error: state === "sent" ? null : row.lastError };
+  return {
+    id,
+    anchor: anchorOfMail(id),
+    state,
+    to: name ? `${name}, ${to}` : to,
+    words: words(row, now, timeZone),
+    error: state === "sent" ? null : row.lastError,
+    again: state === "given up" ? again(row) : null,
+  };
 }
 
 function words(row: MailRow, now: number, timeZone: string): string {

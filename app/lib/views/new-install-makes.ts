@@ -1,8 +1,8 @@
 /** What the answers about a new install make: how many gates and items, what they add and what they leave out, and why. Pure. */
-import { type Condition, holds, parseCondition } from "#app/lib/template/condition";
+import { why } from "#app/lib/template/condition";
 import { generate } from "#app/lib/template/generate";
 import { gateOf, TEMPLATE } from "#app/lib/template/template";
-import { TRAIT_WORDS, type TraitWord, traitWords } from "#app/lib/template/trait-words";
+import { type TraitWord, traitWords } from "#app/lib/template/trait-words";
 import type { Traits } from "#app/lib/template/types";
 
 export interface Made {
@@ -52,14 +52,10 @@ export function whatItMakes(traits: Traits): Makes {
 function whyAdded(key: string, words: Words): string {
   const row = [...TEMPLATE.items, ...TEMPLATE.postRunItems].find((item) => item.key === key);
   const gate = [...TEMPLATE.gates, TEMPLATE.postRunGate].find((g) => g.key === gateOf(key));
-  const conditions = [gate?.when, row?.when].filter((when) => when !== undefined);
-  return [...new Set(conditions.flatMap((when) => facts(parseCondition(when), words)))].join(" and ");
-}
-
-function facts(condition: Condition, words: Words): string[] {
-  if (condition.op === "word") return [TRAIT_WORDS[condition.word][words.has(condition.word) ? "present" : "absent"]];
-  if (condition.op === "not") return facts(condition.of, words);
-  return condition.of.filter((part) => holds(part, words)).flatMap((part) => facts(part, words));
+  return why(
+    [gate?.when, row?.when].filter((when) => when !== undefined),
+    words,
+  );
 }
 
 /** One entry for each reason, in the order in which the reasons first come up. */

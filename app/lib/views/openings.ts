@@ -1,8 +1,7 @@
 /** The openings of an install: open ones first, each with who may close it or mark it a mistake, and the choices of a new one. Pure. */
 import type { Evaluation } from "#app/lib/gates/evaluate";
-import { mayMarkMistake } from "#app/lib/gates/happening-verdicts";
+import { mayCloseOpening, mayMarkMistake, mayOpen } from "#app/lib/gates/happening-verdicts";
 import type { Opening } from "#app/lib/gates/snapshot";
-import { mayCloseOpening, mayOpen } from "#app/lib/gates/verdicts";
 import { count, inSentence } from "#app/lib/gates/who";
 import { NOT_OPENINGS } from "#app/lib/template/systems";
 import type { SystemKey } from "#app/lib/template/types";

@@ -5,9 +5,8 @@ import type { Evaluation } from "#app/lib/gates/evaluate";
 import { heldAnyRole } from "#app/lib/gates/facts";
 import type { PlanVersion, Run, Rung } from "#app/lib/gates/snapshot";
 import { count } from "#app/lib/gates/who";
-import type { PlanRules } from "#app/lib/schemas/run-forms";
 import { POSITIONS } from "#app/lib/template/positions";
-import type { PositionKey, ValueKey } from "#app/lib/template/types";
+import type { PositionKey } from "#app/lib/template/types";
 import { format } from "#app/lib/units/display";
 import { nameIn } from "#app/lib/views/places";
 import { rpmFigure } from "#app/lib/views/run-words";
@@ -88,19 +87,6 @@ function rulesOf({ crew }: Rung): string[] {
       : "Nobody holds two places on this run.",
     "One fire guard for each manned extinguisher.",
   ];
-}
-
-/** What the plan form is judged by on this install. */
-export function planRules(e: Evaluation, rung: Rung): PlanRules {
-  const value = (key: ValueKey) => e.facts.values.get(key)?.value ?? null;
-  return {
-    timeZone: e.snapshot.install.timeZone,
-    rung,
-    redline: value("redline"),
-    windMost: value("windLimit"),
-    gustMost: value("gustLimit"),
-    nameOf: (member) => nameIn(e.snapshot, member),
-  };
 }
 
 /** Who gets the mail about a run: everybody with a place on it, and every lead. */

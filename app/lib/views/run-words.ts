@@ -1,6 +1,8 @@
 /** Words of a run that several of its pages share: what binds, a step in short, a time with its weekday. Pure. */
+
 import { rpmText } from "#app/lib/gates/clearance";
 import type { Evaluation } from "#app/lib/gates/evaluate";
+import { itemOf } from "#app/lib/gates/facts";
 import type { Clearance, ClearanceLimit } from "#app/lib/gates/result";
 import { when } from "#app/lib/gates/when";
 import type { CardStep, RunCard } from "#app/lib/template/types";
@@ -101,7 +103,7 @@ function raiseOf(e: Evaluation, binds: ClearanceLimit): ClearanceView["raise"] {
       words: "The redline comes from the maker’s papers. Enter it where it is missing; never raise it to fit a run.",
       place: { href: `/installs/${install}/set-up`, label: "Set-up" },
     };
-  const item = e.facts.items.get(binds.id);
+  const item = itemOf(e.facts, binds.id);
   return {
     words: "Do the restraint sheet again with what holds the aircraft now: more straps, better anchors, a surface that grips.",
     place: { href: item ? gateOf(install, item.gate, item.id) : `/installs/${install}`, label: "Restraint sheet" },

@@ -3,9 +3,10 @@
  * the people, the wind, and what this person may do, each with the reason where not. Pure.
  */
 import type { Evaluation } from "#app/lib/gates/evaluate";
+import { mayPlan } from "#app/lib/gates/plan-verdicts";
 import type { Blocker, RunResult, RunState, Verdict } from "#app/lib/gates/result";
 import type { RunFacts } from "#app/lib/gates/run-facts";
-import { goEnds, mayCallGo, mayCallNoGo, mayHold, mayPlan, mayRecordWind, mayScrub } from "#app/lib/gates/run-verdicts";
+import { goEnds, mayCallGo, mayCallNoGo, mayHold, mayRecordWind, mayScrub } from "#app/lib/gates/run-verdicts";
 import type { Role } from "#app/lib/gates/snapshot";
 import { count } from "#app/lib/gates/who";
 import { format } from "#app/lib/units/display";

@@ -1,6 +1,6 @@
 /** Ratings and limits as the set-up page shows them: what each is, where it was read, and which of them stop the runs. Pure. */
 import type { Evaluation } from "#app/lib/gates/evaluate";
-import { mayConfirmValue } from "#app/lib/gates/verdicts";
+import { mayConfirmValue } from "#app/lib/gates/set-up-verdicts";
 import { count } from "#app/lib/gates/who";
 import type { Basis, Value, ValueDef } from "#app/lib/template/types";
 import { symbolOf } from "#app/lib/units/convert";
@@ -97,7 +97,7 @@ const WORDS = { confirmed: "read", default: "not confirmed", missing: "not enter
 function valueRow(e: Evaluation, me: Viewer, v: Entered, units: UnitSystem): ValueRow {
   const state = v.value === null ? "missing" : v.source === null ? "default" : "confirmed";
   const shown = v.value === null ? null : format(v.quantity, v.value, units, v.shownIn);
-  const fixed = v.source !== null && e.snapshot.proofs.length > 0 && !me.roles.includes("inspector");
+  const may = (changes: boolean) => mayConfirmValue(e, { member: me.id, value: { key: v.key, changes } }).ok;
   return {
     key: v.key,
     anchor: anchorOfValue(v.key),
@@ -110,7 +110,7 @@ function valueRow(e: Evaluation, me: Viewer, v: Entered, units: UnitSystem): Val
     unit: shown?.unit ?? symbolOf(v.shownIn ?? displayUnit(v.quantity, units)),
     source: v.source ?? (v.value === null ? "Only the maker can say." : `A starting point: ${basisWords(v.basis)}.`),
     typedSource: v.source ?? "",
-    note: fixed ? "Work has begun: another figure is an inspector’s to enter. You may correct where it was read." : null,
+    note: may(false) && !may(true) ? "Work has begun: another figure is an inspector’s to enter. You may correct where it was read." : null,
   };
 }
 

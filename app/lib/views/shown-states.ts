@@ -1,10 +1,9 @@
 /** The evaluator's states as the drawings know them, and short notes beside a valve. */
+import type { NutState, ValveState } from "#app/components/ui/states";
+import type { Evaluation } from "#app/lib/gates/evaluate";
 import type { GateResult, GateState, ItemState } from "#app/lib/gates/result";
-import type { Instant, Snapshot } from "#app/lib/gates/snapshot";
-import { format } from "#app/lib/units/display";
-
-export type ValveState = "waiting" | "in-work" | "ready" | "half-signed" | "signed" | "lapsed";
-export type NutState = "todo" | "done" | "na" | "second-eyes" | "lapsed";
+import type { Instant } from "#app/lib/gates/snapshot";
+import { lapsedAt } from "#app/lib/views/lapsed-at";
 
 const VALVES: Record<GateState, ValveState> = {
   waiting: "waiting",
@@ -57,11 +56,14 @@ export const waitsFor = (gates: Record<string, GateResult>, gate: GateResult): s
   gate.prerequisites.filter((id) => !gates[id]?.stands);
 
 /** Beside the valve, at most 13 signs. */
-export function noteOf(snapshot: Snapshot, gates: Record<string, GateResult>, gate: GateResult, now: Instant): string {
+export function noteOf(e: Evaluation, gate: GateResult): string {
+  const { snapshot, at } = e;
+  const { gates } = e.result;
+  const short = (instant: Instant) => dayOrTime(instant, at, snapshot.install.timeZone);
   switch (gate.state) {
     case "signed": {
       const last = snapshot.signatures.find((s) => s.id === gate.holding.at(-1));
-      return last ? `signed ${dayOrTime(last.recorded, now, snapshot.install.timeZone)}` : "signed";
+      return last ? `signed ${short(last.recorded)}` : "signed";
     }
     case "waiting":
       return `waits for ${waitsFor(gates, gate).length}`;
@@ -69,10 +71,12 @@ export function noteOf(snapshot: Snapshot, gates: Record<string, GateResult>, ga
       return gate.done ? `${gate.done} of ${gate.of} done` : "not begun";
     case "ready":
       return "ready to sign";
+    case "lapsed": {
+      const own = e.facts.gates.get(gate.id);
+      const since = own ? lapsedAt(e, own) : null;
+      return since === null ? "lapsed" : `lapsed ${short(since)}`;
+    }
     default:
       return gate.state;
   }
 }
-
-/** "1,375 rpm" from crankshaft revolutions per second. */
-export const rpmText = (rotation: number): string => format("rotation", rotation, "si").text.replace(/(\d)(?=(\d{3})+\b)/g, "$1,");

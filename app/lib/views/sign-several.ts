@@ -1,7 +1,7 @@
 /** One sheet for several gates that are ready: each gets a signature of its own. */
 import type { Evaluation } from "#app/lib/gates/evaluate";
+import { maySign } from "#app/lib/gates/signing-verdicts";
 import type { SigningRole } from "#app/lib/gates/snapshot";
-import { maySign } from "#app/lib/gates/verdicts";
 import { meaningOf } from "#app/lib/record/shown";
 import type { UnitSystem } from "#app/lib/units/display";
 import type { Viewer } from "#app/lib/views/board";

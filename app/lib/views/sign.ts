@@ -1,14 +1,17 @@
 /** The sign sheet: what is signed, in one sentence and item by item, by whom it was done, what it means, and whether this person may. */
+
+import type { ValveState } from "#app/components/ui/states";
 import type { Evaluation } from "#app/lib/gates/evaluate";
+import { itemOf, itemsIn, proofsOf } from "#app/lib/gates/facts";
+import { maySign } from "#app/lib/gates/signing-verdicts";
 import type { Cover, SigningRole } from "#app/lib/gates/snapshot";
-import { maySign } from "#app/lib/gates/verdicts";
 import { count } from "#app/lib/gates/who";
 import { meaningOf } from "#app/lib/record/shown";
 import type { UnitSystem } from "#app/lib/units/display";
 import type { Viewer } from "#app/lib/views/board";
 import { proofView } from "#app/lib/views/gate-proof";
 import { anyOf, gateOf, nameIn, placeOf, whoClears } from "#app/lib/views/places";
-import { type ValveState, valveOf } from "#app/lib/views/shown-states";
+import { valveOf } from "#app/lib/views/shown-states";
 
 export interface SheetView {
   id: string;
@@ -75,7 +78,7 @@ export function sheetView(e: Evaluation, gateId: string, me: Viewer & { units: U
   };
 }
 
-const proofOf = (e: Evaluation, cover: Cover) => e.facts.proofsOf.get(cover.item)?.find((p) => p.id === cover.proof) ?? null;
+const proofOf = (e: Evaluation, cover: Cover) => proofsOf(e.facts, cover.item).find((p) => p.id === cover.proof) ?? null;
 
 function sentenceOf(e: Evaluation, covers: Cover[], as: SigningRole): string {
   const proofs = covers.flatMap((c) => proofOf(e, c) ?? []);
@@ -90,7 +93,7 @@ function sentenceOf(e: Evaluation, covers: Cover[], as: SigningRole): string {
 }
 
 function coverView(e: Evaluation, cover: Cover, units: UnitSystem): SheetView["items"][number] {
-  const item = e.facts.items.get(cover.item);
+  const item = itemOf(e.facts, cover.item);
   const proof = proofOf(e, cover);
   if (!item || !proof) return { key: item?.key ?? "", words: item?.words ?? "", said: "no proof", who: "" };
   const view = proofView(e, item, proof, units);
@@ -104,7 +107,7 @@ function meansOf(e: Evaluation, gateId: string, me: string, last: boolean): stri
   // A sheet that cannot be signed must not say that it stands.
   if (!result?.ready) return [];
   const until = (result?.covers ?? []).flatMap((c) => e.result.items[c.item]?.until ?? []);
-  const systems = [...new Set((e.facts.itemsOf.get(gateId) ?? []).flatMap((i) => i.systems))].length;
+  const systems = [...new Set(itemsIn(e.facts, gateId).flatMap((i) => i.systems))].length;
   const next = gate?.policy[(result?.holding.length ?? 0) + 1] ?? [];
   const others = e.snapshot.members
     .filter((m) => m.id !== me && m.roles.some((r) => r.to === null && (next as string[]).includes(r.role)))

@@ -21,6 +21,7 @@ export function stripOf(e: Evaluation, now: Instant): StripView {
       { label: "Crib", href: `${home}/crib` },
       { label: "Set-up", href: `${home}/set-up` },
       { label: "Mail", href: `${home}/mail` },
+      { label: "Record", href: `${home}/record` },
     ],
     asOf: `as of ${e.facts.when(now).replace(/^\d+ \w+ /, "")}`,
   };

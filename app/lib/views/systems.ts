@@ -1,5 +1,7 @@
 /** The systems of an install as a person chooses and reads them, and the presets that fit it. Pure. */
+
 import type { Evaluation } from "#app/lib/gates/evaluate";
+import { allItems } from "#app/lib/gates/facts";
 import { inSentence } from "#app/lib/gates/who";
 import { OPENING_PRESETS, SYSTEM_NAMES } from "#app/lib/template/systems";
 import { SYSTEMS, type SystemKey } from "#app/lib/template/types";
@@ -12,7 +14,7 @@ export interface SystemChoice {
 /** Those that an item of the board names, in the template's order; the bay is always there. */
 export function systemsOn(e: Evaluation): SystemChoice[] {
   const used = new Set<SystemKey>(["bay"]);
-  for (const item of e.facts.items.values()) for (const system of item.systems) used.add(system);
+  for (const item of allItems(e.facts)) for (const system of item.systems) used.add(system);
   return SYSTEMS.filter((s) => used.has(s)).map((value) => ({ value, label: SYSTEM_NAMES[value] }));
 }
 

@@ -2,7 +2,11 @@
  * What an act would undo, shown before it counts: the board as it is against the board as it would be, both from the same
  * evaluator at the same instant. Pure.
  */
+
+import type { ValveState } from "#app/components/ui/states";
+import { rpmText } from "#app/lib/gates/clearance";
 import { type Evaluation, evaluate, withOpening } from "#app/lib/gates/evaluate";
+import { itemsIn } from "#app/lib/gates/facts";
 import type { ItemResult } from "#app/lib/gates/result";
 import type { Gate, LooseEnd, Opening, Snapshot } from "#app/lib/gates/snapshot";
 import { count } from "#app/lib/gates/who";
@@ -11,7 +15,7 @@ import type { Viewer } from "#app/lib/views/board";
 import { gateOf } from "#app/lib/views/places";
 import { mailReaders } from "#app/lib/views/plan";
 import { lowerFirst } from "#app/lib/views/run-words";
-import { rpmText, type ValveState, valveOf, waitsFor } from "#app/lib/views/shown-states";
+import { valveOf, waitsFor } from "#app/lib/views/shown-states";
 
 export interface ShownGate {
   state: ValveState;
@@ -71,7 +75,7 @@ function lapsedGate(before: Evaluation, after: Evaluation, gate: Gate): LapsedGa
   const was = before.result.gates[gate.id];
   const is = after.result.gates[gate.id];
   if (!was || !is) return null;
-  const items = (before.facts.itemsOf.get(gate.id) ?? []).filter((i) => lapses(before.result.items[i.id], after.result.items[i.id]));
+  const items = itemsIn(before.facts, gate.id).filter((i) => lapses(before.result.items[i.id], after.result.items[i.id]));
   if (was.state === is.state && items.length === 0) return null;
   const waits = waitsFor(after.result.gates, is).map((id) => lowerFirst(before.facts.gates.get(id)?.name ?? "another gate"));
   const shown = (r: typeof was): ShownGate => ({ state: valveOf(r.state), part: r.of ? r.done / r.of : 0 });

@@ -1,5 +1,5 @@
 /**
- * The three mails that a crew gets about a run, worded for one reader: plain text complete in itself, HTML beside it.
+ * The mails that a crew gets about a run, worded for one reader: plain text complete in itself, HTML beside it.
  * Pure: the same model and reader give the same mail.
  */
 import { goPage } from "#app/lib/mail/compose/go";
@@ -8,9 +8,10 @@ import { toHtml } from "#app/lib/mail/compose/html";
 import type { RunMailKind, RunMailModel, RunMailReader, RunMailText } from "#app/lib/mail/compose/model";
 import { noGoPage } from "#app/lib/mail/compose/no-go";
 import type { Compose } from "#app/lib/mail/compose/page";
+import { scrubPage } from "#app/lib/mail/compose/scrub";
 import { toText } from "#app/lib/mail/compose/text";
 
-const PAGES: Record<RunMailKind, Compose> = { go: goPage, "no-go": noGoPage, hold: holdPage };
+const PAGES: Record<RunMailKind, Compose> = { go: goPage, "no-go": noGoPage, hold: holdPage, scrub: scrubPage };
 
 /** @returns subject (one line), text (lines of at most 72 characters but for links) and HTML. Every number has its unit, every time its zone. */
 export function composeRunMail(kind: RunMailKind, model: RunMailModel, reader: RunMailReader): RunMailText {
