@@ -204,9 +204,6 @@ describe("a request's body", () => {
   });
 
   it("has a limit by what it carries", () => {
-    expect([
-      bodyLimit("text/plain"),
-      bodyLimit("multipart/form-data; boundary=b"),
-    ]).toEqual([mb, 20 * mb]);
+    expect([bodyLimit("text/plain"), bodyLimit("multipart/form-data; boundary=b")]).toEqual([mb, 20 * mb]);
   });
 });

@@ -2,6 +2,7 @@ import { Link } from "react-router";
 import { Answer } from "#app/components/board/Answer";
 import { CrewBoard } from "#app/components/board/CrewBoard";
 import { Now } from "#app/components/board/Now";
+import { Ahead, StandAt } from "#app/components/board/StandAt";
 import { StopList } from "#app/components/board/StopList";
 import { useBoardWatch } from "#app/components/board/useBoardWatch";
 import { Line } from "#app/components/line/Line";
@@ -11,6 +12,7 @@ import { installContext } from "#app/lib/http/install.server";
 import { boardView } from "#app/lib/views/board";
 import { boardAnswer, tagOf } from "#app/lib/views/board-answer";
 import { boardOf, recordPlaces } from "#app/lib/views/places";
+import { standAt } from "#app/lib/views/stand-at";
 import type { Route } from "./+types/_app.installs.$installId._index";
 
 export const meta: Route.MetaFunction = ({ loaderData }) => [
@@ -18,24 +20,28 @@ export const meta: Route.MetaFunction = ({ loaderData }) => [
 ];
 
 export function loader({ context, url }: Route.LoaderArgs) {
-  const { e, me, head, installId, snapshot } = context.get(installContext);
+  const { e: now, me, head, installId, snapshot } = context.get(installContext);
+  const planned = snapshot.runs.find((r) => r.id === now.result.next?.id)?.plannedStart ?? null;
+  const { e, view: later } = standAt(now, url.searchParams, planned);
   return {
+    later,
     registration: snapshot.install.registration,
     home: boardOf(installId),
     records: recordPlaces(installId),
     view: boardView(e, me),
     whole: url.searchParams.has("whole"),
-    watch: { address: `/api/v1/installs/${installId}/board`, tag: tagOf(boardAnswer(e, head)) },
+    watch: { address: `/api/v1/installs/${installId}/board`, tag: tagOf(boardAnswer(now, head)) },
   };
 }
 
 export default function Board({ loaderData }: Route.ComponentProps) {
-  const { view, home, whole, watch, records } = loaderData;
+  const { view, home, whole, watch, records, later } = loaderData;
   useBoardWatch(watch.address, watch.tag);
   const { answer, stops, line, acts, clearance, crew } = view;
   const short = crew !== null && !whole;
   return (
     <main id="main">
+      <Ahead view={later} here={home} />
       <section className="board-top" aria-label="Where it stands">
         <Answer {...answer} />
         <div className="board-stops">
@@ -49,7 +55,7 @@ export default function Board({ loaderData }: Route.ComponentProps) {
       {short ? (
         <>
           <CrewBoard {...crew} />
-          <Now acts={acts} nothing="Nothing is asked of you now." records={records} />
+          {!later.when && <Now acts={acts} nothing="Nothing is asked of you now." records={records} />}
           <p className="board-whole">
             <Link to={`${home}?whole`}>See the whole board</Link>
           </p>
@@ -57,7 +63,9 @@ export default function Board({ loaderData }: Route.ComponentProps) {
       ) : (
         <>
           <Line {...line} />
-          <Now acts={acts} nothing="Nothing waits for you here. What others do shows above as it happens." records={records} />
+          {!later.when && (
+            <Now acts={acts} nothing="Nothing waits for you here. What others do shows above as it happens." records={records} />
+          )}
           {clearance && (
             <section className="board-clearance" aria-labelledby="clearance-title">
               <h2 id="clearance-title">
@@ -72,6 +80,7 @@ export default function Board({ loaderData }: Route.ComponentProps) {
           )}
         </>
       )}
+      <StandAt key={later.when} view={later} here={home} />
     </main>
   );
 }

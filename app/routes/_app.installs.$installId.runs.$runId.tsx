@@ -11,15 +11,18 @@ import { acknowledgeBrief, answerRollCall, recordWind } from "#app/lib/services/
 import { runOf } from "#app/lib/views/places";
 import { mailReaders } from "#app/lib/views/plan";
 import { runView } from "#app/lib/views/run";
+import { standAt } from "#app/lib/views/stand-at";
 import type { Route } from "./+types/_app.installs.$installId.runs.$runId";
 
 export const meta: Route.MetaFunction = ({ loaderData }) => [{ title: `${loaderData?.view.title ?? "Run"} · Bladecount` }];
 
-export async function loader({ context, params }: Route.LoaderArgs) {
-  const { e, me, installId } = context.get(installContext);
+export async function loader({ context, params, request }: Route.LoaderArgs) {
+  const { e: now, me, installId } = context.get(installContext);
+  const planned = now.facts.runs.get(params.runId)?.run.plannedStart ?? null;
+  const { e, view: later } = standAt(now, new URL(request.url).searchParams, planned);
   const view = runView(e, params.runId, me, await placeOfRun(db(), installId, params.runId));
   if (!view) throw new Response("Not found", { status: 404 });
-  return { view, told: mailReaders(e, params.runId).length, commandId: newId() };
+  return { view, later, told: mailReaders(e, params.runId).length, commandId: newId() };
 }
 
 export async function action({ context, params, request }: Route.ActionArgs) {

@@ -1,4 +1,5 @@
 import type { SubmissionResult } from "@conform-to/react";
+import { Ahead, StandAt } from "#app/components/board/StandAt";
 import { ErrorSummary } from "#app/components/forms/ErrorSummary";
 import { AbortWords } from "#app/components/run/AbortWords";
 import { ClearanceBlock } from "#app/components/run/ClearanceBlock";
@@ -14,9 +15,12 @@ import { WindForm } from "#app/components/run/WindForm";
 import { Fitting } from "#app/components/ui/Fitting";
 import { FloorPlan } from "#app/components/ui/FloorPlan";
 import { Notice } from "#app/components/ui/Notice";
+import type { StandAtView } from "#app/lib/views/stand-at";
 
 export interface RunPageProps {
   view: RunPageView;
+  /** The instant that the page shows, where it is not now. */
+  later: StandAtView;
   /** How many people a mail about this run reaches. */
   told: number;
   commandId: string;
@@ -25,7 +29,7 @@ export interface RunPageProps {
 
 /** A run before its start. Whoever is crew and nothing else sees the own place first, the rest under it. */
 export function RunPage(props: RunPageProps) {
-  const { view, lastResult } = props;
+  const { view, later, lastResult } = props;
   const held = view.state === "held";
   const wrong = Object.entries(lastResult?.error ?? {}).flatMap(([name, list]) =>
     (list ?? []).map((message) => ({ field: name || null, message })),
@@ -34,6 +38,7 @@ export function RunPage(props: RunPageProps) {
   return (
     <>
       <main id="main">
+        <Ahead view={later} here={view.href} />
         <RunTitle
           title={held ? `HOLD, ${view.title.replace(/^Run/, "run")}` : view.title}
           state={view.when}
@@ -52,10 +57,21 @@ export function RunPage(props: RunPageProps) {
             <ErrorSummary errors={wrong} />
           </div>
         )}
-        {crewFirst ? <CrewFirst {...props} /> : <Whole {...props} />}
+        {later.when ? <Later view={view} /> : crewFirst ? <CrewFirst {...props} /> : <Whole {...props} />}
+        <StandAt key={later.when} view={later} here={view.href} />
       </main>
-      <RunFoot view={view} />
+      {!later.when && <RunFoot view={view} />}
     </>
+  );
+}
+
+/** At a later instant nothing can be done: what would stop the run then, and how high it would be cleared. */
+function Later({ view }: { view: RunPageView }) {
+  return (
+    <div className="grid gap-8 px-4 py-5 tablet:px-6 wide:grid-cols-2">
+      <ClearanceBlock {...view.clearance} lower={null} />
+      <Stops view={view} />
+    </div>
   );
 }
 

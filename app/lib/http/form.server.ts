@@ -44,8 +44,7 @@ export async function readForm(request: Request, uploads?: Uploads): Promise<For
   return form;
 }
 
-const tooManyFields = () =>
-  data(`The form has more than ${MOST_FIELDS} fields. Nothing was changed; send less at once.`, { status: 413 });
+const tooManyFields = () => data(`The form has more than ${MOST_FIELDS} fields. Nothing was changed; send less at once.`, { status: 413 });
 
 async function parsed(request: Request, { most, bytes, take }: Uploads = { most: 0, bytes: 0, take: async () => {} }): Promise<FormData> {
   try {

@@ -1,11 +1,11 @@
 /** Forms of the crib. Dates are days at the install ("2026-12-31"); a check is in date to the end of its last day. */
 import { z } from "zod";
-import { idSchema, noteSchema, textSchema } from "#app/lib/schemas/act";
+import { freeTextSchema, idSchema, noteSchema, textSchema } from "#app/lib/schemas/act";
 
 export const dateSchema = z.string("Enter a date.").regex(/^\d{4}-\d{2}-\d{2}$/, "Enter a date.");
 const nameSchema = textSchema("Give it a name.", 120, 2);
 
-export const addToolSchema = z.object({ name: nameSchema, serial: z.string().trim().max(80, "Use at most 80 characters.").default("") });
+export const addToolSchema = z.object({ name: nameSchema, serial: freeTextSchema(80) });
 export const recordToolCheckSchema = z.object({
   tool: idSchema,
   /** The day of the check; null = now. */

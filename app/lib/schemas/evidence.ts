@@ -4,6 +4,7 @@
  */
 import type { Evidence } from "#app/lib/gates/snapshot";
 import { evidenceListSchema } from "#app/lib/record/evidence-shape";
+import { isPlain, NOT_PLAIN } from "#app/lib/schemas/plain-text";
 import type { Part } from "#app/lib/template/types";
 
 export type EvidenceChecked = { ok: true; evidence: (Evidence | null)[] } | { ok: false; message: string };
@@ -24,7 +25,7 @@ export function checkEvidence(parts: Part[], state: "done" | "failed" | "na", in
   const evidence: (Evidence | null)[] = [];
   for (const [n, part] of parts.entries()) {
     const given = parsed.data[n] ?? null;
-    const wrong = partFault(part, given, state);
+    const wrong = partFault(part, given, state) ?? (isPlain(given) ? null : NOT_PLAIN);
     if (wrong) return no(`Part ${n + 1}: ${wrong}`);
     evidence.push(given);
   }

@@ -6,6 +6,7 @@ import { z } from "zod";
 import { commandIdSchema, sourceSchema } from "#app/lib/schemas/act";
 import { createInstallSchema } from "#app/lib/schemas/set-up";
 import type { ValueDef, ValueKey } from "#app/lib/template/types";
+import { valueFault } from "#app/lib/template/values";
 import { format, parseEntry, type UnitSystem } from "#app/lib/units/display";
 
 export const identitySchema = createInstallSchema.pick({ registration: true, name: true, timeZone: true });
@@ -64,5 +65,7 @@ export function ratingsForm(defs: ValueDef[], units: UnitSystem) {
 function siOf(def: ValueDef, text: string, units: UnitSystem): { ok: true; si: number | null } | { ok: false; sentence: string } {
   if (text === "") return { ok: true, si: null };
   if (text === presetText(def, units)) return { ok: true, si: def.preset };
-  return parseEntry(text, def.quantity, units, def.shownIn);
+  const read = parseEntry(text, def.quantity, units, def.shownIn);
+  const fault = read.ok ? valueFault(def, read.si) : null;
+  return fault ? { ok: false, sentence: fault } : read;
 }

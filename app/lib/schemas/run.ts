@@ -1,6 +1,6 @@
 /** Forms of the build-up and of a run. Speeds of wind in m/s, of the crankshaft in 1/s. */
 import { z } from "zod";
-import { idSchema, instantSchema, noteSchema, reasonSchema, rotationSchema } from "#app/lib/schemas/act";
+import { freeTextSchema, idSchema, instantSchema, noteSchema, reasonSchema, rotationSchema } from "#app/lib/schemas/act";
 import { pinSchema } from "#app/lib/schemas/signing";
 
 const positionKey = z.enum(["operator", "runlead", "fireguard", "areaguard", "observer", "recorder", "swinger"]);
@@ -12,7 +12,7 @@ export const planRunSchema = z.object({
   run: idSchema.nullable(),
   rung: z.string().min(1).max(8),
   plannedStart: instantSchema.nullable(),
-  place: z.string().trim().max(200).default(""),
+  place: freeTextSchema(200),
   rpm: rotationSchema,
   positions: z.array(z.object({ position: positionKey, member: idSchema })).max(30),
   windLimit: wind,

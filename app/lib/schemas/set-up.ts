@@ -45,7 +45,7 @@ export const enterNumberSchema = z.object({
     .nullable()
     .default(null),
   /** Of a tick that refers to a maker's mark or instruction. */
-  text: z.string().trim().min(1).max(400).nullable().default(null),
+  text: textSchema("Write what the maker says.", 400, 1).nullable().default(null),
   source: sourceSchema,
 });
 export type EnterNumber = z.output<typeof enterNumberSchema>;

@@ -9,12 +9,13 @@ import { isInspectorsToChange, mayConfirmValue } from "#app/lib/gates/set-up-ver
 import type { Item } from "#app/lib/gates/snapshot";
 import type { ConfirmValue } from "#app/lib/schemas/set-up";
 import { withIds } from "#app/lib/services/board-rows";
-import { done, type Outcome, refusalOf } from "#app/lib/services/outcome";
+import { done, invalid, type Outcome, refusalOf } from "#app/lib/services/outcome";
 import { roleOf } from "#app/lib/services/parts.server";
 import { type Act, type Doing, perform } from "#app/lib/services/perform.server";
 import { carryOver, same } from "#app/lib/template/carry-over";
 import { generate } from "#app/lib/template/generate";
 import type { GeneratedBoard, ItemDef, Part, ValueKey } from "#app/lib/template/types";
+import { valueFault } from "#app/lib/template/values";
 
 type Revised = { item: string; revision: number }[];
 
@@ -26,6 +27,8 @@ export function confirmValue(act: Act, input: ConfirmValue): Promise<Outcome<{ r
     const refusal = refusalOf(mayConfirmValue(d.e, { member: d.member.id, value: { key, changes } }));
     if (refusal) return refusal;
     if (!known) throw new Error("A value was allowed that is not there");
+    const fault = valueFault(known, value);
+    if (fault) return invalid(fault);
     const revised = changes ? await carryThrough(d, known.key, value) : [];
     const as = changes && isInspectorsToChange(d.e, key) ? "inspector" : roleOf(d.member, "lead", "builder", "inspector");
     await d.record(as, { type: "value-confirmed", data: { key, value, source, revised } });

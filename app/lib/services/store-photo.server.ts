@@ -29,11 +29,11 @@ export async function storePhoto(act: Act, input: { bytes: Uint8Array; name: str
   const hash = hashOfBytes(clean);
   const name = safeName(input.name);
   const named = { ...act, kind: "store-photo", input: { hash, name } };
-  const before = (await replayOf<{ file: string }>(db(), commandOf(named))) ?? (await full(db(), act.installId));
+  const before = (await replayOf<{ file: string }>(db(), commandOf(named))) ?? (await refuseFull(db(), act.installId));
   if (before) return before;
   await keepBytes(clean);
   return perform(named, async (d) => {
-    const refusal = refusalOf(mayRaise(d.e, { member: d.member.id })) ?? (await full(d.tx, d.installId));
+    const refusal = refusalOf(mayRaise(d.e, { member: d.member.id })) ?? (await refuseFull(d.tx, d.installId));
     if (refusal) return refusal;
     const row = { hash, size: clean.length, name };
     const { id } = await d.record(roleOf(d.member, "builder", "inspector"), { type: "file-stored", data: { ...row, mime: image.type } });
@@ -42,7 +42,7 @@ export async function storePhoto(act: Act, input: { bytes: Uint8Array; name: str
   });
 }
 
-async function full(reader: Reader, installId: string): Promise<Refusal | null> {
+async function refuseFull(reader: Reader, installId: string): Promise<Refusal | null> {
   if ((await reader.$count(files, eq(files.installId, installId))) < PHOTO_LIMITS.perInstall) return null;
   return invalid(`This install has ${PHOTO_LIMITS.perInstall} pictures already, as many as it can hold.`);
 }

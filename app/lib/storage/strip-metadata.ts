@@ -1,6 +1,6 @@
 /**
  * Takes out of a picture what the camera wrote about where and with what it was taken. Of a JPEG's, its orientation alone is put back.
- * The picture itself is not touched. Sources: JPEG ITU-T T.81 B.1; Exif 2.32 4.5.4 and 4.6.4; PNG W3C REC-png-3 5.3; WebP RFC 9649 2.7.
+ * The picture itself is not touched, and nothing else stays. Sources: JPEG ITU-T T.81 B.1; Exif 2.32 4.5.4 and 4.6.4; PNG W3C REC-png-3 5.3; WebP RFC 9649 2.7.
  */
 import type { ImageType } from "#app/lib/storage/image-type";
 
@@ -17,24 +17,56 @@ export function stripMetadata(bytes: Uint8Array, type: ImageType["type"]): Uint8
   }
 }
 
+/** Up to the first end of image. What some cameras put behind it, such as a second picture, goes. */
 function jpeg(bytes: Uint8Array): Uint8Array | null {
   const v = view(bytes);
-  const kept: Uint8Array[] = [bytes.subarray(0, 2)];
+  const out = output(bytes.length + exifWith(1).length);
+  out.keep(bytes.subarray(0, 2));
   let turned = 1;
-  let at = 2;
-  while (v.getUint8(at) === 0xff && v.getUint8(at + 1) !== 0xda) {
+  let inScans = false;
+  for (let at = 2; ; ) {
+    if (v.getUint8(at) !== 0xff) return null;
     const marker = v.getUint8(at + 1);
-    const length = 2 + v.getUint16(at + 2);
-    if (marker === 0xe1) turned = orientation(bytes.subarray(at + 4, at + length)) ?? turned;
-    // APP1 (Exif, XMP), APP3 to APP13 (maker's data, IPTC), APP15 and comments go; JFIF, colour profile and Adobe's marker stay.
-    const goes = marker === 0xe1 || (marker >= 0xe3 && marker <= 0xed) || marker === 0xef || marker === 0xfe;
-    if (!goes) kept.push(bytes.subarray(at, at + length));
-    at += length;
+    if (marker === 0xff)
+      at += 1; // A fill byte, T.81 B.1.1.2.
+    else if (marker === 0xd9) {
+      out.keep(bytes.subarray(at, at + 2));
+      return inScans ? out.kept() : null;
+    } else {
+      const length = v.getUint16(at + 2);
+      // Markers without a segment have no place here: T.81 B.2.
+      if (marker < 0xc0 || (marker >= 0xd0 && marker <= 0xd8) || length < 2) return null;
+      const segment = bytes.subarray(at + 4, at + 2 + length);
+      const scan = marker === 0xda;
+      const end = scan ? endOfScan(bytes, at + 2 + length) : at + 2 + length;
+      if (!saysMore(marker) || (!inScans && isOfPicture(marker, segment))) out.keep(bytes.subarray(at, end));
+      if (marker === 0xe1 && turned === 1 && !inScans) {
+        turned = orientation(segment) ?? 1;
+        if (turned !== 1) out.keep(exifWith(turned));
+      }
+      inScans ||= scan;
+      at = end;
+    }
   }
-  if (v.getUint8(at) !== 0xff) return null;
-  if (turned !== 1) kept.splice(1, 0, exifWith(turned));
-  // What some cameras put behind the end of the picture goes too.
-  return join([...kept, bytes.subarray(at, bytes.length)]);
+}
+
+/** A segment for applications (APP0 to APP15, and the reserved ones behind them) or a comment. */
+const saysMore = (marker: number): boolean => marker >= 0xe0;
+
+/** JFIF's own head, the colour profile and Adobe's colour transform: without them the picture would look different. */
+const isOfPicture = (marker: number, segment: Uint8Array): boolean =>
+  (marker === 0xe0 && name(segment, 0) === "JFIF") ||
+  (marker === 0xe2 && name(segment, 0) === "ICC_") ||
+  (marker === 0xee && name(segment, 0) === "Adob");
+
+/** Where the next marker stands: in coded data FF is followed by 00, or by D0 to D7 where it starts anew. */
+function endOfScan(bytes: Uint8Array, from: number): number {
+  for (let at = bytes.indexOf(0xff, from); at >= 0; at = bytes.indexOf(0xff, at + 2)) {
+    const next = bytes[at + 1] ?? 0;
+    if (next === 0xff) at -= 1;
+    else if (next !== 0 && !(next >= 0xd0 && next <= 0xd7)) return at;
+  }
+  throw new RangeError("A scan without an end");
 }
 
 /** The orientation (1 to 8) of an Exif segment's first directory; null when it says none. */
@@ -62,38 +94,61 @@ function exifWith(turned: number): Uint8Array {
   return Uint8Array.from([0xff, 0xe1, length >> 8, length & 0xff, ...text, ...tiff]);
 }
 
-const PNG_GOES = new Set(["tEXt", "zTXt", "iTXt", "eXIf", "tIME"]);
+/** What a PNG is drawn from; every other chunk goes, and so does what stands behind IEND. */
+const PNG_STAYS = new Set([
+  "IHDR",
+  "PLTE",
+  "IDAT",
+  "IEND",
+  "tRNS",
+  "gAMA",
+  "cHRM",
+  "sRGB",
+  "iCCP",
+  "cICP",
+  "mDCV",
+  "cLLI",
+  "sBIT",
+  "bKGD",
+  "pHYs",
+]);
 
 function png(bytes: Uint8Array): Uint8Array | null {
   const v = view(bytes);
-  const kept: Uint8Array[] = [bytes.subarray(0, 8)];
+  const out = output(bytes.length);
+  out.keep(bytes.subarray(0, 8));
   for (let at = 8; at < bytes.length; ) {
     const length = 12 + v.getUint32(at);
     const kind = name(bytes, at + 4);
     if (at + length > bytes.length) return null;
-    if (!PNG_GOES.has(kind)) kept.push(bytes.subarray(at, at + length));
-    if (kind === "IEND") return join(kept);
+    if (PNG_STAYS.has(kind)) out.keep(bytes.subarray(at, at + length));
+    if (kind === "IEND") return out.kept();
     at += length;
   }
   return null;
 }
 
+const WEBP_STAYS = new Set(["VP8 ", "VP8L", "VP8X", "ALPH", "ANIM", "ANMF", "ICCP"]);
+
 function webp(bytes: Uint8Array): Uint8Array | null {
   const v = view(bytes);
-  const kept: Uint8Array[] = [];
-  for (let at = 12; at + 8 <= bytes.length; ) {
+  const out = output(bytes.length + 1);
+  out.keep(bytes.subarray(0, 12));
+  const end = 8 + v.getUint32(4, true);
+  if (end > bytes.length) return null;
+  for (let at = 12; at + 8 <= end; ) {
     const size = v.getUint32(at + 4, true);
     const length = 8 + size + (size & 1);
     const kind = name(bytes, at);
-    if (at + 8 + size > bytes.length) return null;
-    if (kind !== "EXIF" && kind !== "XMP ")
-      kept.push(kind === "VP8X" ? withoutFlags(bytes.subarray(at, at + length)) : bytes.subarray(at, at + length));
+    if (at + 8 + size > end) return null;
+    const chunk = bytes.subarray(at, at + length);
+    if (WEBP_STAYS.has(kind)) out.keep(kind === "VP8X" ? withoutFlags(chunk) : chunk);
     at += length;
   }
-  const body = join(kept);
-  const head = Uint8Array.from(bytes.subarray(0, 12));
-  view(head).setUint32(4, body.length + 4, true);
-  return join([head, body]);
+  const kept = out.kept();
+  if (kept.length === 12) return null;
+  view(kept).setUint32(4, kept.length - 8, true);
+  return kept;
 }
 
 /** The extended header no longer announces Exif (bit 3) and XMP (bit 2). */
@@ -103,12 +158,15 @@ function withoutFlags(chunk: Uint8Array): Uint8Array {
   return copy;
 }
 
-function join(parts: Uint8Array[]): Uint8Array {
-  const all = new Uint8Array(parts.reduce((n, p) => n + p.length, 0));
-  let at = 0;
-  for (const part of parts) {
-    all.set(part, at);
-    at += part.length;
-  }
-  return all;
+/** Takes in what is kept, in order; `room` = bytes that it can become at most. */
+function output(room: number) {
+  const all = new Uint8Array(room);
+  let size = 0;
+  return {
+    keep: (part: Uint8Array) => {
+      all.set(part, size);
+      size += part.length;
+    },
+    kept: () => all.subarray(0, size),
+  };
 }

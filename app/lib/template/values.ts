@@ -114,6 +114,12 @@ const STARTING_AND_SITE: ValueRow[] = [
 
 const ROWS = [...RATINGS, ...SPEEDS, ...LIMITS, ...STARTING_AND_SITE];
 
+const MORE_THAN_NONE: ReadonlySet<Quantity> = new Set(["rotation", "power", "volumeFlow", "voltage", "length", "mass", "count", "ratio"]);
+
+/** Why this figure (SI) can be no rating or limit, such as a redline of 0 rpm, or null. It is for what parses and is plausible otherwise. */
+export const valueFault = ({ label, quantity }: Pick<ValueDef, "label" | "quantity">, si: number): string | null =>
+  MORE_THAN_NONE.has(quantity) && si <= 0 ? `${label} is more than zero: type the maker’s figure.` : null;
+
 /** Every value by its key, for words about one that an install may not ask for any more. */
 export const VALUE_LABELS: ReadonlyMap<string, string> = new Map(ROWS.map((row) => [row.key, row.label]));
 
