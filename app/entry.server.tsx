@@ -11,7 +11,7 @@ import { setSecurityHeaders } from "#app/lib/http/headers.server";
 import { currentRequest, newRequestFacts, requestContext } from "#app/lib/http/request.server";
 import { log } from "#app/lib/log.server";
 import { startMailWorker } from "#app/lib/mail/worker.server";
-import { startGoWatch } from "#app/lib/services/go-watch.server";
+import { startBoardClock } from "#app/lib/services/board-clock.server";
 
 export { createRequestHandler, RouterContextProvider } from "react-router";
 // For the server in front, which runs outside this bundle and must share its modules.
@@ -90,10 +90,9 @@ export async function boot(): Promise<() => Promise<void>> {
     );
   });
   const mail = startMailWorker();
-  const watch = startGoWatch();
+  const clock = startBoardClock();
   return async () => {
-    watch.stop();
-    await mail.stop();
+    await Promise.all([clock.stop(), mail.stop()]);
   };
 }
 

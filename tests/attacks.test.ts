@@ -101,10 +101,15 @@ afterAll(async () => {
   rmSync(folder, { recursive: true, force: true });
 });
 
+const password = "&password=x";
+
 describe("a form that is built to stall the server", () => {
-  const password = "&password=x";
   it.each<[string, string]>([
     ["an index far out", `email[1000000]=x${password}`],
+    ["an index of eight digits", `email[10000000]=x${password}`],
+    ["dots alone", `${".".repeat(200_000)}=x${password}`],
+    ["a name as long as a page", `${"a".repeat(101)}=x${password}`],
+    ["lists in lists", `email[9][9][9]=x${password}`],
     ["one field over and over", `${"email=x&".repeat(10_000)}${password}`],
     ["fields that no form has", `${Array.from({ length: 10_000 }, (_, n) => `f${n}=x`).join("&")}${password}`],
     ["a name without end", `a${".b".repeat(20_000)}=x${password}`],
@@ -118,6 +123,19 @@ describe("a form that is built to stall the server", () => {
     const answer = await post("/sign-in", body, nobody);
     expect([400, 413, 422]).toContain(answer.status);
     expect((await answer.text()).length).toBeLessThan(20_000);
+  });
+
+  it("is told why, in a sentence", async () => {
+    const tooMany = await post("/sign-in", "email=x&".repeat(1501), nobody);
+    expect([tooMany.status, await tooMany.text()]).toEqual([413, expect.stringContaining("more than 1500 fields")]);
+    const strange = await post("/sign-in", "__intent__=x", nobody);
+    expect([strange.status, await strange.text()]).toEqual([400, expect.stringContaining("a field that no form of this site has")]);
+  });
+
+  it("is none where every name is one that a page sends", async () => {
+    const names = ["values.redline.source", "crew.operator[1]", "crew.operator[]", "p0.s.straps.wll", "commandId"];
+    const answer = await post("/sign-in", `${names.map((name) => `${name}=x`).join("&")}&email=x${password}`, nobody);
+    expect([answer.status, await answer.text()]).toEqual([400, expect.stringContaining("Enter an e-mail address")]);
   });
 
   it("is refused on a gate's page before the page looks at it", async () => {
@@ -182,12 +200,13 @@ describe("a picture", () => {
     expect(bytes.includes("<script>")).toBe(false);
   });
 
-  it("that is refused leaves nothing on the disk", async () => {
-    const kept = () => readdirSync(join(folder, "files"), { recursive: true, withFileTypes: true }).filter((f) => f.isFile()).length;
+  const kept = () => readdirSync(join(folder, "files"), { recursive: true, withFileTypes: true }).filter((f) => f.isFile()).length;
+
+  it("that is refused, or sent with an act that takes none, leaves nothing on the disk", async () => {
     const commandId = newId();
-    const send = (shade: number) => {
+    const send = (shade: number, over: Record<string, string> = {}) => {
       const form = new FormData();
-      const fields = { commandId, intent: "raise", system: "oil", severity: "watch", words: "weeps at the cooler" };
+      const fields = { commandId, intent: "raise", system: "oil", severity: "watch", words: "weeps at the cooler", ...over };
       for (const [name, text] of Object.entries(fields)) form.append(name, text);
       form.append("photo", new Blob([new Uint8Array(png(shade))], { type: "image/png" }), "a.png");
       return post(`/installs/${mine.install}/findings`, form);
@@ -196,6 +215,9 @@ describe("a picture", () => {
     const before = kept();
     // The same number with another picture is no repetition.
     for (const shade of [2, 3, 4]) expect((await send(shade)).status).toBe(422);
+    expect(kept()).toBe(before);
+    expect((await send(5, { commandId: newId(), intent: "no such act" })).status).toBe(400);
+    expect((await send(6, { commandId: "short" })).status).toBe(400);
     expect(kept()).toBe(before);
   });
 });

@@ -165,14 +165,14 @@ describe("the instant that counts", () => {
     check.due = board.now;
     expect(at(board).items.a?.stands).toBe(false);
     check.due = board.now + HOUR;
-    tool.checks.push({ id: "bad", at: board.now, good: false, due: null });
+    tool.checks.push({ id: "bad", at: board.now, good: false, due: null, since: null });
     expect(at(board).items.a?.stands).toBe(false);
   });
   test("a tool that is not in the crib, or was found bad before and not checked good since, proves nothing", () => {
     const board = makeBoard({ G: { items: { a: { parts: [torque()] } } } });
     board.wait(4).proof("a", { tools: ["borrowed"] });
     expect(at(board).items.a?.stands).toBe(false);
-    board.s.tools[0]?.checks.push({ id: "bad", at: board.wait().now, good: false, due: null });
+    board.s.tools[0]?.checks.push({ id: "bad", at: board.wait().now, good: false, due: null, since: null });
     board.wait().proof("a");
     expect(at(board).items.a?.stands).toBe(false);
   });
@@ -181,7 +181,7 @@ describe("the instant that counts", () => {
     const second = board.tool("second");
     board.wait().proof("a", { tools: ["wrench", "second"] });
     expect(at(board).items.a?.stands).toBe(true);
-    second.checks.push({ id: "bad", at: board.wait(9).now, good: false, due: null });
+    second.checks.push({ id: "bad", at: board.wait(9).now, good: false, due: null, since: null });
     expect(at(board).items.a?.stands).toBe(false);
   });
 });
@@ -240,7 +240,7 @@ describe("keep", () => {
     board.wait();
     for (const id of ["old", "rev", "t", "w"]) board.proof(id);
     board.find("rev").revision = 2;
-    board.s.tools[0]?.checks.push({ id: "bad", at: board.wait(4).now, good: false, due: null });
+    board.s.tools[0]?.checks.push({ id: "bad", at: board.wait(4).now, good: false, due: null, since: null });
     board.open(["oil"], { closed: board.now });
     board.wait();
     for (const id of ["old", "rev", "t", "w"]) {

@@ -80,9 +80,9 @@ describe.each(EVALUATORS)("the $name evaluator", ({ evaluate }) => {
     check.due = board.now;
     expect(look(board).items.bolts?.state, "ran out at that instant").toBe("lapsed");
     check.due = board.now + 99 * TICK;
-    tool.checks.push({ id: "out", at: board.now + 2 * TICK, good: false, due: null });
+    tool.checks.push({ id: "out", at: board.now + 2 * TICK, good: false, due: null, since: null });
     expect(look(board, board.now + 2 * TICK).items.bolts?.state).toBe("lapsed");
-    tool.checks.push({ id: "between", at: board.now + TICK, good: true, due: board.now + 99 * TICK });
+    tool.checks.push({ id: "between", at: board.now + TICK, good: true, due: board.now + 99 * TICK, since: null });
     expect(look(board, board.now + 2 * TICK).items.bolts?.state, "good in between").toBe("done");
   });
 

@@ -62,7 +62,7 @@ describe("an item's proof", () => {
     const tool = board.s.tools[0];
     board.wait(2).proof("a");
     expect(item(board, "a")?.stands).toBe(true);
-    tool?.checks.push({ id: "bad", at: board.wait(4).now, good: false, due: null });
+    tool?.checks.push({ id: "bad", at: board.wait(4).now, good: false, due: null, since: null });
     expect(codes(board, "a")).toEqual(["tool-doubtful"]);
     tool?.checks.splice(1, 1);
     (tool?.checks[0] as { due: number }).due = board.now - 5 * TICK;
@@ -73,10 +73,24 @@ describe("an item's proof", () => {
     const board = makeBoard({ G: { items: { a: { parts: [torque()] } } } });
     board.wait(2).proof("a");
     board.s.tools[0]?.checks.push(
-      { id: "good", at: board.wait().now, good: true, due: board.now + HOUR },
-      { id: "bad", at: board.wait().now, good: false, due: null },
+      { id: "good", at: board.wait().now, good: true, due: board.now + HOUR, since: null },
+      { id: "bad", at: board.wait().now, good: false, due: null, since: null },
     );
     expect(item(board, "a")?.stands).toBe(true);
+  });
+
+  test("a bad check that says since when reaches over a good check, never less far than without", () => {
+    const board = makeBoard({ G: { items: { a: { parts: [torque()] } } } });
+    const used = board.wait(2).proof("a").counts;
+    const checks = board.s.tools[0]?.checks ?? [];
+    checks.push({ id: "good", at: board.wait().now, good: true, due: board.now + HOUR, since: null });
+    const bad = { id: "bad", at: board.wait().now, good: false, due: null, since: used as number | null };
+    checks.push(bad);
+    expect(codes(board, "a")).toEqual(["tool-doubtful"]);
+    bad.since = used + 1;
+    expect(item(board, "a")?.stands).toBe(true);
+    checks.splice(1, 1);
+    expect(codes(board, "a")).toEqual(["tool-doubtful"]);
   });
 
   test("second pair of eyes: another builder, lead or inspector; not the doer, not the recorder, not crew", () => {
@@ -103,6 +117,28 @@ describe("an item's proof", () => {
     const killer = board.proof("k", { state: "na", evidence: [null], note: "no" });
     board.accept(killer.id);
     expect(codes(board, "k")).toEqual(["na-not-allowed"]);
+  });
+
+  test("an opening that disturbed nothing counts until a second person has confirmed that, after it was closed", () => {
+    const board = makeBoard({ G: { items: { a: { systems: ["oil"] } } } });
+    board.wait().proof("a");
+    const opening = board.wait().open(["oil"], { by: "bo", closed: board.now, undisturbed: { confirmed: null } });
+    expect(codes(board, "a")).toEqual(["system-opened-since"]);
+    for (const [who, stands] of [
+      [{ by: "bo", as: "builder" }, false],
+      [{ by: "fi", as: "crew" }, false],
+      [{ by: "cy", as: "inspector" }, false],
+      [{ by: "cy", as: "builder" }, true],
+      [{ by: "la", as: "lead" }, true],
+      [{ by: "di", as: "inspector" }, true],
+    ] as const) {
+      opening.undisturbed = { confirmed: board.wait().record("seen", who) };
+      expect(item(board, "a")?.stands, `${who.by} as ${who.as}`).toBe(stands);
+    }
+    opening.closed = board.wait().now;
+    expect(codes(board, "a")).toEqual(["system-opened-since"]);
+    opening.closed = null;
+    expect(codes(board, "a")).toEqual(["system-open"]);
   });
 
   test("an opening of its system lapses it, open or closed since; every opening opens the bay; a keep brings it back", () => {

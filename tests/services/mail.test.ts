@@ -12,7 +12,7 @@ import { freshDatabase } from "../support/db";
 
 const from = "Bladecount <board@bladecount.example>";
 const base: Mail = {
-  kind: "go",
+  kind: "no-go",
   installId: "i1",
   to: { address: "crew@n0100.example" },
   subject: "GO for run 1",

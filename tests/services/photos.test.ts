@@ -74,15 +74,7 @@ describe("metadata", () => {
   });
 
   it("goes from a WebP, whose header no longer announces it", () => {
-    const part = (kind: string, data: number[]) =>
-      Buffer.concat([Buffer.from(kind, "latin1"), u32(data.length), Buffer.from(data), Buffer.alloc(data.length % 2)]);
-    const body = Buffer.concat([
-      part("VP8X", [0x0c, 0, 0, 0, 1, 0, 0, 0, 0, 0]),
-      part("VP8L", [0x2f, 0, 0, 0, 0]),
-      part("EXIF", [1, 2, 3]),
-      part("XMP ", [4, 5]),
-    ]);
-    const before = Buffer.concat([Buffer.from("RIFF"), u32(body.length + 4), Buffer.from("WEBP"), body]);
+    const before = webp([part("EXIF", [1, 2, 3]), part("XMP ", [4, 5])]);
     expect(imageType(before)).toEqual({ type: "image/webp", width: 2, height: 1 });
     const after = Buffer.from(stripMetadata(before, "image/webp") ?? []);
     expect(after.includes("EXIF") || after.includes("XMP ")).toBe(false);
@@ -91,11 +83,55 @@ describe("metadata", () => {
     expect(imageType(after)).toEqual({ type: "image/webp", width: 2, height: 1 });
   });
 
+  it("goes from between the scans of a JPEG, past fill bytes, and from behind its end", () => {
+    const whole = jpeg();
+    const scan = whole.subarray(whole.length - 14, whole.length - 2);
+    // A marker in coded data is stuffed (FF 00) or a restart (FF D0 to D7): T.81 B.1.1.5 and B.2.1.
+    const coded = Buffer.from([1, 0xff, 0x00, 2, 0xff, 0xd3, 3]);
+    const said = (marker: number) => Buffer.concat([Buffer.from([0xff, 0xff, marker, 0, 10]), Buffer.from("46.9 N 7")]);
+    const before = Buffer.concat([
+      ...[whole.subarray(0, whole.length - 2), coded, said(0xfe), said(0xe1), said(0xe2), scan, coded],
+      ...[Buffer.from([0xff, 0xff, 0xff, 0xd9]), jpeg("46.9 N"), Buffer.from("<script>")],
+    ]);
+    const after = Buffer.from(stripMetadata(before, "image/jpeg") ?? []);
+    expect(after.includes("46.9 N") || after.includes("47.1 N") || after.includes("<script>")).toBe(false);
+    const [fill, end] = [Buffer.from([0xff]), Buffer.from([0xff, 0xd9])];
+    const scans = Buffer.concat([scan, coded, fill, scan, coded, fill, fill, end]);
+    expect(after.subarray(-scans.length)).toEqual(scans);
+    expect(imageType(after)).toEqual({ type: "image/jpeg", width: 2, height: 1 });
+  });
+
+  it.each<[string, Buffer, "image/png" | "image/webp"]>([
+    ["PNG", png(), "image/png"],
+    ["WebP", webp([]), "image/webp"],
+  ])("goes from behind the end of a %s, and with parts that no picture is drawn from", (_, picture, type) => {
+    const clean = Buffer.from(stripMetadata(picture, type) ?? []);
+    expect(clean.length).toBeGreaterThan(0);
+    expect(stripMetadata(Buffer.concat([picture, Buffer.from("46.9 N <script>")]), type)).toEqual(new Uint8Array(clean));
+    expect(stripMetadata(withOwnPart(picture, type), type)).toEqual(new Uint8Array(clean));
+  });
+
   it("of a damaged picture is no picture", () => {
     expect(stripMetadata(png().subarray(0, 60), "image/png")).toBeNull();
     expect(stripMetadata(jpeg().subarray(0, 30), "image/jpeg")).toBeNull();
   });
 });
+
+const part = (kind: string, data: number[]): Buffer =>
+  Buffer.concat([Buffer.from(kind, "latin1"), u32(data.length), Buffer.from(data), Buffer.alloc(data.length % 2)]);
+
+/** A WebP of 2 by 1 pixels with `more` behind its picture. */
+function webp(more: Buffer[]): Buffer {
+  const body = Buffer.concat([part("VP8X", [0x0c, 0, 0, 0, 1, 0, 0, 0, 0, 0]), part("VP8L", [0x2f, 0, 0, 0, 0]), ...more]);
+  return Buffer.concat([Buffer.from("RIFF"), u32(body.length + 4), Buffer.from("WEBP"), body]);
+}
+
+/** The picture with a part of somebody's own making inside it. */
+function withOwnPart(picture: Buffer, type: "image/png" | "image/webp"): Buffer {
+  if (type === "image/webp") return webp([part("GPSx", [...Buffer.from("46.9 N")])]);
+  const own = Buffer.concat([Buffer.from([0, 0, 0, 6]), Buffer.from("gpSx46.9 N"), Buffer.alloc(4)]);
+  return Buffer.concat([picture.subarray(0, 33), own, picture.subarray(33)]);
+}
 
 function u32(n: number): Buffer {
   const bytes = Buffer.alloc(4);

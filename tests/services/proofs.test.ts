@@ -3,6 +3,8 @@ import { db } from "#app/db/client.server";
 import { gateHistory } from "#app/db/queries/gate-history.server";
 import { recordLines } from "#app/db/queries/record-lines.server";
 import { verify } from "#app/lib/record/chain";
+import { checkEvidence } from "#app/lib/schemas/evidence";
+import { NOT_PLAIN } from "#app/lib/schemas/plain-text";
 import type { RecordProof } from "#app/lib/schemas/proof";
 import { acceptNotApplicable } from "#app/lib/services/accept-not-applicable.server";
 import { confirmProof } from "#app/lib/services/confirm-proof.server";
@@ -119,6 +121,18 @@ describe("a proof", () => {
       code: "already",
     });
     expect(await withdrawProof(w.act("cal"), { proof: "nope", reason: "wrong" })).toMatchObject({ ok: false, status: 404 });
+  });
+});
+
+describe("evidence", () => {
+  it("has no text that turns the reading round, in words, places or sheets", () => {
+    const text = [{ kind: "text", asks: "Serial number" }] as const;
+    expect(checkEvidence([...text], "done", [{ kind: "text", text: "0042\n0043" }]).ok).toBe(true);
+    expect(checkEvidence([...text], "done", [{ kind: "text", text: "00\u202e24" }])).toMatchObject({ message: `Part 1: ${NOT_PLAIN}` });
+    const sheet = { kind: "sheet", sheet: "restraint" } as const;
+    const inputs = { straps: [{ name: "left\u2066" }] };
+    expect(checkEvidence([sheet], "failed", [{ ...sheet, version: "1", inputs, took: {} }])).toMatchObject({ ok: false });
+    expect(checkEvidence([sheet], "failed", [{ ...sheet, version: "1", inputs: { straps: [{ name: "left" }] }, took: {} }]).ok).toBe(true);
   });
 });
 

@@ -319,6 +319,26 @@ describe("HOLD", () => {
     expect(await mails("hold")).toEqual([]);
   });
 
+  it("of a run that is held already is recorded, and mailed to the same people only after two minutes or another GO", async () => {
+    const hold = async () => value(await callHold(w.act("cal"), { run, reason: "dog on the apron" }));
+    const told = async () => (await mails("hold")).length / CREW.length;
+    await hold();
+    for (let n = 0; n < 5; n++) {
+      w.clock.add(10_000);
+      await hold();
+    }
+    expect((await acts()).filter((a) => a.act === "hold")).toHaveLength(6);
+    expect(await told()).toBe(1);
+    w.clock.add(2 * MINUTE);
+    await hold();
+    expect(await told()).toBe(2);
+    await rollCall();
+    value(await go());
+    w.clock.add(1000);
+    await hold();
+    expect(await told()).toBe(3);
+  });
+
   it("is called by anybody, once a form, and stays until a lead calls GO again after a new roll call", async () => {
     const act = w.act("olga");
     value(await callHold(act, { run, reason: "dog on the apron" }));

@@ -1,12 +1,15 @@
+import { eq } from "drizzle-orm";
 import { afterAll, beforeAll, beforeEach, describe, expect, it, vi } from "vitest";
 import { db } from "#app/db/client.server";
 import { recordLines } from "#app/db/queries/record-lines.server";
 import { installs } from "#app/db/schema/installs";
 import { newId } from "#app/lib/ids";
 import { verify } from "#app/lib/record/chain";
+import { noteSchema } from "#app/lib/schemas/act";
+import { NOT_PLAIN } from "#app/lib/schemas/plain-text";
 import { createInstallSchema } from "#app/lib/schemas/set-up";
 import { confirmValue } from "#app/lib/services/confirm-value.server";
-import { createInstall } from "#app/lib/services/create-install.server";
+import { createInstall, INSTALLS_A_DAY } from "#app/lib/services/create-install.server";
 import { enterNumber } from "#app/lib/services/enter-number.server";
 import { carryOver } from "#app/lib/template/carry-over";
 import { generate } from "#app/lib/template/generate";
@@ -66,6 +69,29 @@ describe("a new install", () => {
     const sent = await Promise.all([1, 2, 3].map(() => createInstall(act, form)));
     expect(new Set(sent.map((o) => JSON.stringify(o))).size).toBe(1);
     expect(await db().$count(installs)).toBe(before + 1);
+  });
+
+  it("is refused where one account has made 20 of them within a day, and made again the day after", async () => {
+    const form = createInstallSchema.parse({ registration: "N0211R", name: "One of many", timeZone: "UTC", traits: TRAITS });
+    const make = (userId: string) => createInstall({ actor: { userId }, commandId: newId() }, form);
+    const made = await db().$count(installs, eq(installs.createdBy, "lio"));
+    for (let n = made; n < INSTALLS_A_DAY; n++) value(await make("lio"));
+    expect(await make("lio")).toMatchObject(refused(409, "too-many-installs"));
+    value(await make("olga"));
+    w.clock.add(24 * 60 * MINUTE);
+    value(await make("lio"));
+  });
+
+  it.each([
+    ["turns its letters round", "N02\u202e10"],
+    ["holds them apart", "\u2066N0210"],
+    ["rings a bell", "N0210\u0007"],
+  ])("refuses a name that %s", (_, name) => {
+    const form = { registration: "N0210Q", name, timeZone: "UTC", traits: TRAITS };
+    const read = createInstallSchema.safeParse(form);
+    expect(read.error?.issues).toMatchObject([{ path: ["name"], message: NOT_PLAIN }]);
+    expect(noteSchema.safeParse(`first line\r\n\tsecond ${name}`).success).toBe(false);
+    expect(noteSchema.parse("first line\r\n\tsecond, עברית, é")).toBe("first line\r\n\tsecond, עברית, é");
   });
 
   it("refuses a time zone that is none and traits that cannot be true together", () => {
@@ -162,6 +188,13 @@ describe("a rating or limit", () => {
     expect(await places()).toBe(6);
     const now = (await w.item("OP10")).parts[torque];
     expect(now?.kind === "torque" ? now.criterion : null).toMatchObject({ band: { min: 20, max: 25 }, source });
+  });
+
+  it("is more than zero where nothing else can be, such as a redline", async () => {
+    expect(await confirm("redline", 0)).toMatchObject(refused(422, "invalid"));
+    expect(await confirm("reductionRatio", -2)).toMatchObject({ ok: false });
+    value(await confirm("oilPressureMin", 0));
+    value(await confirm("redline", 45));
   });
 
   it("confirmed once is an inspector's to change when work has begun", async () => {

@@ -70,7 +70,7 @@ export class Board {
     return made;
   }
   tool(id: string, due: Instant = START + 9999 * TICK): Tool {
-    const tool = { id, name: `Wrench ${id}`, checks: [{ id: `${id}-check`, at: START, good: true, due }] };
+    const tool: Tool = { id, name: `Wrench ${id}`, checks: [{ id: `${id}-check`, at: START, good: true, due, since: null }] };
     this.s.tools.push(tool);
     return tool;
   }
@@ -191,7 +191,7 @@ export class Board {
 
   // ------------------------------------------------------------ what happens
   open(systems: SystemKey[], more: Partial<Opening> = {}): Opening {
-    const opening: Opening = { ...this.record("opening"), systems, reason: "work", opened: this.now, closed: null, mistake: null, ...more };
+    const opening: Opening = { ...this.record("opening"), systems, reason: "work", opened: this.now, closed: null, mistake: null, undisturbed: null, ...more };
     this.s.openings.push(opening);
     return opening;
   }

@@ -36,8 +36,9 @@ function anyProof(dice: Dice, board: Board, more: Partial<Proof>): Proof | null 
 
 export const BAD_NEWS = {
   opening: (dice, board) => {
-    const opening = board.open(dice.some(SYSTEMS, 30));
+    const opening = board.open(dice.some(SYSTEMS, 30), { by: dice.one(PEOPLE).by });
     if (dice.chance(60)) opening.closed = board.now;
+    if (dice.chance(40)) opening.undisturbed = { confirmed: null };
   },
   "loose end": (dice, board) => {
     const gate = dice.one(board.s.gates).id;
@@ -56,7 +57,8 @@ export const BAD_NEWS = {
   },
   "out of tolerance": (dice, board) => {
     const tool = dice.one(board.s.tools);
-    tool.checks.push({ id: board.id("check"), at: board.now - dice.int(0, 8) * TICK, good: false, due: null });
+    const at = board.now - dice.int(0, 8) * TICK;
+    tool.checks.push({ id: board.id("check"), at, good: false, due: null, since: dice.chance(40) ? at - dice.int(0, 20) * TICK : null });
   },
   hold: (dice, board) => {
     const run = openRun(dice, board);
@@ -97,6 +99,10 @@ const work: Record<string, Happening> = {
     const opening = dice.maybeOne(board.s.openings.filter((o) => o.closed === null));
     if (opening) opening.closed = board.now;
   },
+  undisturbed: (dice, board) => {
+    const opening = dice.maybeOne(board.s.openings);
+    if (opening) opening.undisturbed = { confirmed: board.record("seen", dice.one(PEOPLE)) };
+  },
   mistake: (dice, board) => {
     const opening = dice.maybeOne(board.s.openings);
     if (opening) opening.mistake = { ...board.record("mistake", { by: "di", as: "inspector" }), reason: "wrong aircraft" };
@@ -116,7 +122,7 @@ const work: Record<string, Happening> = {
   },
   "good check": (dice, board) => {
     const due = board.now + dice.int(-4, 40) * TICK;
-    dice.one(board.s.tools).checks.push({ id: board.id("check"), at: board.now - dice.int(0, 8) * TICK, good: true, due });
+    dice.one(board.s.tools).checks.push({ id: board.id("check"), at: board.now - dice.int(0, 8) * TICK, good: true, due, since: null });
   },
   "tool ran out": (dice, board) => {
     const check = dice.one(dice.one(board.s.tools).checks);

@@ -25,6 +25,12 @@ export function onlyWhatCounts(s: Snapshot): Snapshot {
     l.accepted = l.accepted.filter((a) => good(a, l.by, ["inspector"]));
   }
   for (const o of copy.openings) if (!good(o.mistake, o.by, ["inspector"])) o.mistake = null;
+  // Where a second person saw, after it was closed, that nothing had been disturbed, it is as if it had never been.
+  copy.openings = copy.openings.filter((o) => {
+    const seen = o.undisturbed?.confirmed ?? null;
+    const closedFirst = seen !== null && o.closed !== null && o.closed <= seen.recorded;
+    return !(closedFirst && good(seen, o.by, ["builder", "lead", "inspector"]));
+  });
   for (const r of copy.rungs) if (!good(r.leftOut, null, ["inspector"])) r.leftOut = null;
   for (const p of copy.proofs) p.counts = Math.min(p.counts, p.recorded);
   return copy;

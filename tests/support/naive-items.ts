@@ -32,7 +32,7 @@ function toolStands(s: Snapshot, id: string, used: Instant): boolean {
   const newest = checks.filter((c) => c.at === Math.max(...before));
   if (!newest.every((c) => c.good && (c.due === null || used < c.due))) return false;
   const goodBetween = (bad: Instant) => checks.some((g) => g.good && used <= g.at && g.at < bad);
-  return !checks.some((bad) => !bad.good && used <= bad.at && !goodBetween(bad.at));
+  return !checks.some((bad) => !bad.good && used <= bad.at && (!goodBetween(bad.at) || (bad.since !== null && bad.since <= used)));
 }
 
 function anotherPerson(s: Snapshot, proof: Proof, record: { by: string; as: Role; recorded: Instant }, roles: Role[]): boolean {

@@ -19,6 +19,7 @@ export function RouteError({ back = { href: "/hangar", label: "Back to the hanga
         navLabel="Everywhere"
         links={[
           { label: "Hangar", href: "/hangar" },
+          { label: "New install", href: "/installs/new" },
           { label: "Account", href: "/account" },
         ]}
       />

@@ -1,6 +1,7 @@
 // The crib: measuring tools and extinguishers of an install, with their checks.
 import { index, integer, real, sqliteTable, text, uniqueIndex } from "drizzle-orm/sqlite-core";
 import { installId, recordColumns } from "./columns";
+import { files } from "./files";
 
 export const AGENTS = ["co2", "clean", "foam", "powder", "water"] as const;
 
@@ -21,6 +22,11 @@ export const toolChecks = sqliteTable(
     good: integer("good", { mode: "boolean" }).notNull(),
     /** End of the last day in date, at the install; null on a bad check. */
     due: integer("due"),
+    /** On a bad check: in doubt since then, where that is further back than its last good check. */
+    since: integer("since"),
+    /** Number and picture of the certificate. */
+    certificate: text("certificate").notNull().default(""),
+    photo: text("photo").references(() => files.id, { onDelete: "restrict" }),
     note: text("note").notNull(),
   },
   (t) => [uniqueIndex("tool_checks_seq").on(t.installId, t.seq), index("tool_checks_tool").on(t.toolId)],
@@ -36,6 +42,10 @@ export const extinguishers = sqliteTable(
     classB: integer("class_b", { mode: "boolean" }).notNull(),
     /** kg */
     charge: real("charge").notNull(),
+    /** As its label says: "10-B:C", "113B". */
+    rating: text("rating").notNull().default(""),
+    /** Where it stands or hangs. */
+    position: text("position").notNull().default(""),
   },
   (t) => [index("extinguishers_install").on(t.installId)],
 );

@@ -13,6 +13,8 @@ export const findings = sqliteTable(
     system: text("system").$type<SystemKey>().notNull(),
     words: text("words").notNull(),
     photo: text("photo").references(() => files.id, { onDelete: "restrict" }),
+    /** File ids of the photos after the first. */
+    morePhotos: text("more_photos", { mode: "json" }).$type<string[]>().notNull().default([]),
     severity: text("severity", { enum: SEVERITIES }).notNull(),
     /** Highest crankshaft speed while open, 1/s; only on limiting. */
     cap: real("cap"),

@@ -10,6 +10,7 @@ export * from "./findings";
 export * from "./gates";
 export * from "./installs";
 export * from "./items";
+export * from "./leases";
 export * from "./loose-ends";
 export * from "./members";
 export * from "./openings";

@@ -16,6 +16,8 @@ export const looseEnds = sqliteTable(
     /** The item that asks for it; making and restoring it is no opening then. */
     askedBy: text("asked_by").references(() => items.id, { onDelete: "restrict" }),
     due: text("due", { mode: "json" }).$type<LooseEnd["due"]>().notNull(),
+    /** File ids. */
+    photos: text("photos", { mode: "json" }).$type<string[]>().notNull().default([]),
   },
   (t) => [uniqueIndex("loose_ends_seq").on(t.installId, t.seq)],
 );

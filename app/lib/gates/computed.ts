@@ -1,5 +1,5 @@
 /** Items that nobody ticks: extinguishers, loose ends, the engine log, and the release's own conditions. Judged at `facts.at`. */
-import { allItems, type Facts } from "#app/lib/gates/facts";
+import { allItems, disturbs, type Facts } from "#app/lib/gates/facts";
 import type { Blocker, BlockerCode, ItemResult } from "#app/lib/gates/result";
 import type { Gate, Instant, Item, LooseEnd, Role, SystemKey } from "#app/lib/gates/snapshot";
 import { blocker, count, ownerOf } from "#app/lib/gates/who";
@@ -180,7 +180,10 @@ export function releaseOpenings(facts: Facts): Lack[] {
   const since = facts.newestEnd ?? Number.NEGATIVE_INFINITY;
   return facts.snapshot.openings
     .filter(
-      (o) => o.mistake?.as !== "inspector" && o.systems.some((s) => RELEASE_SYSTEMS.includes(s)) && (o.closed === null || o.closed > since),
+      (o) =>
+        disturbs(o) &&
+        o.mistake?.as !== "inspector" &&
+        o.systems.some((s) => RELEASE_SYSTEMS.includes(s)) && (o.closed === null || o.closed > since),
     )
     .map(
       (o): Lack => ({

@@ -55,7 +55,7 @@ export function gatherFacts(given: Snapshot, at: Instant): Facts {
   const work = gatherWork(snapshot, every);
 
   const openings: Facts["openings"] = new Map();
-  for (const opening of snapshot.openings)
+  for (const opening of snapshot.openings.filter(disturbs))
     for (const system of new Set<SystemKey>([...opening.systems, "bay"])) {
       const slot = openings.get(system) ?? { open: null, lastClosed: null };
       openings.set(system, slot);
@@ -109,6 +109,9 @@ export function gatherFacts(given: Snapshot, at: Instant): Facts {
     },
   };
 }
+
+/** In a sound snapshot. False where a second person confirmed that nothing was disturbed: it is no opening then. */
+export const disturbs = (opening: Opening): boolean => !opening.undisturbed?.confirmed;
 
 const earlier = (a: Opening | null, b: Opening): Opening => (!a || b.opened < a.opened || (b.opened === a.opened && b.seq < a.seq) ? b : a);
 

@@ -1,7 +1,7 @@
 /** Rules 2 to 7 of a proof: revision, tools, second person, acceptance, openings, validity. Each returns why not, or null. */
 import { type Facts, heldRole, nameOf } from "#app/lib/gates/facts";
 import type { BlockerCode } from "#app/lib/gates/result";
-import type { Gate, Instant, Item, Proof, Role } from "#app/lib/gates/snapshot";
+import type { Gate, Instant, Item, Proof, Role, Tool } from "#app/lib/gates/snapshot";
 
 export interface Cause {
   code: BlockerCode;
@@ -16,6 +16,10 @@ export const revisionFails = (item: Item, proof: Proof): Cause | null =>
   proof.revision === item.revision
     ? null
     : { code: "old-revision", sentence: "The item was changed after this proof. Prove it again as it reads now." };
+
+/** A bad check reaches back to the last good check before it, not including that check's own instant; for ever where there is none. */
+export const doubtSince = (checks: Tool["checks"], bad: { at: Instant }): Instant =>
+  checks.reduce((last, c) => (c.good && c.at < bad.at && c.at > last ? c.at : last), Number.NEGATIVE_INFINITY);
 
 /** Rule 3: every tool named was in date when used, and no out-of-tolerance record reaches that instant. */
 export function toolFails(facts: Facts, proof: Proof): Cause | null {
@@ -33,16 +37,12 @@ export function toolFails(facts: Facts, proof: Proof): Cause | null {
         (worst, c) => (worst && (!worst.good || (c.good && (worst.due ?? 0) <= (c.due ?? 0))) ? worst : c),
         null,
       );
-    const nextBad = checks.find((c) => !c.good && c.at >= at);
-    if (nextBad) {
-      // It reaches back to the last good check before it, not including that check's own instant.
-      const lastGood = checks.filter((c) => c.good && c.at < nextBad.at).at(-1);
-      if (!lastGood || lastGood.at < at)
-        return {
-          code: "tool-doubtful",
-          sentence: `${name} was found out of tolerance on ${facts.when(nextBad.at)} and was in doubt when used. Do it again with a good tool.`,
-        };
-    }
+    const bad = checks.find((c) => !c.good && c.at >= at && (doubtSince(checks, c) < at || (c.since !== null && c.since <= at)));
+    if (bad)
+      return {
+        code: "tool-doubtful",
+        sentence: `${name} was found out of tolerance on ${facts.when(bad.at)} and was in doubt when used. Do it again with a good tool.`,
+      };
     if (!last?.good || last.due === null || at >= last.due)
       return {
         code: "tool-out-of-date",

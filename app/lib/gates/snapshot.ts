@@ -149,6 +149,11 @@ export interface Opening extends Recorded {
   closed: Instant | null;
   /** An inspector, with a reason, marked it as recorded by mistake (matters for the release only). */
   mistake: (Recorded & { reason: string }) | null;
+  /**
+   * Whoever recorded it says that nothing was disturbed; null = nobody does. Once a second person has confirmed that after the closing
+   * it is no opening any more.
+   */
+  undisturbed: { confirmed: Recorded | null } | null;
 }
 
 export interface LooseEnd extends Recorded {
@@ -175,8 +180,11 @@ export interface Finding extends Recorded {
 export interface Tool {
   id: string;
   name: string;
-  /** Good checks carry the instant at which they run out; `out` = found out of tolerance then. */
-  checks: { id: string; at: Instant; good: boolean; due: Instant | null }[];
+  /**
+   * Good checks carry the instant at which they run out; `good: false` = found out of tolerance then, which reaches back to the last
+   * good check, and to `since` where that is further back.
+   */
+  checks: { id: string; at: Instant; good: boolean; due: Instant | null; since: Instant | null }[];
 }
 
 export interface Extinguisher {

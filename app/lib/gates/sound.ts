@@ -33,7 +33,15 @@ export function soundSnapshot(s: Snapshot): Snapshot {
       confirmed: l.confirmed && another(l.confirmed, l.restored?.by, SECOND) ? l.confirmed : null,
       accepted: l.accepted.filter((a) => another(a, l.by, ["inspector"])),
     })),
-    openings: bySeq(s.openings).map((o) => (o.mistake && !another(o.mistake, o.by, ["inspector"]) ? { ...o, mistake: null } : o)),
+    openings: bySeq(s.openings).map((o) => {
+      const seen = o.undisturbed?.confirmed;
+      const counts = seen && another(seen, o.by, SECOND) && o.closed !== null && o.closed <= seen.recorded;
+      return {
+        ...o,
+        mistake: o.mistake && another(o.mistake, o.by, ["inspector"]) ? o.mistake : null,
+        undisturbed: o.undisturbed && { confirmed: counts ? seen : null },
+      };
+    }),
     rungs: s.rungs.map((r) => (r.leftOut && !another(r.leftOut, undefined, ["inspector"]) ? { ...r, leftOut: null } : r)),
     values: [...s.values].sort((a, b) => Number(b.key === "redline") - Number(a.key === "redline") || (a.key < b.key ? -1 : 1)),
   };

@@ -2,6 +2,7 @@
 // share the work; a worker that dies leaves a lease that runs out. At least once, always with the same Message-ID.
 import { and, asc, eq, isNull, lte } from "drizzle-orm";
 import { type Database, database } from "#app/db/client.server";
+import { goStands } from "#app/db/queries/go-in-force.server";
 import { type OutboxRow, outbox } from "#app/db/schema/outbox";
 import { now } from "#app/lib/clock";
 import { newId } from "#app/lib/ids";
@@ -30,6 +31,11 @@ export function mailWorker(send: SendMail = smtpSender()): MailWorker {
     while (!stopping) {
       const row = await lease(store, me);
       if (!row) return;
+      if (row.kind === "go" && !(await goStands(store.db, row.dedupeKey.split(":")[1] ?? "", now()))) {
+        await settle(store, row, me, { failedAt: now(), lastError: "The GO was over before its mail could go out, so it was not sent." });
+        tally.givenUp++;
+        continue;
+      }
       try {
         await send(row);
         await settle(store, row, me, { sentAt: now(), lastError: null });

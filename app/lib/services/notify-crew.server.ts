@@ -1,5 +1,5 @@
 // Puts the crew's mail about a run into the outbox, in the transaction of the act that it tells about.
-// Read by everybody with a position on the run, and by every lead.
+// Read by everybody with a position on the run, and by every lead; what runs out before it by leads and builders.
 import { and, eq, gt, inArray, isNull } from "drizzle-orm";
 import type { Tx } from "#app/db/client.server";
 import { installs } from "#app/db/schema/installs";
@@ -9,7 +9,7 @@ import { users } from "#app/db/schema/users";
 import { env } from "#app/lib/env.server";
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import type { Blocker, RunResult } from "#app/lib/gates/result";
-import type { RunAct, Snapshot } from "#app/lib/gates/snapshot";
+import type { Role, RunAct, Snapshot } from "#app/lib/gates/snapshot";
 import type { RunMailKind, RunMailModel } from "#app/lib/mail/compose/model";
 import { composeRunMail } from "#app/lib/mail/compose/run-mail";
 import { enqueue } from "#app/lib/mail/outbox.server";
@@ -44,8 +44,11 @@ export async function notifyCrew(tx: Tx, news: CrewNews): Promise<void> {
   const judged = result.runs.find((r) => r.id === news.runId);
   if (!run || !judged) throw new Error("News of a run that the board does not know");
   const model = await modelOf(tx, news, run, judged);
-  const leads = snapshot.members.filter((m) => m.roles.some((r) => r.role === "lead" && r.to === null)).map((m) => m.id);
-  const ids = [...new Set([...model.crew.map((c) => c.member), ...leads])];
+  const holders = (...roles: Role[]) =>
+    snapshot.members.filter((m) => m.roles.some((r) => roles.includes(r.role) && r.to === null)).map((m) => m.id);
+  // What runs out is for those who can do it again; everything else is for whoever may come, and for the leads.
+  const ids =
+    news.kind === "runs-out" ? holders("lead", "builder") : [...new Set([...model.crew.map((c) => c.member), ...holders("lead")])];
   const readers = await tx
     .select({ id: users.id, name: users.name, email: users.email, units: users.units })
     .from(users)

@@ -3,6 +3,7 @@
  * proof withdrawn or found not right. Pure; instants in ms since 1970 UTC.
  */
 import type { Evaluation } from "#app/lib/gates/evaluate";
+import { disturbs } from "#app/lib/gates/facts";
 import { validUntil } from "#app/lib/gates/proofs";
 import type { Gate, Instant, Item } from "#app/lib/gates/snapshot";
 
@@ -30,7 +31,7 @@ function itemSince(e: Evaluation, item: Item, gate: Gate): Instant | null {
       return proof ? validUntil(e.facts, item, gate, proof) : null;
     case "system-open":
     case "system-opened-since": {
-      const after = e.snapshot.openings.filter((o) => proof && o.opened > proof.counts && o.systems.some((s) => item.systems.includes(s)));
+      const after = e.facts.snapshot.openings.filter((o) => disturbs(o) && proof && o.opened > proof.counts && o.systems.some((s) => item.systems.includes(s)));
       return after.length ? Math.min(...after.map((o) => o.opened)) : null;
     }
     default:

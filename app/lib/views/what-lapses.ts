@@ -108,7 +108,7 @@ const NEWEST = Number.MAX_SAFE_INTEGER;
 const draft = (e: Evaluation, me: Viewer) => ({ id: "not-recorded", seq: NEWEST, recorded: e.at, by: me.id, as: me.roles[0] ?? "crew" });
 
 export function draftOpening(e: Evaluation, me: Viewer, systems: SystemKey[], closed: boolean): Opening {
-  return { ...draft(e, me), systems, reason: "", opened: e.at, closed: closed ? e.at : null, mistake: null };
+  return { ...draft(e, me), systems, reason: "", opened: e.at, closed: closed ? e.at : null, mistake: null, undisturbed: null };
 }
 
 /** What recording this opening now would undo. */

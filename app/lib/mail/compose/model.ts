@@ -7,7 +7,7 @@ import type { CardStep, PositionDef, RunCard } from "#app/lib/template/types";
 import type { UnitSystem } from "#app/lib/units/display";
 import type { Quantity } from "#app/lib/units/quantity";
 
-export type RunMailKind = "go" | "no-go" | "hold" | "scrub";
+export type RunMailKind = "go" | "no-go" | "hold" | "scrub" | "runs-out";
 
 export interface RunMailModel {
   install: { id: string; registration: string; name: string; timeZone: string };

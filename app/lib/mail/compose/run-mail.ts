@@ -8,10 +8,11 @@ import { toHtml } from "#app/lib/mail/compose/html";
 import type { RunMailKind, RunMailModel, RunMailReader, RunMailText } from "#app/lib/mail/compose/model";
 import { noGoPage } from "#app/lib/mail/compose/no-go";
 import type { Compose } from "#app/lib/mail/compose/page";
+import { runsOutPage } from "#app/lib/mail/compose/runs-out";
 import { scrubPage } from "#app/lib/mail/compose/scrub";
 import { toText } from "#app/lib/mail/compose/text";
 
-const PAGES: Record<RunMailKind, Compose> = { go: goPage, "no-go": noGoPage, hold: holdPage, scrub: scrubPage };
+const PAGES: Record<RunMailKind, Compose> = { go: goPage, "no-go": noGoPage, hold: holdPage, scrub: scrubPage, "runs-out": runsOutPage };
 
 /** @returns subject (one line), text (lines of at most 72 characters but for links) and HTML. Every number has its unit, every time its zone. */
 export function composeRunMail(kind: RunMailKind, model: RunMailModel, reader: RunMailReader): RunMailText {
