@@ -25,6 +25,7 @@ import type { Part } from "#app/lib/template/types";
 import { arbScene } from "./support/arb-snapshot";
 import type { Board } from "./support/board";
 import { HOUR, TICK, tick, torque } from "./support/parts";
+import { runsOf } from "./support/property-runs";
 import { restraintEvidence, sheetPart } from "./support/sheets";
 import { makeBoard, signAll } from "./support/snapshots";
 
@@ -913,7 +914,7 @@ describe("each blocker names a member who can clear it", () => {
           }
         expect(wrong).toEqual([]);
       }),
-      { numRuns: 200 },
+      runsOf(200),
     );
   });
 });
@@ -948,7 +949,7 @@ describe("an act that is allowed has its effect, and a refusal says why", () => 
               if (grew !== verdict.ok) expect(`${by} as ${as} on ${gate.id}: ${verdict.ok} but grew ${grew}`).toBe("agreed");
             }
       }),
-      { numRuns: 25 },
+      runsOf(25),
     );
   });
 
@@ -967,7 +968,7 @@ describe("an act that is allowed has its effect, and a refusal says why", () => 
             if (!sameInstant) expect(left, item.id).toEqual([]);
           }
       }),
-      { numRuns: 150 },
+      runsOf(150),
     );
   });
 
@@ -989,7 +990,7 @@ describe("an act that is allowed has its effect, and a refusal says why", () => 
             if (start.ok) expect(judged).toMatchObject({ clear: true, state: "called", startBlockers: [] });
           }
       }),
-      { numRuns: 150 },
+      runsOf(150),
     );
   });
 });

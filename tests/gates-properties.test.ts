@@ -10,11 +10,14 @@ import { BAD_NEWS } from "./support/disturbances";
 import { essenceOf, naive } from "./support/naive-evaluator";
 import { prerequisitesOf } from "./support/naive-items";
 import { HOUR, TICK } from "./support/parts";
+import { runsOf } from "./support/property-runs";
 
 vi.setConfig({ testTimeout: 60_000 });
 
 const YEARS = 50 * 365 * 24 * HOUR;
-const RUNS = { numRuns: 300 };
+/** The cheap ones: one or two evaluations a board. */
+const MANY = runsOf(10_000);
+const SOME = runsOf(1_000);
 
 interface Standing {
   stands: boolean;
@@ -82,7 +85,7 @@ describe("bad news and time", () => {
       fc.property(scene, ({ before, after, at }) => {
         expect(better(evaluateBoard(before, at), evaluateBoard(after, at))).toEqual([]);
       }),
-      { numRuns: 120 },
+      runsOf(1_250),
     );
   });
 
@@ -91,7 +94,7 @@ describe("bad news and time", () => {
       fc.property(arbScene(), fc.integer({ min: 1, max: 200 }), ({ snapshot, at }, ticks) => {
         expect(better(evaluateBoard(snapshot, at), evaluateBoard(snapshot, at + ticks * TICK))).toEqual([]);
       }),
-      RUNS,
+      MANY,
     );
   });
 
@@ -111,7 +114,7 @@ describe("bad news and time", () => {
           if (until !== null) expect(standsAt(name, until), `${name} at ${until}`).toBe(false);
         }
       }),
-      RUNS,
+      SOME,
     );
   });
 });
@@ -131,7 +134,7 @@ describe("preview of an opening", () => {
       fc.property(scene, ({ before, opening, after, at }) => {
         expect(evaluateBoard(withOpening(freeze(before), opening), at)).toEqual(evaluateBoard(after, at));
       }),
-      { numRuns: 200 },
+      SOME,
     );
   });
 });
@@ -180,7 +183,7 @@ describe("order and repetition", () => {
         });
         expect(byLabel(evaluateBoard(shuffled(snapshot, order), at))).toEqual(byLabel(evaluateBoard(snapshot, at)));
       }),
-      RUNS,
+      SOME,
     );
   });
 
@@ -189,7 +192,7 @@ describe("order and repetition", () => {
       fc.property(arbScene(), ({ snapshot, at }) => {
         expect(evaluateBoard(freeze(snapshot), at)).toEqual(evaluateBoard(structuredClone(snapshot), at));
       }),
-      { numRuns: 100 },
+      SOME,
     );
   });
 });
@@ -229,7 +232,7 @@ describe("a gate that stands signed", () => {
           expect(before.filter((id) => !board.gates[id]?.stands)).toEqual([]);
         }
       }),
-      RUNS,
+      MANY,
     );
   });
 
@@ -238,7 +241,7 @@ describe("a gate that stands signed", () => {
       fc.property(arbScene(), ({ snapshot, at }) => {
         expect(essenceOf(evaluateBoard(snapshot, at))).toEqual(naive(snapshot, at));
       }),
-      { numRuns: 500 },
+      SOME,
     );
   });
 });
@@ -262,7 +265,7 @@ describe("reasons", () => {
           if (run.state === "reviewed") expect(run.reviewBlockers, run.label).toEqual([]);
         }
       }),
-      RUNS,
+      MANY,
     );
   });
 
@@ -278,7 +281,7 @@ describe("reasons", () => {
           if (!title.trim() || !sentence.trim() || !link.page || dead || strangers.length > 0) expect(blocker).toBe("a way out");
         }
       }),
-      RUNS,
+      MANY,
     );
   });
 });

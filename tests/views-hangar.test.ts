@@ -190,7 +190,7 @@ describe("the crib", () => {
     const tool = board.s.tools[0];
     if (!row || !tool) throw new Error("no tool");
     expect(row).toMatchObject({ state: "in date", detail: "serial 4471", reach: "OP1" });
-    tool.checks.push({ id: "bad", at: board.now, good: false, due: null });
+    tool.checks.push({ id: "bad", at: board.now, good: false, due: null, since: null });
     board.wait();
     const after = evaluated(board).result.items;
     expect([after.OP1?.stands, after.OP2?.stands]).toEqual([false, true]);

@@ -191,7 +191,16 @@ export class Board {
 
   // ------------------------------------------------------------ what happens
   open(systems: SystemKey[], more: Partial<Opening> = {}): Opening {
-    const opening: Opening = { ...this.record("opening"), systems, reason: "work", opened: this.now, closed: null, mistake: null, undisturbed: null, ...more };
+    const opening: Opening = {
+      ...this.record("opening"),
+      systems,
+      reason: "work",
+      opened: this.now,
+      closed: null,
+      mistake: null,
+      undisturbed: null,
+      ...more,
+    };
     this.s.openings.push(opening);
     return opening;
   }

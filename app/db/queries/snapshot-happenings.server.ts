@@ -6,16 +6,17 @@ import { recorded } from "#app/db/queries/snapshot-records.server";
 import { extinguisherChecks, extinguishers, toolChecks, tools } from "#app/db/schema/crib";
 import { findingEvents, findings } from "#app/db/schema/findings";
 import { looseEndEvents, looseEnds } from "#app/db/schema/loose-ends";
-import { openingClosings, openingMistakes, openings } from "#app/db/schema/openings";
+import { openingClosings, openingMistakes, openings, openingUndisturbed } from "#app/db/schema/openings";
 import type { Finding, LooseEnd, Snapshot } from "#app/lib/gates/snapshot";
 
 type Loaded = Pick<Snapshot, "openings" | "looseEnds" | "findings" | "tools" | "extinguishers">;
 
 export async function loadHappenings(reader: Reader, installId: string): Promise<Loaded> {
-  const [opened, closings, mistakes, ends, endEvents, found, foundEvents, toolRows, checks, bottles, looks] = await Promise.all([
+  const [opened, closings, mistakes, seen, ends, endEvents, found, foundEvents, toolRows, checks, bottles, looks] = await Promise.all([
     reader.select().from(openings).where(eq(openings.installId, installId)).orderBy(asc(openings.seq)),
     reader.select().from(openingClosings).where(eq(openingClosings.installId, installId)),
     reader.select().from(openingMistakes).where(eq(openingMistakes.installId, installId)),
+    reader.select().from(openingUndisturbed).where(eq(openingUndisturbed.installId, installId)),
     reader.select().from(looseEnds).where(eq(looseEnds.installId, installId)).orderBy(asc(looseEnds.seq)),
     reader.select().from(looseEndEvents).where(eq(looseEndEvents.installId, installId)).orderBy(asc(looseEndEvents.seq)),
     reader.select().from(findings).where(eq(findings.installId, installId)).orderBy(asc(findings.seq)),
@@ -35,6 +36,7 @@ export async function loadHappenings(reader: Reader, installId: string): Promise
   ]);
   const closed = new Map(closings.map((c) => [c.openingId, c.closed]));
   const mistaken = new Map(mistakes.map((m) => [m.openingId, { ...recorded(m), reason: m.reason }]));
+  const confirmed = new Map(seen.map((s) => [s.openingId, recorded(s)]));
   const eventsOfEnd = groupBy(endEvents, (e) => e.looseEndId);
   const eventsOfFinding = groupBy(foundEvents, (e) => e.findingId);
   const checksOf = groupBy(checks, (c) => c.toolId);
@@ -47,13 +49,14 @@ export async function loadHappenings(reader: Reader, installId: string): Promise
       opened: o.opened,
       closed: closed.get(o.id) ?? null,
       mistake: mistaken.get(o.id) ?? null,
+      undisturbed: o.claimed ? { confirmed: confirmed.get(o.id) ?? null } : null,
     })),
     looseEnds: ends.map((l) => foldLooseEnd(l, eventsOfEnd.get(l.id) ?? [])),
     findings: found.map((f) => foldFinding(f, eventsOfFinding.get(f.id) ?? [])),
     tools: toolRows.map((t) => ({
       id: t.id,
       name: t.name,
-      checks: (checksOf.get(t.id) ?? []).map(({ id, at, good, due }) => ({ id, at, good, due })),
+      checks: (checksOf.get(t.id) ?? []).map(({ id, at, good, due, since }) => ({ id, at, good, due, since })),
     })),
     extinguishers: bottles.map(({ id, name, agent, classB, charge }) => {
       const mine = looksAt.get(id) ?? [];

@@ -183,7 +183,8 @@ export function releaseOpenings(facts: Facts): Lack[] {
       (o) =>
         disturbs(o) &&
         o.mistake?.as !== "inspector" &&
-        o.systems.some((s) => RELEASE_SYSTEMS.includes(s)) && (o.closed === null || o.closed > since),
+        o.systems.some((s) => RELEASE_SYSTEMS.includes(s)) &&
+        (o.closed === null || o.closed > since),
     )
     .map(
       (o): Lack => ({

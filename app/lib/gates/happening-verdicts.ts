@@ -159,6 +159,27 @@ export function mayMarkMistake(e: Evaluation, a: { opening: string; member: stri
   return o.mistake ? already(e, at, "Marked already", "An inspector marked it as recorded by mistake before.") : OK;
 }
 
+/** The second person who looked: nothing was disturbed, as whoever recorded the opening says. */
+export function mayConfirmUndisturbed(e: Evaluation, a: { opening: string; member: string }): Verdict {
+  const o = e.snapshot.openings.find((x) => x.id === a.opening);
+  if (!o) return notFound(e, "opening");
+  const at: Own = { subject: ["opening", o.id], page: "openings", id: o.id };
+  const roles: [Role, ...Role[]] = ["builder", "inspector", "lead"];
+  const cannot = needsRole(e, a.member, roles, "confirm as the second person");
+  if (cannot) return cannot;
+  if (!o.undisturbed)
+    return order(e, at, "It was disturbed", "Whoever recorded it did not say that nothing was disturbed. Prove the system again.", roles);
+  if (o.undisturbed.confirmed)
+    return already(
+      e,
+      at,
+      "Confirmed already",
+      `${nameOf(e.facts, o.undisturbed.confirmed.by)} confirmed it on ${e.facts.when(o.undisturbed.confirmed.recorded)}.`,
+    );
+  if (o.closed === null) return order(e, at, "Still open", "Close it first, then a second person looks.", ["builder", "inspector"]);
+  return o.by === a.member ? own(e, at, a.member, "recorded", roles) : OK;
+}
+
 /** An inspector accepts that a rung is not run. */
 export function mayLeaveOut(e: Evaluation, a: { rung: string; member: string }): Verdict {
   if (!e.facts.rungs.some((r) => r.key === a.rung)) return notFound(e, "rung");

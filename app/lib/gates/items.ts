@@ -2,7 +2,7 @@
 
 import { computedItem } from "#app/lib/gates/computed";
 import { evidenceMeets, numberMissing } from "#app/lib/gates/evidence";
-import { type Facts, nameOf, proofsOf } from "#app/lib/gates/facts";
+import { type Facts, nameOf } from "#app/lib/gates/facts";
 import {
   acceptanceFails,
   type Cause,
@@ -15,8 +15,9 @@ import {
 } from "#app/lib/gates/proofs";
 import type { Blocker, ItemResult, ItemState } from "#app/lib/gates/result";
 import type { Instant, Item, Proof } from "#app/lib/gates/snapshot";
+import { quoted, stepCause, stepFault } from "#app/lib/gates/steps";
 import { blocker, ownerOf } from "#app/lib/gates/who";
-import { allProofs, type ItemFacts } from "#app/lib/gates/work-facts";
+import type { ItemFacts } from "#app/lib/gates/work-facts";
 
 /** Newer-than rules of a gate, worked out once for all of its items. */
 export interface GateLimits {
@@ -138,18 +139,18 @@ function followsFail(facts: Facts, { item, ends }: ItemFacts, proof: Proof): { c
     if (!followed) continue;
     const { item: other, current: otherProof, result } = followed;
     if (other.step) {
-      const cause = stepFails(facts, followed, proof);
-      if (cause) causes.push(cause);
+      const fault = stepFault(facts, followed, proof);
+      if (fault) causes.push(stepCause(facts, other, fault));
       continue;
     }
     if (!result?.stands)
-      causes.push({ code: "follows", sentence: `It follows “${other.words}”, which does not stand. Do that first, then this again.` });
+      causes.push({ code: "follows", sentence: `It follows “${quoted(other)}”, which does not stand. Do that first, then this again.` });
     else {
       until = soonest(until, result.until);
       if (result.state !== "not applicable" && otherProof && otherProof.counts >= proof.counts)
         causes.push({
           code: "follows",
-          sentence: `“${other.words}” was done again on ${facts.when(otherProof.counts)}, not before this. Do this again after it.`,
+          sentence: `“${quoted(other)}” was done again on ${facts.when(otherProof.counts)}, not before this. Do this again after it.`,
         });
     }
   }
@@ -157,38 +158,10 @@ function followsFail(facts: Facts, { item, ends }: ItemFacts, proof: Proof): { c
     if (newest && newest.counts >= proof.counts)
       causes.push({
         code: "step-newer",
-        sentence: `“${step.words}” was done again on ${facts.when(newest.counts)}. This ends it: do it again.`,
+        sentence: `“${quoted(step)}” was done again on ${facts.when(newest.counts)}. This ends it: do it again.`,
       });
   }
   return { causes, until };
-}
-
-/** By the instant that counts; of one instant, by the order in which they were recorded. */
-const before = (a: Proof, b: Proof): boolean => a.counts < b.counts || (a.counts === b.counts && a.seq < b.seq);
-
-function stepFails(facts: Facts, own: ItemFacts, proof: Proof): Cause | null {
-  const step = own.item;
-  const older = allProofs(own).filter((p) => p.counts < proof.counts);
-  const rest = older.at(-1);
-  const again = `Do “${step.words}” first, then this again.`;
-  if (!rest || rest.withdrawn) return { code: "step-missing", sentence: `It rests on “${step.words}”, which was not so then. ${again}` };
-  if (rest.state === "na") {
-    const bad = revisionFails(step, rest) ?? acceptanceFails(facts, rest);
-    return bad && { code: "step-missing", sentence: `It rests on “${step.words}”, whose “not applicable” does not stand. ${again}` };
-  }
-  if (rest.state === "failed" || !evidenceMeets(facts, step, rest).ok || revisionFails(step, rest) || toolFails(facts, rest))
-    return { code: "step-missing", sentence: `It rests on “${step.words}”, whose proof does not hold. ${again}` };
-  const second = secondPersonFails(facts, step, rest);
-  if (second)
-    return { ...second, code: "step-missing", sentence: `It rests on “${step.words}”, which a second person must still confirm.` };
-  if (proof.counts - rest.counts > facts.snapshot.settings.stepWindow) {
-    const hours = Math.round(facts.snapshot.settings.stepWindow / 3600_000);
-    return { code: "step-too-old", sentence: `It rests on “${step.words}”, done more than ${hours} h before. ${again}` };
-  }
-  const ended = step.step?.endedBy;
-  if (ended && proofsOf(facts, ended).some((p) => before(rest, p) && before(p, proof)))
-    return { code: "step-ended", sentence: `“${step.words}” was over when this was done. ${again}` };
-  return null;
 }
 
 function notStanding(facts: Facts, item: Item, proof: Proof | null, state: ItemState, causes: Cause[]): ItemResult {

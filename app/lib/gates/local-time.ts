@@ -101,3 +101,9 @@ export function endOfDate(date: string, timeZone: string): Instant | null {
   const start = midnight(date);
   return start === null ? null : firstFrom(start + DAY, timeZone);
 }
+
+/** @param date "2026-12-03". @returns the first instant of that local day, or null where there is no such date. */
+export function startOfDate(date: string, timeZone: string): Instant | null {
+  const start = midnight(date);
+  return start === null ? null : firstFrom(start, timeZone);
+}

@@ -14,6 +14,7 @@ export function pointsTo(event: RecordEvent): string | null {
       return event.data.signature;
     case "opening-closed":
     case "opening-mistaken":
+    case "opening-undisturbed":
       return event.data.opening;
     case "loose-end-restored":
     case "loose-end-confirmed":

@@ -36,6 +36,7 @@ const KIND_OF: Record<EventType, Kind> = {
   opened: "openings",
   "opening-closed": "openings",
   "opening-mistaken": "openings",
+  "opening-undisturbed": "openings",
   "loose-end-made": "loose ends",
   "loose-end-restored": "loose ends",
   "loose-end-confirmed": "loose ends",
@@ -164,13 +165,25 @@ function sentence(event: RecordEvent, names: Names, units: UnitSystem): string[]
         `${Math.ceil(event.data.size / 1024)} kB, SHA-256 ${event.data.hash.slice(0, 12)}`,
       ];
     case "opened":
-      return [`opened ${systemsWords(event.data.systems)}`, event.data.reason, `Happened ${at(event.data.opened)}`];
+      return [
+        `opened ${systemsWords(event.data.systems)}`,
+        event.data.reason,
+        event.data.happened === undefined ? "" : `Happened ${at(event.data.happened)}; it counts from ${at(event.data.opened)}`,
+        event.data.undisturbed ? "Says that nothing was disturbed; a second person must confirm that" : "",
+      ];
     case "opening-closed":
       return [`closed the opening ${quote(name(event.data.opening))}`, event.data.note];
     case "opening-mistaken":
       return [`marked the opening ${quote(name(event.data.opening))} as recorded by mistake`, event.data.reason];
+    case "opening-undisturbed":
+      return [`confirmed as the second person that nothing was disturbed: ${quote(name(event.data.opening))}`];
     case "loose-end-made":
-      return [`left a loose end: ${event.data.what}`, `${event.data.count} of it, ${SYSTEM_NAMES[event.data.system]}`, event.data.why];
+      return [
+        `left a loose end: ${event.data.what}`,
+        `${event.data.count} of it, ${SYSTEM_NAMES[event.data.system]}`,
+        event.data.why,
+        photosWords(event.data.photos?.length ?? 0),
+      ];
     case "loose-end-restored":
       return [`restored the loose end ${quote(name(event.data.looseEnd))}`];
     case "loose-end-confirmed":
@@ -178,7 +191,12 @@ function sentence(event: RecordEvent, names: Names, units: UnitSystem): string[]
     case "loose-end-accepted":
       return [`accepted the loose end ${quote(name(event.data.looseEnd))} for run ${event.data.rung}`, event.data.reason];
     case "finding-raised":
-      return [`raised a ${event.data.severity} finding: ${event.data.words}`, SYSTEM_NAMES[event.data.system], capWords(event.data.cap)];
+      return [
+        `raised a ${event.data.severity} finding: ${event.data.words}`,
+        SYSTEM_NAMES[event.data.system],
+        capWords(event.data.cap),
+        photosWords((event.data.photo === null ? 0 : 1) + (event.data.morePhotos?.length ?? 0)),
+      ];
     case "finding-severity":
       return [`made the finding ${quote(name(event.data.finding))} ${event.data.severity}`, event.data.words, capWords(event.data.cap)];
     case "finding-fixed":
@@ -193,10 +211,17 @@ function sentence(event: RecordEvent, names: Names, units: UnitSystem): string[]
       return [
         event.data.good ? `entered a good check of ${name(event.data.tool)}` : `recorded ${name(event.data.tool)} as out of tolerance`,
         `Checked ${at(event.data.at)}${event.data.due === null ? "" : `, in date until ${at(event.data.due)}`}`,
+        event.data.since === undefined ? "" : `In doubt since ${at(event.data.since)}`,
+        event.data.certificate ? `Certificate ${event.data.certificate}` : "",
+        photosWords(event.data.photo === undefined ? 0 : 1),
         event.data.note,
       ];
     case "extinguisher-added":
-      return [`put the extinguisher ${event.data.name} into the crib`];
+      return [
+        `put the extinguisher ${event.data.name} into the crib`,
+        event.data.rating ? `Rated ${event.data.rating}` : "",
+        event.data.position ? `Stands: ${event.data.position}` : "",
+      ];
     case "extinguisher-checked":
       return [
         event.data.kind === "withdrawn"
@@ -272,5 +297,6 @@ function proofSentence(event: Extract<RecordEvent, { type: "proof" }>, names: Na
   return [`${verb} ${words}`, details.filter((d) => d !== "done").join("; "), doer, late, tools, data.note];
 }
 
+const photosWords = (n: number): string => (n === 0 ? "" : n === 1 ? "With a photo" : `With ${n} photos`);
 const capWords = (cap: number | null): string => (cap === null ? "" : `Not above ${rpmText(cap)}`);
 const valueWords = (key: string): string => inSentence(VALUE_LABELS.get(key) ?? key);

@@ -13,6 +13,11 @@ export const recordToolCheckSchema = z.object({
   good: z.boolean(),
   /** Last day in date; only on a good check. */
   due: dateSchema.nullable().default(null),
+  /** Only on a bad check: first day of doubt, where that is further back than its last good check. */
+  since: dateSchema.nullable().default(null),
+  /** Number of the certificate, and its picture. */
+  certificate: freeTextSchema(80),
+  photo: idSchema.nullable().default(null),
   note: noteSchema,
 });
 export const addExtinguisherSchema = z.object({
@@ -21,6 +26,10 @@ export const addExtinguisherSchema = z.object({
   classB: z.boolean(),
   /** kg */
   charge: z.number("Enter the charge.").positive().max(200),
+  /** As its label says: "10-B:C", "113B". */
+  rating: freeTextSchema(40),
+  /** Where it stands or hangs. */
+  position: freeTextSchema(120),
 });
 export const recordLookSchema = z.object({
   extinguisher: idSchema,
@@ -29,6 +38,6 @@ export const recordLookSchema = z.object({
   note: noteSchema,
 });
 export type AddTool = z.output<typeof addToolSchema>;
-export type RecordToolCheck = z.output<typeof recordToolCheckSchema>;
-export type AddExtinguisher = z.output<typeof addExtinguisherSchema>;
+export type RecordToolCheck = z.input<typeof recordToolCheckSchema>;
+export type AddExtinguisher = z.input<typeof addExtinguisherSchema>;
 export type RecordLook = z.output<typeof recordLookSchema>;

@@ -1,10 +1,11 @@
 // The crib's acts: tools and extinguishers come in, and are checked. A bad check reaches back to the last good one by itself.
 import { extinguisherChecks, extinguishers, toolChecks, tools } from "#app/db/schema/crib";
 import { mayRaise } from "#app/lib/gates/happening-verdicts";
-import { endOfDate } from "#app/lib/gates/local-time";
+import { endOfDate, startOfDate } from "#app/lib/gates/local-time";
 import { mayEditCrib } from "#app/lib/gates/set-up-verdicts";
 import type { AddExtinguisher, AddTool, RecordLook, RecordToolCheck } from "#app/lib/schemas/crib";
 import { done, invalid, notFound, type Outcome, refusalOf } from "#app/lib/services/outcome";
+import { photosMissing } from "#app/lib/services/own-photos.server";
 import { roleOf } from "#app/lib/services/parts.server";
 import { type Act, type Doing, perform } from "#app/lib/services/perform.server";
 
@@ -22,25 +23,33 @@ export function addTool(act: Act, input: AddTool): Promise<Outcome<{ tool: strin
 
 /** An out-of-tolerance check is bad news: any member may record it. */
 export function recordToolCheck(act: Act, input: RecordToolCheck): Promise<Outcome<{ check: string }>> {
+  const { on = null, good, due: dueDate = null, since: sinceDate = null, certificate = "", photo = null, note = "" } = input;
   return perform({ ...act, kind: "record-tool-check", input }, async (d) => {
-    const refusal = refusalOf(input.good ? mayEditCrib(d.e, { member: d.member.id }) : mayRaise(d.e, { member: d.member.id }));
+    const refusal = refusalOf(good ? mayEditCrib(d.e, { member: d.member.id }) : mayRaise(d.e, { member: d.member.id }));
     if (refusal) return refusal;
     if (!d.e.facts.tools.has(input.tool)) return notFound("That tool");
     const zone = d.e.snapshot.install.timeZone;
-    const dayEnd = input.on === null ? d.now : endOfDate(input.on, zone);
-    const due = input.due === null ? null : endOfDate(input.due, zone);
-    if (dayEnd === null || (input.due !== null && due === null)) return invalid("There is no such date. Enter it again.");
+    const dayEnd = on === null ? d.now : endOfDate(on, zone);
+    const due = dueDate === null ? null : endOfDate(dueDate, zone);
+    const since = sinceDate === null ? null : startOfDate(sinceDate, zone);
+    if (dayEnd === null || (dueDate !== null && due === null) || (sinceDate !== null && since === null))
+      return invalid("There is no such date. Enter it again.");
     // A good check of a past day counts from that day's end, a bad one too: it reaches back, never less far.
     const at = Math.min(dayEnd, d.now);
-    if (input.on !== null && dayEnd - 86_400_000 > d.now) return invalid("That day has not come yet. Enter the day of the check.");
-    if (input.good !== (due !== null))
-      return invalid(
-        input.good ? "Enter the last day on which the tool is in date." : "A tool that is out of tolerance has no date to run to.",
-      );
+    if (on !== null && dayEnd - 86_400_000 > d.now) return invalid("That day has not come yet. Enter the day of the check.");
+    if (good !== (due !== null))
+      return invalid(good ? "Enter the last day on which the tool is in date." : "A tool that is out of tolerance has no date to run to.");
     if (due !== null && due <= at) return invalid("The last day in date is before the check. Enter it again.");
-    const row = { at, good: input.good, due, note: input.note };
-    const base = await d.record(keeper(d), { type: "tool-checked", data: { tool: input.tool, ...row } });
-    await d.tx.insert(toolChecks).values({ ...base, toolId: input.tool, ...row });
+    if (since !== null && (good || since > at))
+      return invalid(
+        good ? "A good check leaves no doubt." : "The first day of doubt is after the day on which it was found. Enter it again.",
+      );
+    const missing = await photosMissing(d, photo === null ? [] : [photo], "enter the check");
+    if (missing) return missing;
+    const row = { at, good, due, note };
+    const more = { since: since ?? undefined, certificate: certificate || undefined, photo: photo ?? undefined };
+    const base = await d.record(keeper(d), { type: "tool-checked", data: { tool: input.tool, ...row, ...more } });
+    await d.tx.insert(toolChecks).values({ ...base, toolId: input.tool, ...row, ...more });
     return done({ check: base.id });
   });
 }
@@ -49,8 +58,19 @@ export function addExtinguisher(act: Act, input: AddExtinguisher): Promise<Outco
   return perform({ ...act, kind: "add-extinguisher", input }, async (d) => {
     const refusal = refusalOf(mayEditCrib(d.e, { member: d.member.id }));
     if (refusal) return refusal;
-    const { id } = await d.record(keeper(d), { type: "extinguisher-added", data: input });
-    await d.tx.insert(extinguishers).values({ id, installId: d.installId, ...input });
+    const { name, agent, classB, charge, rating = "", position = "" } = input;
+    if (rating && classB !== /B/.test(rating))
+      return invalid(
+        classB
+          ? `A rating of ${rating} has no B, so it is not class B. Look at the label again.`
+          : `A rating of ${rating} has a B: it is class B. Look at the label again.`,
+      );
+    const row = { name, agent, classB, charge };
+    const { id } = await d.record(keeper(d), {
+      type: "extinguisher-added",
+      data: { ...row, rating: rating || undefined, position: position || undefined },
+    });
+    await d.tx.insert(extinguishers).values({ id, installId: d.installId, ...row, rating, position });
     return done({ extinguisher: id });
   });
 }

@@ -1,17 +1,17 @@
 // A loose end is put back. It counts as restored once a second person has seen it.
-// Where no item asked for it, restoring it is an opening of its system.
+// Where no item asked for it, restoring it is an opening of its system; one that goes once a second person confirms that nothing was disturbed.
 import { eq } from "drizzle-orm";
 import { looseEndEvents, looseEnds } from "#app/db/schema/loose-ends";
 import { mayConfirmRestored, mayRestore } from "#app/lib/gates/happening-verdicts";
-import type { LooseEndRef } from "#app/lib/schemas/happenings";
+import type { LooseEndRef, RestoreLooseEnd } from "#app/lib/schemas/happenings";
 import { writeOpening } from "#app/lib/services/open-system.server";
 import { done, notFound, type Outcome, refusalOf } from "#app/lib/services/outcome";
 import { roleOf } from "#app/lib/services/parts.server";
 import { type Act, perform } from "#app/lib/services/perform.server";
 
-export function restoreLooseEnd(act: Act, input: LooseEndRef): Promise<Outcome<{ looseEnd: string }>> {
+export function restoreLooseEnd(act: Act, input: RestoreLooseEnd): Promise<Outcome<{ looseEnd: string }>> {
   return perform({ ...act, kind: "restore-loose-end", input }, async (d) => {
-    const { looseEnd } = input;
+    const { looseEnd, undisturbed = false } = input;
     const refusal = refusalOf(mayRestore(d.e, { looseEnd, member: d.member.id }));
     if (refusal) return refusal;
     const [row] = await d.tx
@@ -22,7 +22,10 @@ export function restoreLooseEnd(act: Act, input: LooseEndRef): Promise<Outcome<{
     const as = roleOf(d.member, "builder", "inspector");
     const base = await d.record(as, { type: "loose-end-restored", data: { looseEnd } });
     await d.tx.insert(looseEndEvents).values({ ...base, looseEndId: looseEnd, kind: "restored" });
-    if (row.askedBy === null) await writeOpening(d, as, { systems: [row.system], reason: `Loose end restored: ${row.what}`, closed: true });
+    if (row.askedBy === null) {
+      const opening = { systems: [row.system], reason: `Loose end restored: ${row.what}`, closed: true };
+      await writeOpening(d, as, opening, { looseEnd, undisturbed });
+    }
     return done({ looseEnd });
   });
 }

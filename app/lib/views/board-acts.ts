@@ -5,11 +5,13 @@ import { allItems, currentProof, itemsIn } from "#app/lib/gates/facts";
 import type { GateResult } from "#app/lib/gates/result";
 import { maySign } from "#app/lib/gates/signing-verdicts";
 import type { Item, SigningRole } from "#app/lib/gates/snapshot";
+import { stepsToRedoFirst } from "#app/lib/gates/steps";
 import { mayAccept, mayConfirm } from "#app/lib/gates/verdicts";
 import { count } from "#app/lib/gates/who";
 import { isComputed } from "#app/lib/gates/work-facts";
 import type { Viewer } from "#app/lib/views/board";
 import { crewActs } from "#app/lib/views/board-crew";
+import { itemsWords } from "#app/lib/views/items-words";
 import { boardOf, gateOf, runOf } from "#app/lib/views/places";
 
 export interface ActView {
@@ -53,7 +55,7 @@ function signActs(e: Evaluation, me: Viewer): ActView[] {
     ];
   return ready.map(({ gate, as }) => ({
     label: `${gate.holding.length ? "Countersign" : "Sign"} ${name(gate.id)}`,
-    note: `as ${as}, ${count(gate.of, "item")}`,
+    note: `as ${as}, ${itemsWords(e, gate.id)}`,
     href: `${gateOf(install, gate.id)}/sign`,
   }));
 }
@@ -104,12 +106,16 @@ function workActs(e: Evaluation, me: Viewer): ActView[] {
     if (!gate || !next) return [];
     const name = e.facts.gates.get(id)?.name ?? "the gate";
     const label = gate.state === "lapsed" ? `Do ${name} again` : gate.done ? `Carry on with ${name}` : `Begin ${name}`;
-    return [{ label, note: `Next: ${next.words}`, href: gateOf(install, id, next.id) }];
+    return [{ label, note: `Next: ${next.key} ${next.words}`, href: gateOf(install, next.gate, next.id) }];
   });
 }
 
-/** The first item of a gate that somebody has to prove: not done, and everything that it follows stands. */
+/**
+ * The first item of a gate that somebody has to prove: not done, and everything that it follows stands. Where a step that it rests
+ * on would not hold for work done now, that step.
+ */
 export function nextItem(e: Evaluation, gate: string): Item | null {
   const items = itemsIn(e.facts, gate).filter((i) => !isComputed(i) && ["to do", "lapsed"].includes(e.result.items[i.id]?.state ?? ""));
-  return items.find((i) => i.follows.every((f) => e.result.items[f]?.stands ?? true)) ?? items[0] ?? null;
+  const next = items.find((i) => i.follows.every((f) => e.result.items[f]?.stands ?? true)) ?? items[0] ?? null;
+  return next && (stepsToRedoFirst(e, next.id)[0]?.step ?? next);
 }

@@ -1,7 +1,7 @@
 /** What a crew member needs of the next run: the own place, the run in short, the words that stop it, and what is still to be said. */
 
 import { rpmText } from "#app/lib/gates/clearance";
-import { newestAnswer } from "#app/lib/gates/crew";
+import { answerCounts, newestAnswer } from "#app/lib/gates/crew";
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import { POSITIONS } from "#app/lib/template/positions";
 import type { ActView } from "#app/lib/views/board-acts";
@@ -46,11 +46,9 @@ export function crewActs(e: Evaluation, member: string): ActView[] {
   if (!plan.positions.some((p) => p.member === member)) return [];
   const href = runOf(e.snapshot.install.id, run.run.id);
   if (!run.run.acks.some((a) => a.by === member && a.version === plan.version))
-    return [{ label: "Read the run card", note: `Run ${run.run.label}, version ${plan.version}`, href }];
-  const answer = newestAnswer(run, member);
-  return answer && answer.version === plan.version && answer.answer === "go"
-    ? []
-    : [{ label: "Answer the roll call", note: `go or no-go for run ${run.run.label}`, href }];
+    return [{ label: "Read the run card", note: `run ${run.run.label}, version ${plan.version}, then say go or no-go`, href }];
+  if (answerCounts(run, newestAnswer(run, member), plan.version)) return [];
+  return [{ label: "Answer the roll call", note: `go or no-go for run ${run.run.label}${run.lastHold ? ", again after HOLD" : ""}`, href }];
 }
 
 const nextRun = (e: Evaluation) => (e.result.next?.id ? (e.facts.runs.get(e.result.next.id) ?? null) : null);

@@ -12,9 +12,10 @@ import type { Item, Role } from "#app/lib/gates/snapshot";
 import { mayAccept, mayConfirm, mayKeep, mayProve, mayWithdrawProof } from "#app/lib/gates/verdicts";
 import { isComputed } from "#app/lib/gates/work-facts";
 import type { UnitSystem } from "#app/lib/units/display";
+import { type First, firstOf } from "#app/lib/views/gate-first";
 import { type PartView, partViews } from "#app/lib/views/gate-parts";
 import { type ProofView, proofView } from "#app/lib/views/gate-proof";
-import { anchorOf, whoClears } from "#app/lib/views/places";
+import { anchorOf, listOf, whoClears } from "#app/lib/views/places";
 import { nutOf } from "#app/lib/views/shown-states";
 
 export interface Ask {
@@ -26,7 +27,6 @@ export interface Ask {
 export interface ItemView {
   id: string;
   anchor: string;
-  no: number;
   key: string;
   revision: number;
   words: string;
@@ -46,6 +46,10 @@ export interface ItemView {
   tickOnly: boolean;
   /** There is something for this person to do in the row: it stands open. */
   open: boolean;
+  /** What comes before it: were it proved now, it would lapse at once. */
+  first: First[];
+  /** A step that is done, and is wanted again before the items that rest on it: why. */
+  wanted: string | null;
   prove: Ask & { roles: Role[]; told: boolean; lateAllowed: boolean; numberMissing: boolean };
   failed: Ask;
   na: Ask;
@@ -64,7 +68,8 @@ export interface Reader {
 
 const ask = (v: Verdict): Ask => (v.ok ? { ok: true, reason: "" } : { ok: false, reason: v.blockers[0]?.sentence ?? "" });
 
-export function itemView(e: Evaluation, item: Item, no: number, me: Reader): ItemView {
+/** @param wantedBy keys of the items before which this step is to be done again. */
+export function itemView(e: Evaluation, item: Item, me: Reader, wantedBy: string[] = []): ItemView {
   const result = e.result.items[item.id];
   if (!result) throw new Error("An item that the board does not know");
   const proof = currentProof(e.facts, item.id);
@@ -72,13 +77,14 @@ export function itemView(e: Evaluation, item: Item, no: number, me: Reader): Ite
   const parts = partViews(e, item, me.units);
   const prove = proveOf(e, item, me, parts);
   const following = item.follows.every((f) => e.result.items[f]?.stands ?? true);
-  const open =
-    !computed && !result.stands && result.state !== "second eyes" && prove.ok && following && !waitsForAcceptance(result.blockers);
+  const first = firstOf(e, item);
+  const wanted = result.stands && wantedBy.length > 0;
+  const asked = !result.stands && result.state !== "second eyes" && following && first.length === 0;
+  const open = !computed && prove.ok && (asked || wanted) && !waitsForAcceptance(result.blockers);
   const newest = [...proofsOf(e.facts, item.id)].reverse();
   return {
     id: item.id,
     anchor: anchorOf(item.id),
-    no,
     key: item.key,
     revision: item.revision,
     words: item.words,
@@ -91,16 +97,18 @@ export function itemView(e: Evaluation, item: Item, no: number, me: Reader): Ite
       ...(item.step ? ["step"] : []),
     ],
     nut: nutOf(result.state),
-    word: wordOf(result.state, computed),
+    word: wanted ? "do again" : wordOf(result.state, computed),
     reasons: result.stands
       ? []
-      : result.blockers.map((b) => ({ title: b.title, sentence: b.sentence, who: whoClears(e.snapshot, b.owner) })),
+      : result.blockers.map((b) => ({ title: b.title, sentence: b.sentence, who: whoClears(e.snapshot, b.owner, me.id) })),
     proof: proof ? proofView(e, item, proof, me.units) : null,
     history: newest.map((p) => proofView(e, item, p, me.units)),
     parts,
     computed,
     tickOnly: parts.every((p) => p.kind === "tick" && !p.missing),
     open,
+    first,
+    wanted: wanted ? `${listOf(wantedBy)} ${wantedBy.length === 1 ? "rests" : "rest"} on it. Do this again first, then ${listOf(wantedBy)}.` : null,
     prove,
     failed: ask(mayProve(e, { item: item.id, member: me.id, as: me.roles[0] ?? "crew", state: "failed", late: false })),
     na: ask(mayProve(e, { item: item.id, member: me.id, as: prove.roles[0] ?? "builder", state: "na", late: false })),

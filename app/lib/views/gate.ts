@@ -7,7 +7,9 @@ import type { GateResult } from "#app/lib/gates/result";
 import { maySign, mayWithdrawSignature } from "#app/lib/gates/signing-verdicts";
 import type { Gate, Signature, SigningRole } from "#app/lib/gates/snapshot";
 import { count } from "#app/lib/gates/who";
+import { wantedFirst } from "#app/lib/views/gate-first";
 import { type ItemView, itemView, type Reader } from "#app/lib/views/gate-item";
+import { itemsWords } from "#app/lib/views/items-words";
 import { anyOf, boardOf, gateOf, nameIn, type Place, placeOf, whoClears } from "#app/lib/views/places";
 import { valveOf } from "#app/lib/views/shown-states";
 
@@ -24,6 +26,8 @@ export interface SignatureView {
   name: string;
   time: string;
   waits: boolean;
+  /** It was given, and no longer holds. */
+  lapsed: boolean;
   /** This person may take it back. */
   mayWithdraw: boolean;
 }
@@ -57,7 +61,8 @@ export function gateView(e: Evaluation, gateId: string, me: Reader): GateView | 
   const gate = e.facts.gates.get(gateId);
   const result = e.result.gates[gateId];
   if (!gate || !result?.present) return null;
-  const items = itemsIn(e.facts, gateId).map((item, i) => itemView(e, item, i + 1, me));
+  const wanted = wantedFirst(e);
+  const items = itemsIn(e.facts, gateId).map((item) => itemView(e, item, me, wanted.get(item.id)));
   return {
     id: gate.id,
     key: gate.key,
@@ -163,6 +168,7 @@ function signaturesView(e: Evaluation, gate: Gate, result: GateResult, me: Reade
       name: names.length ? anyOf(names, 2) : "not yet",
       time: result.ready ? (i === 0 ? "may sign now" : "after that") : "when all items stand",
       waits: true,
+      lapsed: false,
       mayWithdraw: false,
     };
   });
@@ -173,6 +179,7 @@ function signaturesView(e: Evaluation, gate: Gate, result: GateResult, me: Reade
       name: nameIn(e.snapshot, s.by),
       time: e.facts.when(s.recorded),
       waits: false,
+      lapsed: result.state === "lapsed",
       mayWithdraw: mayWithdrawSignature(e, { signature: s.id, member: me.id }).ok,
     }),
   );
@@ -201,7 +208,7 @@ function footOf(e: Evaluation, gate: Gate, result: GateResult, items: ItemView[]
       note: "The sheet reads back what you sign.",
       act: {
         label: result.holding.length ? `Countersign as ${as}` : `Sign as ${as}`,
-        note: `${count(result.of, "item")}, with your PIN`,
+        note: `${itemsWords(e, gate.id)}, with your PIN`,
         href: `${gateOf(e.snapshot.install.id, gate.id)}/sign`,
       },
     };
@@ -212,31 +219,38 @@ function footOf(e: Evaluation, gate: Gate, result: GateResult, items: ItemView[]
       note: result.until === null ? "Nothing is left to do here." : `Until ${e.facts.when(result.until)}.`,
       act: toBoard(e),
     };
-  if (!left.length) return waitingFoot(e, result, gate);
-  const mine = left.find((i) => i.confirm?.ok || i.accept?.ok) ?? left.find((i) => i.open || (i.prove.numberMissing && i.enterNumber.ok));
-  const kinds = left.map(
-    (i, n) => `${n === 0 ? "item " : ""}${i.no} ${i.nut === "second-eyes" ? "second eyes" : i.nut === "lapsed" ? "lapsed" : "to do"}`,
-  );
+  if (!left.length) return waitingFoot(e, result, gate, me);
+  const next = nextOf(items);
+  const kinds = left.map((i) => `${i.key} ${i.nut === "second-eyes" ? "second eyes" : i.nut === "lapsed" ? "lapsed" : "to do"}`);
   const says = `${count(left.length, "item")} left before ${result.state === "waiting" ? "it can be signed" : "anyone can sign"}`;
   const note = kinds.length > 6 ? `${kinds.slice(0, 5).join(", ")} and ${kinds.length - 5} more` : kinds.join(", ");
-  if (!mine) return { says, note: `${left[0]?.reasons[0]?.who ? `${left[0].reasons[0].who} ` : ""}${note}`, act: toBoard(e) };
-  const verb = mine.confirm?.ok
-    ? "Look and confirm"
-    : mine.accept?.ok
-      ? "Accept or not"
-      : mine.prove.numberMissing
-        ? "Enter the number"
-        : mine.nut === "lapsed"
-          ? "Do again"
-          : "Next";
-  return { says, note, act: { label: `${verb}: item ${mine.no}`, note: mine.words, href: `#${mine.anchor}` } };
+  return next
+    ? { says, note, act: next }
+    : { says, note: `${left[0]?.reasons[0]?.who ? `${left[0].reasons[0].who} ` : ""}${note}`, act: toBoard(e) };
 }
 
-function waitingFoot(e: Evaluation, result: GateResult, gate: Gate): FootView {
+/** The one next thing in the rows for this person: what others wait for, then the items in order, and what comes before each. */
+function nextOf(items: ItemView[]): FootView["act"] {
+  const left = items.filter((i) => i.reasons.length > 0);
+  const act = (verb: string, i: ItemView, note = i.words) => ({ label: `${verb}: ${i.key}`, note, href: `#${i.anchor}` });
+  const waiting = left.find((i) => i.confirm?.ok || i.accept?.ok);
+  if (waiting) return act(waiting.confirm?.ok ? "Look and confirm" : "Accept or not", waiting);
+  for (const i of items) {
+    if (i.wanted && i.open) return act("Do again first", i, i.wanted.replace(/\..*$/, ""));
+    if (!i.reasons.length) continue;
+    const [first] = i.first.filter((f) => !f.href.startsWith("#"));
+    if (first) return { label: first.act, note: `before ${i.key}`, href: first.href };
+    if (i.open) return act(i.nut === "lapsed" ? "Do again" : "Next", i);
+    if (i.prove.numberMissing && i.enterNumber.ok) return act("Enter the number", i);
+  }
+  return null;
+}
+
+function waitingFoot(e: Evaluation, result: GateResult, gate: Gate, me: Reader): FootView {
   const [first] = result.blockers;
   if (!gate.policy.length)
     return { says: "No signatures of its own", note: "It is covered by the two signatures of the release.", act: toBoard(e) };
-  const who = first ? whoClears(e.snapshot, first.owner) : "";
+  const who = first ? whoClears(e.snapshot, first.owner, me.id) : "";
   return { says: first?.title ?? "Nothing for you here", note: first ? `${first.sentence} ${who}` : "", act: toBoard(e) };
 }
 

@@ -123,5 +123,5 @@ function firstOf(e: Evaluation, me: string): string | null {
   const first = (e.result.next ?? e.result.release).blockers[0];
   if (!first) return null;
   if (first.owner.members.includes(me)) return `You can clear what comes first: ${first.title}.`;
-  return `First: ${first.title}. ${whoClears(e.snapshot, first.owner)}`.trim();
+  return `First: ${first.title}. ${whoClears(e.snapshot, first.owner, me)}`.trim();
 }

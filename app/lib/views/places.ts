@@ -33,12 +33,14 @@ const PAGES: Record<Exclude<Blocker["link"]["page"], "gate" | "run">, [path: str
 const ROWS = { openings: "opening", "loose-ends": "loose-end", findings: "finding" } as const;
 export const rowAnchor = (page: keyof typeof ROWS, id: string): string => `${ROWS[page]}-${id}`;
 
-/** Where bad news is written down: taken from any member at any time. */
-export const recordPlaces = (installId: string): Place[] =>
-  (["openings", "loose-ends", "findings"] as const).map((page) => ({
-    href: `${boardOf(installId)}${PAGES[page][0]}`,
-    label: PAGES[page][1],
+/** Where bad news is written down: taken from any member at any time. What is still open is counted there. */
+export function recordPlaces(snapshot: Snapshot): Place[] {
+  const open = snapshot.openings.filter((o) => o.closed === null).length;
+  return (["openings", "loose-ends", "findings"] as const).map((page) => ({
+    href: `${boardOf(snapshot.install.id)}${PAGES[page][0]}`,
+    label: page === "openings" && open ? `${PAGES[page][1]}, ${open} open` : PAGES[page][1],
   }));
+}
 
 /** Where a blocker is cleared. */
 export function placeOf(snapshot: Snapshot, link: Blocker["link"]): Place {
@@ -66,6 +68,13 @@ export function anyOf(names: string[], most = 3): string {
 export const nameIn = (snapshot: Snapshot, member: string): string =>
   snapshot.members.find((m) => m.id === member)?.name ?? "a former member";
 
-/** Who can clear it, by name, or what comes first: a sentence. */
-export const whoClears = (snapshot: Snapshot, owner: Blocker["owner"]): string =>
-  owner.members.length ? `For ${anyOf(owner.members.map((m) => nameIn(snapshot, m)))}.` : (owner.next ?? "");
+/** "WR1", "WR1 and WR2", "WR1, WR2 and WR3". */
+export const listOf = (words: string[]): string =>
+  words.length < 2 ? (words[0] ?? "") : `${words.slice(0, -1).join(", ")} and ${words.at(-1)}`;
+
+/** Who can clear it, by name, the reader as "you" and first; or what comes first: a sentence. */
+export function whoClears(snapshot: Snapshot, owner: Blocker["owner"], me: string): string {
+  if (!owner.members.length) return owner.next ?? "";
+  const others = owner.members.filter((m) => m !== me).map((m) => nameIn(snapshot, m));
+  return `For ${anyOf(others.length < owner.members.length ? ["you", ...others] : others)}.`;
+}

@@ -67,7 +67,7 @@ export function sheetView(e: Evaluation, gateId: string, me: Viewer & { units: U
       ? {
           title: first.title,
           sentence: first.sentence,
-          who: first.code === "already" ? "" : whoClears(e.snapshot, first.owner),
+          who: first.code === "already" ? "" : whoClears(e.snapshot, first.owner, me.id),
           place: placeOf(e.snapshot, first.link),
         }
       : null,
