@@ -78,6 +78,7 @@ describe("a step that would not hold for work done now", () => {
     expect(purge?.first).toEqual([
       {
         label: "FP1 Outdoors, gear off",
+        act: "Do again first: FP1",
         href: "#item-FP1",
         sentence: "Do FP1 first: it was done more than 12 h ago, and a proof of this given now would lapse at once.",
       },

@@ -47,7 +47,7 @@ describe("a gate's page", () => {
 
   it("offers the one next thing, then the signature, then nothing to the one who signed", () => {
     const board = makeBoard({ MF: { items: { m1: {} } } });
-    expect(pageOf(board, "MF", builder).foot.act).toMatchObject({ label: "Next: item 1", href: "#item-m1" });
+    expect(pageOf(board, "MF", builder).foot.act).toMatchObject({ label: "Next: m1", href: "#item-m1" });
     board.proof("m1");
     expect(pageOf(board, "MF", builder).foot.act?.label).toBe("Sign as builder");
     expect(pageOf(board, "MF", inspector).foot.act?.label).toBe("Back to the board");
@@ -115,7 +115,7 @@ describe("a row", () => {
       enterNumber: { ok: true },
     });
     expect(rowOf(board, "MF", builder, 1).parts[0]).toMatchObject({ criterion: { isDefault: true, from: "common practice" } });
-    expect(pageOf(board, "MF", builder).foot.act?.label).toBe("Enter the number: item 1");
+    expect(pageOf(board, "MF", builder).foot.act?.label).toBe("Enter the number: m1");
   });
 
   it("keeps every proof in the history, withdrawn ones too", () => {

@@ -52,7 +52,9 @@ describe("what an opening makes lapse", () => {
       ["DY", "signed", "waiting", "signed to waiting", [], "fuel prime"],
     ]);
     expect(w).toMatchObject({ items: 2, fallen: 2, same: 1, hold: null, running: null });
-    expect(lapseWords(w)).toBe("2 signed gates fall: Fuel prime and Day check. f1 and f2 lapse.");
+    expect(lapseWords(w)).toBe(
+      "2 signed gates fall: Fuel prime and Day check. f1 “Work f1” and f2 “Work f2” lapse: do them again afterwards.",
+    );
   });
 
   it("says first that a GO in force turns into HOLD, and how many are told", () => {
@@ -149,7 +151,7 @@ describe("the openings", () => {
     board.wait();
     const first = board.open(["mount"]);
     const second = board.open(["fueleng", "induct"]);
-    const view = openingsView(judged(board), crew, { [closed.id]: { by: "cy", note: "hose on" } });
+    const view = openingsView(judged(board), crew, { [closed.id]: { closed: { by: "cy", note: "hose on" }, happened: null } });
     expect(view.open.map((r) => r.id)).toEqual([second.id, first.id]);
     expect(view.open[0]?.title).toBe("Fuel, forward of the firewall; induction");
     expect(view.past).toMatchObject([{ id: closed.id, state: "closed", closed: expect.stringMatching(/by Member cy: hose on$/) }]);
@@ -168,12 +170,37 @@ describe("the openings", () => {
     expect(systemWords(["bay"])).toBe("Engine bay");
   });
 
-  it("keeps the typed time in the words, and takes none that has not come", () => {
+  it("says when it happened and when it was recorded, where those differ", () => {
+    const board = gates();
+    board.wait(100);
+    const opening = board.open(["oil"]);
+    const told = (happened: number | null) => ({ [opening.id]: { closed: null, happened } });
+    const opened = (happened: number | null) => openingsView(judged(board), crew, told(happened)).open[0]?.opened ?? "";
+    expect(opened(null)).toMatch(/^opened .+ by Member bo$/);
+    expect(opened(opening.opened)).toBe(opened(null));
+    expect(opened(opening.opened - 2 * 3600_000)).toMatch(/^happened .+, recorded .+ by Member bo$/);
+  });
+
+  it("asks a second person where somebody says that nothing was disturbed", () => {
+    const board = gates();
+    const opening = board.open(["oil"], { closed: board.now, undisturbed: { confirmed: null } });
+    const row = (me: typeof builder | typeof crew | typeof inspector) => openingsView(judged(board), me, {}).past[0];
+    expect(row(builder)?.undisturbed?.may).toMatchObject({ ok: false, why: expect.stringContaining("yourself") });
+    expect(row(crew)?.undisturbed?.may).toMatchObject({
+      ok: false,
+      why: expect.stringContaining("Only a builder or an inspector or a lead"),
+    });
+    expect(row(inspector)).toMatchObject({ state: "closed", undisturbed: { may: { ok: true } } });
+    opening.undisturbed = { confirmed: board.wait().record("seen", { by: "di", as: "inspector" }) };
+    expect(row(inspector)).toMatchObject({ state: "undisturbed", undisturbed: { may: null } });
+  });
+
+  it("takes the time that is typed beside the words, and none that has not come", () => {
     const now = Date.UTC(2026, 11, 3, 12, 0);
     const sent = (happened: string) => ({ commandId: "c".repeat(22), systems: ["oil"], closed: "closed", reason: "Hose off", happened });
     const form = openForm("Europe/Berlin", now);
-    expect(form.parse(sent("2026-12-03T12:10")).reason).toBe("Hose off (happened 3 Dec 12:10 CET, entered later)");
-    expect(form.parse(sent("")).reason).toBe("Hose off");
+    expect(form.parse(sent("2026-12-03T12:10"))).toMatchObject({ reason: "Hose off", happened: Date.UTC(2026, 11, 3, 11, 10) });
+    expect(form.parse(sent("")).happened).toBeNull();
     expect(form.safeParse(sent("2026-12-03T13:01")).error?.issues[0]).toMatchObject({ path: ["happened"] });
   });
 });
@@ -186,7 +213,9 @@ describe("the loose ends", () => {
     return board;
   };
   const detail = (board: Board, asked: string | null = null) =>
-    Object.fromEntries(board.s.looseEnds.map((l) => [l.id, { count: 4, why: "painting", askedBy: asked }]));
+    Object.fromEntries(
+      board.s.looseEnds.map((l) => [l.id, { count: 4, why: "painting", askedBy: asked, photos: [], openings: [] as string[] }]),
+    );
 
   it("come by what they block soonest: the gate of the next run, the next run, then the others", () => {
     const board = withRungs();

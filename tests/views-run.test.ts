@@ -295,5 +295,5 @@ describe("the mail page", () => {
     expect(view.groups[1]?.lines[0]?.words).toBe("sent 06:00 UTC, after 3 tries");
   });
   it("says when there is nothing", () =>
-    expect(mailView([], START, "UTC", () => ({ ok: true, why: "" })).state).toBe("nothing was sent yet"));
+    expect(mailView([], START, "UTC", () => ({ ok: true, why: "" })).state).toBe("nothing has been sent yet"));
 });

@@ -27,7 +27,7 @@ export function loader({ context, url }: Route.LoaderArgs) {
     later,
     registration: snapshot.install.registration,
     home: boardOf(installId),
-    records: recordPlaces(installId),
+    records: recordPlaces(snapshot),
     view: boardView(e, me),
     whole: url.searchParams.has("whole"),
     watch: { address: `/api/v1/installs/${installId}/board`, tag: tagOf(boardAnswer(now, head)) },

@@ -24,6 +24,11 @@ export default function BuildUp({ loaderData: view }: Route.ComponentProps) {
         Each run goes a little higher, after the one before was inspected and reviewed. The engine, propeller and kit maker’s manuals come
         before any speed or time on these cards.
       </CautionSlab>
+      {view.leftOut.map((line) => (
+        <p key={line} className="border-b-2 border-ink px-4 py-3 text-ink-2 tablet:px-6">
+          {line}
+        </p>
+      ))}
       <ol className="px-4 tablet:px-6">
         {view.rungs.map((rung) => (
           <RungRow key={rung.key} rung={rung} />

@@ -1,4 +1,5 @@
 import { data, redirect } from "react-router";
+import { CameFromLine } from "#app/components/happenings/CameFromLine";
 import { FindingItem } from "#app/components/happenings/FindingItem";
 import { RaiseFinding } from "#app/components/happenings/RaiseFinding";
 import { SEVERITY_DOES } from "#app/components/happenings/SeverityFields";
@@ -14,27 +15,30 @@ import { readPhotoForm } from "#app/lib/http/multipart.server";
 import { newId } from "#app/lib/ids";
 import { findingsView, SEVERITIES } from "#app/lib/views/findings";
 import { boardOf } from "#app/lib/views/places";
+import { backTo, cameFrom } from "#app/lib/views/record-links";
 import type { Route } from "./+types/_app.installs.$installId.findings";
 
 export const meta: Route.MetaFunction = () => [{ title: "Findings · Bladecount" }];
 
-export async function loader({ context }: Route.LoaderArgs) {
+export async function loader({ context, request }: Route.LoaderArgs) {
   const { e, me, installId } = context.get(installContext);
-  return { view: findingsView(e, me, await findingDetails(db(), installId)), formId: newId() };
+  const came = cameFrom(e, new URL(request.url).searchParams);
+  return { view: findingsView(e, me, await findingDetails(db(), installId)), came, formId: newId() };
 }
 
 export async function action({ context, request }: Route.ActionArgs) {
   const install = context.get(installContext);
   const act = { installId: install.installId, actor: { userId: install.me.id } };
   const { form, refused } = await readPhotoForm(request, act, ["raise"]);
-  const acted = await actOnFindings(install, form, refused[0]?.message ?? null);
+  const came = cameFrom(install.e, new URL(request.url).searchParams);
+  const acted = await actOnFindings(install, form, refused[0]?.message ?? null, came.where);
   if (!acted) throw data("This page does not know that form. Load it again; nothing was changed.", { status: 400 });
   if (!acted.done) return data(acted.reply, { status: acted.status });
-  return redirect(`${boardOf(install.installId)}/findings#${acted.anchor}`, 303);
+  return redirect(`${boardOf(install.installId)}/findings${backTo(came)}#${acted.anchor}`, 303);
 }
 
 export default function Findings({ loaderData, actionData }: Route.ComponentProps) {
-  const { view, formId } = loaderData;
+  const { view, came, formId } = loaderData;
   const { open, closed } = view;
   const item = { commandId: formId, reply: actionData };
   return (
@@ -46,6 +50,7 @@ export default function Findings({ loaderData, actionData }: Route.ComponentProp
         held={view.held}
         valve={open.length && !view.held ? "shut" : undefined}
       />
+      <CameFromLine back={came.back} says="" />
       {open.length + closed.length === 0 && <WhatTheyAre />}
       {open.length > 0 && (
         <section aria-labelledby="not-closed">
@@ -78,7 +83,7 @@ export default function Findings({ loaderData, actionData }: Route.ComponentProp
           </Fitting>
         </Foot>
       )}
-      <RaiseFinding key={open.length + closed.length} view={view} commandId={`${formId}-raise`} reply={actionData} />
+      <RaiseFinding key={open.length + closed.length} view={view} came={came} commandId={`${formId}-raise`} reply={actionData} />
     </main>
   );
 }

@@ -100,11 +100,7 @@ export default function Sign({ loaderData, actionData }: Route.ComponentProps) {
           </ul>
         </>
       )}
-      <SignedItems
-        title={`What is signed: ${sheet.items.length} items`}
-        open={sheet.as !== "builder" && !sheet.refusal}
-        items={doneBy(sheet.items)}
-      />
+      <SignedItems title={`What is signed: ${sheet.signed}`} open={sheet.as !== "builder" && !sheet.refusal} items={doneBy(sheet.items)} />
       {leftOut.length > 0 && (
         <SignedItems
           title={`Left out of the template on this install: ${leftOut.length} items`}

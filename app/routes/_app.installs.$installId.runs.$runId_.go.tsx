@@ -2,12 +2,13 @@ import { parseWithZod } from "@conform-to/zod/v4";
 import { data, Form, redirect, useNavigation } from "react-router";
 import { ErrorSummary } from "#app/components/forms/ErrorSummary";
 import { HiddenIds } from "#app/components/forms/HiddenIds";
-import { PinInput } from "#app/components/forms/PinInput";
+import { PinStub } from "#app/components/gate/PinStub";
 import { MailReaders } from "#app/components/run/MailReaders";
 import { StopList } from "#app/components/run/StopList";
 import { WireTag } from "#app/components/run/WireTag";
 import { Figure } from "#app/components/ui/Figure";
 import { Fitting } from "#app/components/ui/Fitting";
+import { useLive } from "#app/components/ui/useLive";
 import { readForm } from "#app/lib/http/form.server";
 import { installContext } from "#app/lib/http/install.server";
 import { refused } from "#app/lib/http/respond.server";
@@ -45,6 +46,7 @@ export const shouldRevalidate = () => true;
 export default function CallGo({ loaderData, actionData }: Route.ComponentProps) {
   const { view, commandId } = loaderData;
   const busy = useNavigation().state === "submitting";
+  const live = useLive();
   const error = actionData?.error;
   const people = view.readers.length === 1 ? "mails 1 person now" : `mails ${view.readers.length} people now`;
   return (
@@ -69,16 +71,28 @@ export default function CallGo({ loaderData, actionData }: Route.ComponentProps)
         </>
       }
       stub={
-        <Form method="post" className="flex h-full flex-col justify-between gap-6">
-          <HiddenIds commandId={commandId} version={view.version} />
+        <div className="flex h-full flex-col justify-between gap-6">
+          <Form method="post" id="call-go">
+            <HiddenIds commandId={commandId} version={view.version} />
+          </Form>
           {/* Where GO cannot be called there is nothing to type: keys would say otherwise. */}
-          {view.why === null && (
-            <PinInput key={commandId} name="pin" label="Lead’s PIN" keypad errors={error ? [String(error)] : undefined} />
+          {view.why === null ? (
+            <PinStub
+              key={commandId}
+              form="call-go"
+              pin="Lead’s PIN"
+              label="Call GO"
+              note={people}
+              errors={error ? [String(error)] : undefined}
+              busy={busy}
+              live={live}
+            />
+          ) : (
+            <Fitting size="act" note={people} reason={view.why} centred>
+              Call GO
+            </Fitting>
           )}
-          <Fitting size="act" note={people} reason={view.why ?? undefined} busy={busy} centred>
-            Call GO
-          </Fitting>
-        </Form>
+        </div>
       }
     >
       {error && <ErrorSummary errors={[{ field: "pin", message: String(error) }]} title="GO was not called, nobody was mailed" />}

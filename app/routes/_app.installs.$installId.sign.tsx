@@ -73,7 +73,7 @@ export default function SignSeveral({ loaderData, actionData }: Route.ComponentP
             <Choice kind="checkbox" name="gate" value={sheet.id} defaultChecked note={sheet.means[1]}>
               {sheet.name}
             </Choice>
-            <SignedItems title={`What is signed in ${sheet.name}: ${sheet.items.length} items`} items={doneBy(sheet.items)}>
+            <SignedItems title={`What is signed in ${sheet.name}: ${sheet.signed}`} items={doneBy(sheet.items)}>
               <p>{sheet.sentence}</p>
             </SignedItems>
           </section>

@@ -70,8 +70,8 @@ test("nobody but a lead calls GO: page and form say the same", async ({ visit })
 test("whoever did a part of the work does not countersign it: page, form and API say the same", async ({ visit }) => {
   const inspector = await visit("Henrik", "tablet");
   await inspector.goto(sorrel.gate("WR"));
-  await inspector.getByRole("button", { name: "item 8, press when it is done" }).click();
-  await expect(inspector.getByRole("button", { name: "item 8, press when it is done" })).toHaveCount(0);
+  await inspector.getByRole("button", { name: "WR8, press when it is done" }).click();
+  await expect(inspector.getByRole("button", { name: "WR8, press when it is done" })).toHaveCount(0);
   const builder = await visit("Jonas", "tablet");
   await sign(builder, "Jonas", "builder");
 

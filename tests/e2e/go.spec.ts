@@ -22,7 +22,7 @@ test("the builder sees what stops the first start, proves the last item and sign
   await expect(stops.first()).toContainText("Walk-round is not finished");
   await stops.first().getByRole("link").click();
   await page.waitForURL(`**${sorrel.gate("WR")}#*`);
-  await page.getByRole("button", { name: "item 8, press when it is done" }).click();
+  await page.getByRole("button", { name: "WR8, press when it is done" }).click();
   await page.getByRole("link", { name: /^Sign/ }).click();
   await expect(page.getByRole("heading", { level: 1 })).toHaveText("Sign as builder");
   await page.getByLabel("Your signing PIN").fill(personOf("Jonas").pin);

@@ -53,6 +53,8 @@ interface WorkerParts {
   /** A name: tests with the same one share an instance of their own; "" = the one that all share and none may change. */
   own: string;
   instance: Instance;
+  /** Cookies of whoever has signed in on this instance, by person: a sign-in is made once. */
+  sessions: Map<string, Awaited<ReturnType<BrowserContext["cookies"]>>>;
 }
 
 export const test = base.extend<TestParts, WorkerParts>({
@@ -70,6 +72,11 @@ export const test = base.extend<TestParts, WorkerParts>({
     },
     { scope: "worker", timeout: 60_000 },
   ],
+  sessions: [
+    // biome-ignore lint/correctness/noEmptyPattern: Playwright reads which fixtures one needs from the braces
+    async ({}, use) => use(new Map()),
+    { scope: "worker" },
+  ],
   baseURL: async ({ instance }, use) => use(instance.address),
   /** What pages wrote to the console as error or warning, or threw. A test fails on what is left of it. */
   complaints: [
@@ -81,7 +88,7 @@ export const test = base.extend<TestParts, WorkerParts>({
     },
     { auto: true },
   ],
-  visit: async ({ browser, instance, complaints }, use) => {
+  visit: async ({ browser, instance, sessions, complaints }, use) => {
     const contexts: BrowserContext[] = [];
     await use(async (first, size, { javaScript = true, theme = "apron" } = {}) => {
       const context = await browser.newContext({
@@ -92,7 +99,15 @@ export const test = base.extend<TestParts, WorkerParts>({
       });
       contexts.push(context);
       await context.addCookies([{ name: "theme", value: theme, url: instance.address }]);
-      await signInByRequest(context, instance.address, personOf(first));
+      const known = sessions.get(first);
+      if (known) await context.addCookies(known);
+      else {
+        await signInByRequest(context, instance.address, personOf(first));
+        sessions.set(
+          first,
+          (await context.cookies()).filter((c) => c.name !== "theme"),
+        );
+      }
       const page = await context.newPage();
       listen(page, complaints);
       return page;

@@ -1,9 +1,11 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it, vi } from "vitest";
 import { db } from "#app/db/client.server";
+import { looseEndDetails, openingDetails } from "#app/db/queries/happening-details.server";
 import { recordLines } from "#app/db/queries/record-lines.server";
 import { verify } from "#app/lib/record/chain";
 import { acceptLooseEnd } from "#app/lib/services/accept-loose-end.server";
 import { closeOpening } from "#app/lib/services/close-opening.server";
+import { confirmUndisturbed } from "#app/lib/services/confirm-undisturbed.server";
 import { addExtinguisher, addTool, recordLook, recordToolCheck } from "#app/lib/services/crib.server";
 import { makeLooseEnd } from "#app/lib/services/make-loose-end.server";
 import { markMistake } from "#app/lib/services/mark-mistake.server";
@@ -48,6 +50,15 @@ describe("an opening", () => {
     expect(await closeOpening(w.act("tom"), { opening: "nope", note: "" })).toMatchObject(refused(404, "not-found"));
   });
 
+  it("counts from when it is recorded, although it happened earlier; not from a time to come", async () => {
+    const at = (await w.board()).at;
+    const open = (happened: number) => openSystem(w.act("bea"), { systems: ["oil"], reason: "Hose off", closed: true, happened });
+    const { opening } = value(await open(at - 3_600_000));
+    expect((await snapshot()).openings[0]?.opened).toBeGreaterThanOrEqual(at);
+    expect((await openingDetails(db(), w.installId))[opening]?.happened).toBe(at - 3_600_000);
+    expect(await open(at + 3_600_000)).toMatchObject(refused(422, "invalid"));
+  });
+
   it("is marked a mistake by an inspector who did not record it", async () => {
     const { opening } = value(await openSystem(w.act("ines"), { systems: ["oil"], reason: "Hose off", closed: true }));
     expect(await markMistake(w.act("ines"), { opening, reason: "wrong aircraft" })).toMatchObject(refused(403, "own-work"));
@@ -86,6 +97,35 @@ describe("a loose end", () => {
       [["fuelsup"], false],
       [["fuelsup"], false],
     ]);
+  });
+
+  it("of which its maker says that it disturbed nothing opens its system until a second person has confirmed that", async () => {
+    await w.prove("MF1");
+    const mf1 = await w.item("MF1");
+    const stands = async () => (await w.board()).result.items[mf1.id]?.stands;
+    expect(await stands()).toBe(true);
+    w.clock.add(MINUTE);
+    const { looseEnd } = value(await make("bea", { system: mf1.systems[0], undisturbed: true }));
+    const [made] = (await snapshot()).openings;
+    expect(made).toMatchObject({ undisturbed: { confirmed: null }, by: "bea" });
+    expect(await stands()).toBe(false);
+    const opening = made?.id ?? "";
+    expect(await confirmUndisturbed(w.act("bea"), { opening })).toMatchObject(refused(403, "own-work"));
+    expect(await confirmUndisturbed(w.act("cal"), { opening })).toMatchObject(refused(403, "not-your-role"));
+    value(await confirmUndisturbed(w.act("tom"), { opening }));
+    expect(await confirmUndisturbed(w.act("ines"), { opening })).toMatchObject(refused(409, "already"));
+    expect(await stands()).toBe(true);
+    w.clock.add(MINUTE);
+    value(await restoreLooseEnd(w.act("bea"), { looseEnd, undisturbed: false }));
+    expect(await stands()).toBe(false);
+    const put = (await snapshot()).openings[1]?.id ?? "";
+    expect(await confirmUndisturbed(w.act("tom"), { opening: put })).toMatchObject(refused(409, "order"));
+    expect((await looseEndDetails(db(), w.installId))[looseEnd]?.openings).toEqual([opening, put]);
+    expect(verify(await recordLines(db(), w.installId)).ok).toBe(true);
+  });
+
+  it("names photos of this install or none", async () => {
+    expect(await make("bea", { photos: ["nope"] })).toMatchObject(refused(422, "invalid"));
   });
 
   it("that an item asks for is no opening", async () => {

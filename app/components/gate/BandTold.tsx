@@ -9,10 +9,12 @@ interface BandToldProps {
   text: string;
   units: "si" | "us";
   place: string;
+  /** Where the band is from: said once where several places have the same. */
+  withSource?: boolean;
 }
 
 /** The band as a rule with the value's mark, and in words at once whether it is in. The server tells again. */
-export function BandTold({ criterion, text, units, place }: BandToldProps) {
+export function BandTold({ criterion, text, units, place, withSource = true }: BandToldProps) {
   const { quantity, band, bandText, from, isDefault } = criterion;
   const unit = displayUnit(quantity, units);
   const entry = text.trim() ? parseEntry(text, quantity, units) : null;
@@ -33,7 +35,9 @@ export function BandTold({ criterion, text, units, place }: BandToldProps) {
       <p>
         <output className={out || entry?.ok === false ? "told told-out" : "told"}>{entry && !entry.ok ? entry.sentence : told}</output>
         <span>
-          {bandText}, {isDefault ? <b>default, not confirmed: {from}</b> : from}
+          {bandText}
+          {withSource && ", "}
+          {withSource && (isDefault ? <b>default, not confirmed: {from}</b> : from)}
         </span>
       </p>
     </div>

@@ -5,7 +5,9 @@ import { ItemHistory } from "#app/components/gate/ItemHistory";
 import { NumberEntry } from "#app/components/gate/NumberEntry";
 import { ProofActs, ProofWays } from "#app/components/gate/ProofActs";
 import { ProveForm, type SheetResultModel } from "#app/components/gate/ProveForm";
+import { RecordWays } from "#app/components/gate/RecordWays";
 import { cx } from "#app/components/ui/cx";
+import { Fitting } from "#app/components/ui/Fitting";
 import { ItemNut } from "#app/components/ui/ItemNut";
 import { Notice } from "#app/components/ui/Notice";
 import type { ItemView } from "#app/lib/views/gate-item";
@@ -48,7 +50,7 @@ export function ItemRow({ item, reply, shared, busy }: ItemRowProps) {
       <TickEnd item={item} formId={open && askable && item.prove.ok ? formId : null} />
       <div className="item-says">
         <h2>
-          <span className="item-no fig">{item.no}</span>
+          <span className="item-key fig">{item.key}</span>
           <span className="item-words">
             {item.words}
             {item.marks.map((mark) => (
@@ -102,6 +104,14 @@ export function ItemRow({ item, reply, shared, busy }: ItemRowProps) {
             ))}
           </Notice>
         )}
+        {item.wanted && (
+          <Notice kind="plain" title="Do this again first">
+            {item.wanted}
+          </Notice>
+        )}
+        {item.first.map((first) => (
+          <Notice key={first.href} kind="plain" title={first.sentence} action={<Fitting href={first.href}>{first.label}</Fitting>} />
+        ))}
         {item.nut === "todo" && item.reasons[0] && (item.proof || item.computed || !open) && !item.prove.numberMissing && (
           <p className="item-reason">
             {item.prove.roles.length > 0 && !item.prove.ok ? item.prove.reason : item.reasons[0].sentence}{" "}
@@ -129,7 +139,8 @@ export function ItemRow({ item, reply, shared, busy }: ItemRowProps) {
             </details>
           )}
           <ProofWays item={item} commandId={shared.commandId} entry={entry} />
-          <ItemHistory proofs={item.history} name={`item ${item.no}`} />
+          <RecordWays links={item.record} about={item.key} offers={item.offersLooseEnd} />
+          <ItemHistory proofs={item.history} name={item.key} />
         </div>
       </div>
     </li>
@@ -157,7 +168,7 @@ function TickEnd({ item, formId }: { item: ItemView; formId: string | null }) {
       name="intent"
       value="prove"
       className="tick"
-      aria-label={`${item.word}: item ${item.no}, press when it is done`}
+      aria-label={`${item.word}: ${item.key}, press when it is done`}
     >
       {inside}
     </button>

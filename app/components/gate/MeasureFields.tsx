@@ -26,6 +26,7 @@ export function MeasureFields({ item, n, entry, units, label, places, criterion 
           errors={errorsOf(entry, name, row)}
           criterion={criterion}
           units={units}
+          withSource={row === 0}
         />
       ))}
     </fieldset>
@@ -40,10 +41,11 @@ interface ValueFieldProps {
   errors: string[];
   criterion: CriterionView;
   units: "si" | "us";
+  withSource: boolean;
   onText?: (text: string) => void;
 }
 
-export function ValueField({ id, name, label, typed, errors, criterion, units, onText }: ValueFieldProps) {
+export function ValueField({ id, name, label, typed, errors, criterion, units, withSource, onText }: ValueFieldProps) {
   const [text, setText] = useState(typed);
   const take = (next: string) => {
     setText(next);
@@ -52,7 +54,7 @@ export function ValueField({ id, name, label, typed, errors, criterion, units, o
   return (
     <div className="value-field">
       <NumberInput id={id} name={name} label={label} unit={criterion.unit} size={7} defaultValue={typed} errors={errors} onChange={take} />
-      <BandTold criterion={criterion} text={text} units={units} place={label} />
+      <BandTold criterion={criterion} text={text} units={units} place={label} withSource={withSource} />
     </div>
   );
 }

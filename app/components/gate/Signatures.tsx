@@ -10,6 +10,7 @@ interface SignatureModel {
   name: string;
   time: string;
   waits: boolean;
+  lapsed: boolean;
   mayWithdraw: boolean;
   hash?: string;
 }
@@ -28,7 +29,7 @@ export function Signatures({ signatures, former, until, commandId }: SignaturesP
   return (
     <section id="signatures" className="signatures" aria-labelledby="signatures-title">
       <h2 id="signatures-title">Signatures</h2>
-      <Stamp signatures={signatures.map(({ role, name, time, waits, hash }) => ({ role, name, time, waits, hash }))} />
+      <Stamp signatures={signatures.map(({ role, name, time, waits, lapsed, hash }) => ({ role, name, time, waits, lapsed, hash }))} />
       {until && <p className="signatures-until">What stands here stands until {until}, or until something of it is opened.</p>}
       {mine.map((s) => (
         <details key={s.id} className="proof-withdraw">

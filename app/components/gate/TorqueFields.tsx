@@ -38,6 +38,7 @@ export function TorqueFields(props: TorqueFieldsProps) {
           errors={errorsOf(entry, at("value"), row)}
           criterion={criterion}
           units={units}
+          withSource={row === 0}
           onText={(text) => setTorques((before) => before.map((t, i) => (i === row ? text : t)))}
         />
       ))}

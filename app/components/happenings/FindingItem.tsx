@@ -1,4 +1,5 @@
 import { TextInput } from "#app/components/forms/TextInput";
+import { Photos } from "#app/components/happenings/Photos";
 import { RowForm } from "#app/components/happenings/RowForm";
 import { SeverityFields } from "#app/components/happenings/SeverityFields";
 import { SeveritySign } from "#app/components/happenings/SeveritySign";
@@ -42,18 +43,7 @@ export function FindingItem({ row, commandId, reply }: FindingItemProps) {
           <div className="min-w-0 flex-1 basis-[420px] max-tablet:basis-full">
             <Trail steps={row.trail} />
           </div>
-          {row.photo && (
-            <a href={`/files/${row.photo}`} className="flex-none">
-              <img
-                src={`/files/${row.photo}`}
-                alt={`Finding ${row.tag}`}
-                width="150"
-                height="100"
-                loading="lazy"
-                className="h-[100px] w-[150px] object-cover"
-              />
-            </a>
-          )}
+          <Photos files={row.photos} of={`Finding ${row.tag}`} />
         </div>
         {row.told.length > 0 && (
           <ul className="mt-3 max-w-[76ch] text-note">

@@ -1,10 +1,12 @@
 import { ChoiceGroup } from "#app/components/forms/ChoiceGroup";
 import { TextInput } from "#app/components/forms/TextInput";
 import { DueLadder } from "#app/components/happenings/DueLadder";
+import { Photos } from "#app/components/happenings/Photos";
 import { RowForm } from "#app/components/happenings/RowForm";
+import { Choice } from "#app/components/ui/Choice";
 import { Notice } from "#app/components/ui/Notice";
-import type { FormReply } from "#app/lib/schemas/form-reply";
-import type { LooseEndRow } from "#app/lib/views/loose-ends";
+import type { FieldProps, FormReply } from "#app/lib/schemas/form-reply";
+import type { ClaimView, LooseEndRow } from "#app/lib/views/loose-ends";
 
 interface LooseEndItemProps {
   row: LooseEndRow;
@@ -26,6 +28,11 @@ export function LooseEndItem({ row, commandId, reply }: LooseEndItemProps) {
         <p>{row.why}</p>
         <p className="text-note text-ink-2">{row.made}</p>
         {row.restored && <p className="mt-1 font-semibold">{row.restored}</p>}
+        {row.photos.length > 0 && (
+          <div className="mt-3">
+            <Photos files={row.photos} of={`${row.tag}, ${row.title}`} />
+          </div>
+        )}
       </div>
       <div className="min-w-0 leading-snug max-wide:tablet:col-start-2">
         <DueLadder {...row.ladder} />
@@ -49,6 +56,7 @@ export function LooseEndItem({ row, commandId, reply }: LooseEndItemProps) {
         ) : (
           <PutBack row={row} shared={shared} />
         )}
+        <Claims claims={row.claims} commandId={commandId} reply={reply} />
         <RowForm
           {...shared}
           id={`${row.anchor}-accept`}
@@ -94,10 +102,46 @@ function PutBack({ row, shared }: { row: LooseEndRow; shared: Shared }) {
           </div>
         )
       }
+      fields={row.lapses ? (field) => <Undisturbed {...field("undisturbed")} label="Putting it back disturbed nothing" /> : undefined}
       act="Put back"
       note="then a second person looks"
       big
     />
+  );
+}
+
+/** What somebody says of nothing having been disturbed; a second person confirms it here. */
+export function Claims({ claims, commandId, reply }: { claims: ClaimView[]; commandId: string; reply: FormReply | undefined }) {
+  return claims.map((claim) => (
+    <RowForm
+      key={claim.opening}
+      id={claim.form}
+      intent="undisturbed"
+      also={{ opening: claim.opening, looseEnd: claim.looseEnd }}
+      about={claim.says}
+      commandId={`${commandId}-${claim.opening}`}
+      reply={reply}
+      may={claim.may}
+      says={claim.says}
+      act="Nothing was disturbed"
+      note="you looked at it yourself"
+    />
+  ));
+}
+
+/** A claim that counts once a second person has confirmed it. */
+export function Undisturbed({ id, name, defaultValue, label }: FieldProps & { label: string }) {
+  return (
+    <Choice
+      kind="checkbox"
+      id={id}
+      name={name}
+      value="on"
+      defaultChecked={defaultValue === "on"}
+      note="it counts as an opening until a second person has looked and confirms that"
+    >
+      {label}
+    </Choice>
   );
 }
 

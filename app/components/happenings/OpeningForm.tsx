@@ -9,16 +9,21 @@ import { Fitting } from "#app/components/ui/Fitting";
 import { Foot } from "#app/components/ui/Foot";
 import { count } from "#app/lib/gates/who";
 import { type FormReply, fieldsOf } from "#app/lib/schemas/form-reply";
+import type { SystemKey } from "#app/lib/template/types";
 import { type OpeningsView, type OpenShown, openWords } from "#app/lib/views/openings";
 
 interface OpeningFormProps {
   view: OpeningsView;
+  /** Systems that the address names: chosen already. */
+  chosen: SystemKey[];
+  /** Of the address, kept when the form is sent. */
+  search: string;
   commandId: string;
   reply: (FormReply & { open?: OpenShown }) | undefined;
 }
 
 /** What was opened, why and when; beside it what lapses; in the foot the look at it, then the act. */
-export function OpeningForm({ view, commandId, reply }: OpeningFormProps) {
+export function OpeningForm({ view, chosen, search, commandId, reply }: OpeningFormProps) {
   const { field, faults } = fieldsOf("open", reply);
   const open = reply?.open;
   // What was shown counts for the choice that it was shown for.
@@ -53,7 +58,7 @@ export function OpeningForm({ view, commandId, reply }: OpeningFormProps) {
           <h2 className="text-h3">Record an opening</h2>
           <FormFaults faults={faults} />
           <HiddenIds commandId={commandId} also={shown ? { seen: shown.seen } : {}} />
-          <Systems key={open?.stamp} view={view} chosen={open?.systems ?? []} errors={field("systems").errors} />
+          <Systems key={open?.stamp} view={view} chosen={open?.systems ?? chosen} errors={field("systems").errors} />
           <TextInput
             {...field("reason")}
             label="What was done, and why"
@@ -90,7 +95,7 @@ export function OpeningForm({ view, commandId, reply }: OpeningFormProps) {
           focus={open?.asked === "preview" && faults.length === 0 ? open.stamp : null}
         />
       </div>
-      <OpeningFoot view={view} shown={shown} busy={busy} />
+      <OpeningFoot view={view} search={search} shown={shown} busy={busy} />
     </>
   );
 }
@@ -138,7 +143,7 @@ function Systems({ view, chosen, errors }: { view: OpeningsView; chosen: string[
   );
 }
 
-function OpeningFoot({ view, shown, busy }: { view: OpeningsView; shown: OpenShown["chosen"]; busy: boolean }) {
+function OpeningFoot({ view, search, shown, busy }: { view: OpeningsView; search: string; shown: OpenShown["chosen"]; busy: boolean }) {
   const reason = view.may.ok ? undefined : view.may.why;
   if (!shown)
     return (
@@ -148,7 +153,7 @@ function OpeningFoot({ view, shown, busy }: { view: OpeningsView; shown: OpenSho
           size="act"
           name="intent"
           value="preview"
-          formAction="#lapses"
+          formAction={`${search}#lapses`}
           note="before it counts"
           reason={reason}
           busy={busy}

@@ -10,8 +10,8 @@ interface OpeningItemProps {
   reply: FormReply | undefined;
 }
 
-const NUT = { open: "lapsed", closed: "done", mistake: "na" } as const;
-const WORD = { open: "open", closed: "closed", mistake: "by mistake" } as const;
+const NUT = { open: "lapsed", closed: "done", mistake: "na", undisturbed: "na" } as const;
+const WORD = { open: "open", closed: "closed", mistake: "by mistake", undisturbed: "nothing disturbed" } as const;
 
 /** One opening: what, why, since when; it is closed here, and an inspector can mark it a mistake. */
 export function OpeningItem({ row, commandId, reply }: OpeningItemProps) {
@@ -20,9 +20,24 @@ export function OpeningItem({ row, commandId, reply }: OpeningItemProps) {
     <StateRow id={row.anchor} nut={NUT[row.state]} word={WORD[row.state]} open={row.state === "open"}>
       <h3 className="text-lead leading-tight">{row.title}</h3>
       <p>{row.reason}</p>
-      <p className="text-note text-ink-2">opened {row.opened}</p>
+      <p className="text-note text-ink-2">{row.opened}</p>
       {row.closed && <p className="text-note text-ink-2">closed {row.closed}</p>}
       {row.mistake && <p className="text-note text-ink-2">marked as recorded by mistake {row.mistake}</p>}
+      {row.undisturbed && (
+        <div className="mt-2 flex flex-col items-start gap-2">
+          <p className="max-w-[66ch]">{row.undisturbed.says}</p>
+          {row.undisturbed.may && (
+            <RowForm
+              {...shared}
+              id={`${row.anchor}-undisturbed`}
+              intent="undisturbed"
+              may={row.undisturbed.may}
+              act="Nothing was disturbed"
+              note="you looked at it yourself"
+            />
+          )}
+        </div>
+      )}
       {row.state === "open" && (
         <div className="mt-3">
           <RowForm
@@ -39,7 +54,7 @@ export function OpeningItem({ row, commandId, reply }: OpeningItemProps) {
           />
         </div>
       )}
-      {!row.mistake && (
+      {!row.mistake && row.state !== "undisturbed" && (
         <RowForm
           {...shared}
           id={`${row.anchor}-mistake`}

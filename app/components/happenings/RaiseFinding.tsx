@@ -1,23 +1,25 @@
 import { Form } from "react-router";
-import { FieldErrors } from "#app/components/forms/Field";
 import { FormFaults } from "#app/components/forms/FormFaults";
 import { HiddenIds } from "#app/components/forms/HiddenIds";
+import { PhotoInput } from "#app/components/forms/PhotoInput";
 import { Select } from "#app/components/forms/Select";
 import { TextInput } from "#app/components/forms/TextInput";
 import { SeverityFields } from "#app/components/happenings/SeverityFields";
 import { Fitting } from "#app/components/ui/Fitting";
 import { Notice } from "#app/components/ui/Notice";
-import { type FieldProps, type FormReply, fieldsOf } from "#app/lib/schemas/form-reply";
+import { type FormReply, fieldsOf } from "#app/lib/schemas/form-reply";
 import type { FindingsView } from "#app/lib/views/findings";
+import type { CameFrom } from "#app/lib/views/record-links";
 
 interface RaiseFindingProps {
   view: FindingsView;
+  came: CameFrom;
   commandId: string;
   reply: FormReply | undefined;
 }
 
 /** Anyone may raise a finding: words, system, how bad it is. */
-export function RaiseFinding({ view, commandId, reply }: RaiseFindingProps) {
+export function RaiseFinding({ view, came, commandId, reply }: RaiseFindingProps) {
   const { field, faults } = fieldsOf("raise", reply);
   return (
     <section aria-labelledby="new" className="border-t-2 border-ink px-4 py-5 tablet:px-6">
@@ -41,9 +43,16 @@ export function RaiseFinding({ view, commandId, reply }: RaiseFindingProps) {
           maxLength={1000}
           className="w-full"
         />
-        <Select {...field("system")} label="System" empty="choose a system" options={view.systems} className="w-full max-w-[420px]" />
+        {came.where && <p>The record will say: seen {came.where}.</p>}
+        <Select
+          {...field("system", came.systems[0])}
+          label="System"
+          empty="choose a system"
+          options={view.systems}
+          className="w-full max-w-[420px]"
+        />
         <SeverityFields label="How bad is it?" field={field} />
-        <Photo {...field("photo")} />
+        <PhotoInput {...field("photos")} label="Photos" most={6} />
         <Fitting
           size="act"
           className="tablet:min-w-96"
@@ -54,34 +63,5 @@ export function RaiseFinding({ view, commandId, reply }: RaiseFindingProps) {
         </Fitting>
       </Form>
     </section>
-  );
-}
-
-function Photo({ id, name, defaultValue, errors }: FieldProps) {
-  return (
-    <div className="field photo-field">
-      <label htmlFor={id}>
-        Photo <span className="field-optional">(may stay empty)</span>
-      </label>
-      <p className="field-hint" id={`${id}-hint`}>
-        JPEG, PNG or WebP, up to 12 MB. Place and device are taken out of it.
-      </p>
-      <input
-        id={id}
-        name={name}
-        type="file"
-        accept="image/jpeg,image/png,image/webp"
-        capture="environment"
-        aria-describedby={`${id}-hint${errors?.length ? ` ${id}-error` : ""}`}
-        aria-invalid={Boolean(errors?.length) || undefined}
-      />
-      {defaultValue && (
-        <>
-          <input type="hidden" name={name} value={defaultValue} />
-          <p>The photo is here already.</p>
-        </>
-      )}
-      <FieldErrors id={`${id}-error`} errors={errors} />
-    </div>
   );
 }

@@ -81,7 +81,7 @@ export function Strip(props: StripProps) {
           <p>
             {person && (
               <b>
-                {person}
+                <Anchor href="/account">{person}</Anchor>
                 {role && `, ${role}`}
               </b>
             )}

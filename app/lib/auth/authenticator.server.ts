@@ -49,7 +49,10 @@ async function signIn(
   const right = person ? await matches(password, person.passwordHash) : await matchesNobody(password);
   if (!person || !right) {
     log.warn({ user: person?.userId, trace: currentRequest()?.traceId }, "a sign-in was refused");
-    throw new SignInRefused("This e-mail address and password do not belong together. Check both, or ask for a new password.", 400);
+    throw new SignInRefused(
+      "This e-mail address and password do not belong together. Check both. If the password is lost, ask a lead of your install, or whoever administers this instance, for a new one.",
+      400,
+    );
   }
   const cookie = await write(async (tx) => {
     await succeeded(tx, "account", email);

@@ -88,7 +88,9 @@ interface PumpResult {
   figures: SheetFigure[];
 }
 
-function judgePump({ name, catches }: Inputs["pumps"][number], inputs: Inputs, takeoff: number): PumpResult {
+function judgePump({ name: typed, catches }: Inputs["pumps"][number], inputs: Inputs, takeoff: number): PumpResult {
+  // It begins sentences and lines.
+  const name = `${typed.charAt(0).toUpperCase()}${typed.slice(1)}`;
   const volumeOf = (row: Inputs["pumps"][number]["catches"][number]) => row.volume ?? weighedVolume(row.mass ?? 0, inputs.density);
   const flows = catches.map((row) => catchFlow({ volume: volumeOf(row), seconds: row.seconds }));
   const counted = agreeing(flows);

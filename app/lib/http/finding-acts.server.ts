@@ -1,5 +1,5 @@
 // The acts of the findings' page: raised, sharpened or lowered, fixed, closed or sent back.
-import { actsOf, type FormActed, formAct } from "#app/lib/http/form-acts.server";
+import { actsOf, type FormActed, formAct, photosIn } from "#app/lib/http/form-acts.server";
 import type { InstallContext } from "#app/lib/http/install.server";
 import { replyOf } from "#app/lib/schemas/form-reply";
 import { closeFindingForm, fixFindingForm, gradeFindingForm, raiseFindingForm, rejectFixForm } from "#app/lib/schemas/happening-forms";
@@ -7,20 +7,29 @@ import { raiseFinding } from "#app/lib/services/raise-finding.server";
 import { closeFinding, fixFinding, gradeFinding, rejectFix } from "#app/lib/services/settle-finding.server";
 import { anchorOfFinding } from "#app/lib/views/findings";
 
-/** Null where the form is none of this page's. @param photoFault why the photo that was sent could not be taken. */
-export async function actOnFindings(install: InstallContext, sent: FormData, photoFault: string | null): Promise<FormActed | null> {
+/**
+ * Null where the form is none of this page's. @param photoFault why a photo that was sent could not be taken.
+ * @param where where a new one was seen, in words that join its own; null = not said.
+ */
+export async function actOnFindings(
+  install: InstallContext,
+  sent: FormData,
+  photoFault: string | null,
+  where: string | null,
+): Promise<FormActed | null> {
   const act = actsOf(install);
   const row = anchorOfFinding(String(sent.get("finding") ?? ""));
   const anchor = ({ finding }: { finding: string }) => anchorOfFinding(finding);
   switch (sent.get("intent")) {
     case "raise": {
-      if (photoFault) return { done: false, reply: replyOf("raise", sent, { photo: [photoFault] }), status: 422 };
-      const photo = String(sent.get("photo") ?? "") || null;
+      const [photo = null, ...morePhotos] = photosIn(sent, "photos");
+      if (photoFault) return { done: false, reply: replyOf("raise", sent, { photos: [photoFault] }), status: 422 };
       return formAct({
         sent,
         form: "raise",
         schema: raiseFindingForm(install.me.units),
-        serve: ({ commandId, ...input }) => raiseFinding(act(commandId), { ...input, photo }),
+        serve: ({ commandId, words, ...input }) =>
+          raiseFinding(act(commandId), { ...input, words: where === null ? words : `${words} (seen ${where})`, photo, morePhotos }),
         anchor,
       });
     }

@@ -26,6 +26,13 @@ export async function formAct<S extends z.ZodType, T>({ sent, form, schema, serv
   return { done: false, reply: replyOf(form, sent, { "": [outcome.message] }), status: outcome.status };
 }
 
+/** Ids of the photos that a form brought or still has; they stand in it as one text from then on, so that they come back with it. */
+export function photosIn(sent: FormData, field: string): string[] {
+  const ids = [...new Set(sent.getAll(field).flatMap((v) => (typeof v === "string" ? v.split(",") : [])))].filter(Boolean);
+  sent.set(field, ids.join(","));
+  return ids;
+}
+
 /** Acts in this person's name on this install, by the number of the form. */
 export const actsOf =
   ({ installId, me }: InstallContext) =>

@@ -4,8 +4,9 @@ import { actsOf, formAct } from "#app/lib/http/form-acts.server";
 import type { InstallContext } from "#app/lib/http/install.server";
 import { newId } from "#app/lib/ids";
 import { type FormReply, replyOf } from "#app/lib/schemas/form-reply";
-import { closeOpeningForm, markMistakeForm, openChoice, openForm } from "#app/lib/schemas/happening-forms";
+import { closeOpeningForm, markMistakeForm, openChoice, openForm, openingForm } from "#app/lib/schemas/happening-forms";
 import { closeOpening } from "#app/lib/services/close-opening.server";
+import { confirmUndisturbed } from "#app/lib/services/confirm-undisturbed.server";
 import { markMistake } from "#app/lib/services/mark-mistake.server";
 import { openSystem } from "#app/lib/services/open-system.server";
 import { OPENING_PRESETS } from "#app/lib/template/systems";
@@ -15,7 +16,8 @@ import { lapsesByOpening } from "#app/lib/views/what-lapses";
 
 /** The reply to the form of a new opening also carries what was chosen and what that makes lapse. */
 export type OpeningReply = FormReply & { open?: OpenShown };
-export type OpeningActed = { done: true; anchor: string } | { done: false; reply: OpeningReply; status: number };
+/** `opened`: a new opening was recorded. */
+export type OpeningActed = { done: true; anchor: string; opened?: true } | { done: false; reply: OpeningReply; status: number };
 
 /** Null where the form is none of this page's. */
 export async function actOnOpenings(install: InstallContext, sent: FormData): Promise<OpeningActed | null> {
@@ -33,6 +35,14 @@ export async function actOnOpenings(install: InstallContext, sent: FormData): Pr
         form: `${anchorOfOpening(id)}-close`,
         schema: closeOpeningForm,
         serve: ({ commandId, ...input }) => closeOpening(act(commandId), input),
+        anchor: (v) => anchorOfOpening(v.opening),
+      });
+    case "undisturbed":
+      return formAct({
+        sent,
+        form: `${anchorOfOpening(id)}-undisturbed`,
+        schema: openingForm,
+        serve: ({ commandId, opening }) => confirmUndisturbed(act(commandId), { opening }),
         anchor: (v) => anchorOfOpening(v.opening),
       });
     case "mistake":
@@ -89,7 +99,7 @@ async function open(install: InstallContext, sent: FormData): Promise<OpeningAct
   if (sent.get("seen") !== seenOf(e, input.systems, input.closed))
     return { done: false, reply: shown(install, sent, { "": [NOT_SHOWN] }, "preview"), status: 409 };
   const outcome = await openSystem(actsOf(install)(commandId), input);
-  if (outcome.ok) return { done: true, anchor: anchorOfOpening(outcome.value.opening) };
+  if (outcome.ok) return { done: true, anchor: anchorOfOpening(outcome.value.opening), opened: true };
   return { done: false, reply: shown(install, sent, { "": [outcome.message] }, "preview"), status: outcome.status };
 }
 const NOT_SHOWN = "What you chose, or the GO in force, has changed since this was shown. Look at what lapses now, then confirm.";

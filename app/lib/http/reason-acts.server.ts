@@ -18,10 +18,10 @@ import { runView } from "#app/lib/views/run";
 export function reasonSheet({ e, me }: InstallContext, run: string, may: (e: Evaluation, a: { run: string; member: string }) => Verdict) {
   const view = runView(e, run, me, "");
   if (!view) throw new Response("Not found", { status: 404 });
-  const { id, label, when, ladder, gates, stops, href } = view;
+  const { id, label, state, when, ladder, gates, stops, href } = view;
   const verdict = may(e, { run, member: me.id });
   return {
-    run: { id, label, when, ladder, gates, stops, href },
+    run: { id, label, state, when, ladder, gates, stops, href },
     why: verdict.ok ? null : (verdict.blockers[0]?.sentence ?? ""),
     readers: mailReaders(e, run),
     commandId: newId(),

@@ -1,12 +1,16 @@
 /** The forms of openings, loose ends and findings as a page sends them: text in, the services' input out. Speeds are typed in rpm. Pure. */
 import { z } from "zod";
 import { instantOfLocal } from "#app/lib/gates/local-time";
-import { when } from "#app/lib/gates/when";
 import { commandIdSchema, idSchema, noteSchema, systemSchema, textSchema } from "#app/lib/schemas/act";
 import { acceptLooseEndSchema, makeLooseEndSchema } from "#app/lib/schemas/happenings";
 import { parseEntry, type UnitSystem } from "#app/lib/units/display";
 
 const commandId = commandIdSchema;
+/** A box on a page: sent only when it is ticked. */
+const ticked = z
+  .literal("on")
+  .optional()
+  .transform((sent) => sent === "on");
 const words = (message: string) => textSchema(message, 1000);
 
 // ---------------------------------------------------------------- openings
@@ -16,32 +20,28 @@ export const openChoice = z.object({
   closed: z.enum(["open", "closed"], "Say whether it is still open.").transform((state) => state === "closed"),
 });
 
-/** @param now the typed time is at most this; it is written into the reason, for an opening counts when it is recorded. */
+/** @param now the typed time is at most this; an opening counts when it is recorded, whatever is typed. */
 export const openForm = (timeZone: string, now: number) =>
-  openChoice
-    .extend({
-      commandId,
-      reason: words("Say what was done and why, in a few words."),
-      happened: z
-        .string()
-        .default("")
-        .transform((text, context) => {
-          if (text.trim() === "") return null;
-          const [date = "", time = ""] = text.trim().split("T");
-          const read = instantOfLocal(date, time, timeZone);
-          if (read.ok && read.at <= now) return read.at;
-          context.addIssue({
-            code: "custom",
-            message: read.ok ? "That time has not come yet. Enter when it happened, or leave it empty." : read.sentence,
-          });
-          return z.NEVER;
-        }),
-    })
-    .transform(({ reason, happened, ...rest }) => ({
-      ...rest,
-      reason: happened === null ? reason : `${reason} (happened ${when(happened, timeZone)}, entered later)`,
-    }));
+  openChoice.extend({
+    commandId,
+    reason: words("Say what was done and why, in a few words."),
+    happened: z
+      .string()
+      .default("")
+      .transform((text, context) => {
+        if (text.trim() === "") return null;
+        const [date = "", time = ""] = text.trim().split("T");
+        const read = instantOfLocal(date, time, timeZone);
+        if (read.ok && read.at <= now) return read.at;
+        context.addIssue({
+          code: "custom",
+          message: read.ok ? "That time has not come yet. Enter when it happened, or leave it empty." : read.sentence,
+        });
+        return z.NEVER;
+      }),
+  });
 
+export const openingForm = z.object({ commandId, opening: idSchema });
 export const closeOpeningForm = z.object({ commandId, opening: idSchema, note: noteSchema });
 export const markMistakeForm = z.object({ commandId, opening: idSchema, reason: words("Say what the mistake was, in a few words.") });
 
@@ -74,7 +74,9 @@ export const makeLooseEndForm = z.object({
     .string()
     .default("")
     .transform((id) => id || null),
+  undisturbed: ticked,
 });
+export const restoreForm = z.object({ commandId, looseEnd: idSchema, undisturbed: ticked });
 export const looseEndForm = z.object({ commandId, looseEnd: idSchema });
 export const acceptLooseEndForm = z.object({
   commandId,

@@ -15,8 +15,12 @@ const timeZoneSchema = z.string("Choose a time zone.").refine((zone) => {
   }
 }, "Choose a time zone.");
 
+const registrationSchema = textSchema("Enter the registration, as painted on the side.", LONGEST_REGISTRATION, 2)
+  .regex(/^[a-z0-9]+(-[a-z0-9]+)*$/i, "Letters and digits, with a hyphen between them if it has one: nothing else is painted on the side.")
+  .toUpperCase();
+
 export const createInstallSchema = z.object({
-  registration: textSchema("Enter the registration, as painted on the side.", LONGEST_REGISTRATION, 2).toUpperCase(),
+  registration: registrationSchema,
   name: textSchema("Give the install a name.", 80, 2),
   timeZone: timeZoneSchema,
   traits: traitsSchema,

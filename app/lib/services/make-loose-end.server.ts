@@ -4,6 +4,7 @@
 import { looseEnds } from "#app/db/schema/loose-ends";
 import { itemOf } from "#app/lib/gates/facts";
 import { mayRaise } from "#app/lib/gates/happening-verdicts";
+import { quoted } from "#app/lib/gates/steps";
 import type { MakeLooseEnd } from "#app/lib/schemas/happenings";
 import { writeOpening } from "#app/lib/services/open-system.server";
 import { done, invalid, notFound, type Outcome, refusalOf } from "#app/lib/services/outcome";
@@ -20,7 +21,10 @@ export function makeLooseEnd(act: Act, input: MakeLooseEnd): Promise<Outcome<{ l
       return notFound("The gate or rung it is due before");
     const asking = askedBy === null ? null : itemOf(d.e.facts, askedBy);
     if (asking === undefined) return notFound("That item");
-    if (asking && asking.offersLooseEnd?.system !== system) return invalid(`${asking.key} does not ask for a loose end of this system.`);
+    if (asking && asking.offersLooseEnd?.system !== system)
+      return invalid(
+        `${asking.key} ${quoted(asking)}: this item has no loose end of that kind. Make it on the Loose ends page, without the item.`,
+      );
     const missing = await photosMissing(d, photos, "write the loose end down");
     if (missing) return missing;
     const as = roleOf(d.member, "builder", "inspector");

@@ -5,7 +5,7 @@
 import { BUILD_UP, LEAK_CHECK } from "#app/lib/template/build-up";
 import type { RungRow, StepRow } from "#app/lib/template/build-up-steps";
 import { CARD_BEGIN, cardAbort, cardCalls, cardEnd } from "#app/lib/template/card-texts";
-import { applies } from "#app/lib/template/condition";
+import { applies, whyNot } from "#app/lib/template/condition";
 import { crewRule } from "#app/lib/template/positions";
 import { type TraitWord, traitWords } from "#app/lib/template/trait-words";
 import type { CardStep, RungDef, Traits, ValueDef, ValueKey } from "#app/lib/template/types";
@@ -105,6 +105,14 @@ function toRung(row: RungRow, install: Install): RungDef {
 export function rungsOf(traits: Traits, values: Values = {}): RungDef[] {
   const install = installOf(traits, values);
   return BUILD_UP.filter((row) => applies(row.when, install.words)).map((row) => toRung(row, install));
+}
+
+/** Rungs of the template that the traits leave out, and why: "no propeller whose pitch moves". */
+export function rungsLeftOut(traits: Traits): { key: string; name: string; because: string }[] {
+  const words = traitWords(traits);
+  return BUILD_UP.flatMap(({ key, name, when }) =>
+    when === undefined || applies(when, words) ? [] : [{ key, name, because: whyNot(when, words) }],
+  );
 }
 
 /** The leak check, which a lead adds at the end where the release asks for it. */

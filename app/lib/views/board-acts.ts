@@ -11,6 +11,7 @@ import { count } from "#app/lib/gates/who";
 import { isComputed } from "#app/lib/gates/work-facts";
 import type { Viewer } from "#app/lib/views/board";
 import { crewActs } from "#app/lib/views/board-crew";
+import { openSystems } from "#app/lib/views/gate-first";
 import { itemsWords } from "#app/lib/views/items-words";
 import { boardOf, gateOf, runOf } from "#app/lib/views/places";
 
@@ -106,6 +107,8 @@ function workActs(e: Evaluation, me: Viewer): ActView[] {
     if (!gate || !next) return [];
     const name = e.facts.gates.get(id)?.name ?? "the gate";
     const label = gate.state === "lapsed" ? `Do ${name} again` : gate.done ? `Carry on with ${name}` : `Begin ${name}`;
+    const [closing] = openSystems(e, next);
+    if (closing) return [{ label: closing.act, note: `then ${next.key} ${next.words}`, href: closing.href }];
     return [{ label, note: `Next: ${next.key} ${next.words}`, href: gateOf(install, next.gate, next.id) }];
   });
 }

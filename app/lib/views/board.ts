@@ -55,7 +55,7 @@ export interface Viewer {
 export function boardView(e: Evaluation, me: Viewer): BoardView {
   const { next, release } = e.result;
   const blockers = next ? next.blockers : release.blockers;
-  const stops = blockers.map((b, i) => stopLine(e, b, i + 1));
+  const stops = blockers.map((b, i) => stopLine(e, b, i + 1, me.id));
   const onlyCrew = me.roles.every((r) => r === "crew");
   return {
     answer: answerOf(e),
@@ -152,13 +152,13 @@ function waitWords(e: Evaluation, next: RunResult): string | null {
   return `Then ${names.join(", then ")}.`;
 }
 
-function stopLine(e: Evaluation, b: Blocker, n: number): StopLine {
+function stopLine(e: Evaluation, b: Blocker, n: number, me: string): StopLine {
   const place = placeOf(e.snapshot, b.link);
   return {
     n,
     title: b.title,
     sentence: b.sentence,
-    who: whoClears(e.snapshot, b.owner),
+    who: whoClears(e.snapshot, b.owner, me),
     place,
     linkLabel: `${place.label}: ${b.title}`,
   };

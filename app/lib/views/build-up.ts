@@ -6,9 +6,10 @@ import { mayPlan } from "#app/lib/gates/plan-verdicts";
 import type { RunResult } from "#app/lib/gates/result";
 import type { Rung } from "#app/lib/gates/snapshot";
 import { count } from "#app/lib/gates/who";
+import { rungsLeftOut } from "#app/lib/template/runs";
 import { type LineRunView, lineOf } from "#app/lib/views/board-line";
 import { boardOf, runOf } from "#app/lib/views/places";
-import { type CardView, cardView, dayWhen, gatesShare } from "#app/lib/views/run-words";
+import { type CardView, cardView, dayWhen, gatesShare, lowerFirst } from "#app/lib/views/run-words";
 
 export interface RungView {
   key: string;
@@ -32,6 +33,8 @@ export interface BuildUpView {
   gates: number;
   ladder: LineRunView[];
   rungs: RungView[];
+  /** "Run 4, propeller, is not on this ladder: ...": why the numbers skip one. */
+  leftOut: string[];
 }
 
 export function buildUpView(e: Evaluation, member: string): BuildUpView {
@@ -46,6 +49,9 @@ export function buildUpView(e: Evaluation, member: string): BuildUpView {
     gates: gatesShare(e),
     ladder: lineOf(e, new Map()).runs,
     rungs: rungs.map((rung) => rungView(e, rung, member)),
+    leftOut: rungsLeftOut(e.snapshot.traits)
+      .filter(({ key }) => !rungs.some((r) => r.key === key))
+      .map(({ key, name, because }) => `Run ${key}, ${lowerFirst(name)}, is not on this ladder: ${because}.`),
   };
 }
 

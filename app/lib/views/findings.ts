@@ -17,7 +17,7 @@ export const SEVERITIES: Severity[] = ["grounding", "limiting", "watch"];
 
 /** What the records beside the snapshot tell of one finding. */
 export interface FindingTold {
-  photo: string | null;
+  photos: string[];
   severity: Severity;
   cap: number | null;
   events: {
@@ -50,7 +50,7 @@ export interface FindingRow {
   state: "open" | "fixed" | "closed";
   since: string;
   trail: TrailStep[];
-  photo: string | null;
+  photos: string[];
   /** What was said and done since it was raised, oldest first. */
   told: string[];
   fix: May;
@@ -137,7 +137,7 @@ function rowOf(e: Evaluation, f: Finding, tag: string, me: Viewer, told: Finding
       step(e, "fixed", f.fixed, "A builder says what was done"),
       step(e, "closed", f.closed ?? closing ?? null, f.fixed ? waitsFor(e, f.fixed.by) : "An inspector looks"),
     ],
-    photo: told?.photo ?? null,
+    photos: told?.photos ?? [],
     told: (told?.events ?? []).map((x) => eventWords(e, x)),
     fix: mayOf(mayFix(e, { finding: f.id, member: me.id })),
     close: mayOf(mayClose(e, { finding: f.id, member: me.id })),

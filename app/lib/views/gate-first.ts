@@ -67,7 +67,7 @@ function faultWords(e: Evaluation, fault: StepFault): string {
 }
 
 /** Each opening once, for a proof given while it is open does not count. What looks back on a run, and steps, do not mind openings. */
-function openSystems(e: Evaluation, item: Item): First[] {
+export function openSystems(e: Evaluation, item: Item): First[] {
   if (item.step || e.facts.gates.get(item.gate)?.lookBack) return [];
   const open = new Map(item.systems.flatMap((s) => e.facts.openings.get(s)?.open ?? []).map((o) => [o.id, o]));
   return [...open.values()].map((o) => {

@@ -16,6 +16,7 @@ import { type First, firstOf } from "#app/lib/views/gate-first";
 import { type PartView, partViews } from "#app/lib/views/gate-parts";
 import { type ProofView, proofView } from "#app/lib/views/gate-proof";
 import { anchorOf, listOf, whoClears } from "#app/lib/views/places";
+import { type RecordLinks, recordLinks } from "#app/lib/views/record-links";
 import { nutOf } from "#app/lib/views/shown-states";
 
 export interface Ask {
@@ -58,6 +59,10 @@ export interface ItemView {
   keep: Ask | null;
   withdraw: Ask | null;
   enterNumber: Ask;
+  /** Where what happens to this item is written down. */
+  record: RecordLinks;
+  /** It asks for a loose end. */
+  offersLooseEnd: boolean;
 }
 
 export interface Reader {
@@ -108,7 +113,9 @@ export function itemView(e: Evaluation, item: Item, me: Reader, wantedBy: string
     tickOnly: parts.every((p) => p.kind === "tick" && !p.missing),
     open,
     first,
-    wanted: wanted ? `${listOf(wantedBy)} ${wantedBy.length === 1 ? "rests" : "rest"} on it. Do this again first, then ${listOf(wantedBy)}.` : null,
+    wanted: wanted
+      ? `${listOf(wantedBy)} ${wantedBy.length === 1 ? "rests" : "rest"} on it. Do this again first, then ${listOf(wantedBy)}.`
+      : null,
     prove,
     failed: ask(mayProve(e, { item: item.id, member: me.id, as: me.roles[0] ?? "crew", state: "failed", late: false })),
     na: ask(mayProve(e, { item: item.id, member: me.id, as: prove.roles[0] ?? "builder", state: "na", late: false })),
@@ -118,6 +125,8 @@ export function itemView(e: Evaluation, item: Item, me: Reader, wantedBy: string
     keep: result.state === "lapsed" && proof && me.roles.includes("inspector") ? ask(mayKeep(e, { proof: proof.id, member: me.id })) : null,
     withdraw: proof ? ask(mayWithdrawProof(e, { proof: proof.id, member: me.id })) : null,
     enterNumber: ask(mayEnterNumber(e, { item: item.id, member: me.id })),
+    record: recordLinks(e, { kind: "item", id: item.id }),
+    offersLooseEnd: item.offersLooseEnd !== null,
   };
 }
 

@@ -148,14 +148,22 @@ export function criterionView(e: Evaluation, criterion: Criterion, units: UnitSy
     unit,
     band,
     bandText: formatBand(criterion.quantity, band, units),
-    from: confirmed
-      ? (criterion.source ?? limits.map((key) => `${values.get(key)?.label}: ${values.get(key)?.source}`).join(", "))
-      : basisWords(criterion.basis),
+    from: confirmed ? (criterion.source ?? limitsFrom(e, limits)) : basisWords(criterion.basis),
     isDefault: band !== null && !confirmed,
     limitsMissing: limits.filter((key) => values.get(key)?.value == null).map((key) => values.get(key)?.label ?? key),
     enterable: limits.length === 0,
     typed: { min: typed(criterion.band?.min), max: typed(criterion.band?.max) },
   };
+}
+
+/** "Oil pressure, least; oil pressure, most: manual p. 3": limits that were read at one place name it once. */
+function limitsFrom(e: Evaluation, limits: ValueKey[]): string {
+  const read = new Map<string, string[]>();
+  for (const key of limits) {
+    const { label, source } = e.facts.values.get(key) ?? { label: key, source: null };
+    read.set(source ?? "", [...(read.get(source ?? "") ?? []), label]);
+  }
+  return [...read].map(([source, labels]) => `${labels.join("; ")}: ${source}`).join("; ");
 }
 
 type TallyPart = Extract<Part, { kind: "tally" }>;

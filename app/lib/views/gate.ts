@@ -7,10 +7,12 @@ import type { GateResult } from "#app/lib/gates/result";
 import { maySign, mayWithdrawSignature } from "#app/lib/gates/signing-verdicts";
 import type { Gate, Signature, SigningRole } from "#app/lib/gates/snapshot";
 import { count } from "#app/lib/gates/who";
+import { type AgainView, againOf } from "#app/lib/views/gate-again";
 import { wantedFirst } from "#app/lib/views/gate-first";
 import { type ItemView, itemView, type Reader } from "#app/lib/views/gate-item";
 import { itemsWords } from "#app/lib/views/items-words";
 import { anyOf, boardOf, gateOf, nameIn, type Place, placeOf, whoClears } from "#app/lib/views/places";
+import { type RecordLinks, recordLinks } from "#app/lib/views/record-links";
 import { valveOf } from "#app/lib/views/shown-states";
 
 export interface FeedView {
@@ -50,7 +52,11 @@ export interface GateView {
   feeds: FeedView[];
   onward: Place[];
   waits: { title: string; sentence: string; place: Place }[];
+  /** What has lapsed here and why; null = nothing. */
+  again: AgainView | null;
   items: ItemView[];
+  /** Where an opening, a loose end or a finding of this gate is written down. */
+  record: RecordLinks;
   signatures: SignatureView[];
   former: string[];
   foot: FootView;
@@ -77,7 +83,9 @@ export function gateView(e: Evaluation, gateId: string, me: Reader): GateView | 
     waits: result.blockers
       .filter((b) => ["gate-waits", "grounding", "loose-end"].includes(b.code))
       .map((b) => ({ title: b.title, sentence: b.sentence, place: placeOf(e.snapshot, b.link) })),
+    again: againOf(e, gateId),
     items,
+    record: recordLinks(e, { kind: "gate", id: gateId }),
     ...signaturesView(e, gate, result, me),
     foot: footOf(e, gate, result, items, me),
   };

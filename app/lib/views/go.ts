@@ -54,7 +54,7 @@ export function goView(e: Evaluation, runId: string, me: { id: string }): GoView
     ],
     version: run.plan.version,
     readers: mailReaders(e, runId),
-    stops: verdict.ok ? [] : verdict.blockers.map((b, i) => stopView(e, b, i + 1)),
+    stops: verdict.ok ? [] : verdict.blockers.map((b, i) => stopView(e, b, i + 1, me.id)),
     why: verdict.ok
       ? null
       : verdict.blockers.length > 1

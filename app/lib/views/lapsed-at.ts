@@ -31,7 +31,9 @@ function itemSince(e: Evaluation, item: Item, gate: Gate): Instant | null {
       return proof ? validUntil(e.facts, item, gate, proof) : null;
     case "system-open":
     case "system-opened-since": {
-      const after = e.facts.snapshot.openings.filter((o) => disturbs(o) && proof && o.opened > proof.counts && o.systems.some((s) => item.systems.includes(s)));
+      const after = e.facts.snapshot.openings.filter(
+        (o) => disturbs(o) && proof && o.opened > proof.counts && o.systems.some((s) => item.systems.includes(s)),
+      );
       return after.length ? Math.min(...after.map((o) => o.opened)) : null;
     }
     default:

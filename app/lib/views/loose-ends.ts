@@ -3,11 +3,12 @@
 import { acceptedFor } from "#app/lib/gates/computed";
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import { allItems } from "#app/lib/gates/facts";
-import { mayAcceptLooseEnd, mayConfirmRestored, mayRaise, mayRestore } from "#app/lib/gates/happening-verdicts";
+import { mayAcceptLooseEnd, mayConfirmRestored, mayConfirmUndisturbed, mayRaise, mayRestore } from "#app/lib/gates/happening-verdicts";
 import type { LooseEnd, Rung } from "#app/lib/gates/snapshot";
 import { count } from "#app/lib/gates/who";
 import type { Viewer } from "#app/lib/views/board";
 import { type May, mayOf } from "#app/lib/views/may";
+import { anchorOfOpening } from "#app/lib/views/openings";
 import { nameIn, rowAnchor } from "#app/lib/views/places";
 import { lowerFirst, upperFirst } from "#app/lib/views/run-words";
 import { type SystemChoice, systemsOn, systemWords } from "#app/lib/views/systems";
@@ -21,6 +22,7 @@ export interface LooseEndRow {
   /** "4 × injector plugs off" */
   title: string;
   why: string;
+  photos: string[];
   /** System, when and who. */
   made: string;
   due: string;
@@ -29,11 +31,22 @@ export interface LooseEndRow {
   ladder: DueLadderView;
   /** "Put back 3 Dec 14:10 CET by ...; a second person looks." */
   restored: string | null;
+  /** Said of nothing having been disturbed, and not confirmed yet. */
+  claims: ClaimView[];
   restore: May;
   confirm: May;
   accept: { may: May; rungs: { value: string; label: string }[] };
   /** What putting it back makes lapse; null where an item asked for it, for then it is no opening. */
   lapses: { hold: string | null; says: string } | null;
+}
+
+/** Its opening counts until a second person has confirmed that nothing was disturbed. */
+export interface ClaimView {
+  opening: string;
+  looseEnd: string;
+  form: string;
+  says: string;
+  may: May;
 }
 
 export interface DueLadderView {
@@ -47,7 +60,7 @@ export interface LooseEndsView {
   state: string;
   fill: number;
   ends: LooseEndRow[];
-  past: { id: string; anchor: string; says: string }[];
+  past: { id: string; anchor: string; says: string; claims: ClaimView[] }[];
   systems: SystemChoice[];
   due: { value: string; label: string }[];
   asking: { value: string; label: string }[];
@@ -61,7 +74,7 @@ export interface MakingShown {
   says: string;
 }
 
-export type LooseEndDetails = Record<string, { count: number; why: string; askedBy: string | null }>;
+export type LooseEndDetails = Record<string, { count: number; why: string; askedBy: string | null; photos: string[]; openings: string[] }>;
 
 export const anchorOfLooseEnd = (id: string): string => rowAnchor("loose-ends", id);
 
@@ -81,7 +94,12 @@ export function looseEndsView(e: Evaluation, me: Viewer, details: LooseEndDetail
         : "none so far",
     fill: open.length ? 0.06 : 1,
     ends: open.map(({ l, tag, blocks }) => rowOf(e, l, tag, blocks, me, details[l.id])),
-    past: past.map(({ l, tag }) => ({ id: l.id, anchor: anchorOfLooseEnd(l.id), says: pastWords(e, l, tag, details[l.id]?.count ?? 1) })),
+    past: past.map(({ l, tag }) => ({
+      id: l.id,
+      anchor: anchorOfLooseEnd(l.id),
+      says: pastWords(e, l, tag, details[l.id]?.count ?? 1),
+      claims: claimsOf(e, l, me, details[l.id]),
+    })),
     systems: systemsOn(e),
     due: dueChoices(e),
     asking: allItems(e.facts).flatMap((i) =>
@@ -137,12 +155,14 @@ function rowOf(
     tag,
     title: `${n} × ${lowerFirst(l.what)}`,
     why: detail?.why ?? "",
+    photos: detail?.photos ?? [],
     made: `${systemWords([l.system])}; ${by(l)}`,
     due: dueWords(e, l),
     stops: stopsWords(e, blocks),
     accepted: acceptedWords(e, l),
     ladder: ladderOf(e, l),
     restored: l.restored && `Put back ${by(l.restored)}. It counts once a second person has looked.`,
+    claims: claimsOf(e, l, me, detail),
     restore: mayOf(mayRestore(e, { looseEnd: l.id, member: me.id })),
     confirm: mayOf(mayConfirmRestored(e, { looseEnd: l.id, member: me.id })),
     accept: {
@@ -151,6 +171,24 @@ function rowOf(
     },
     lapses: opens && { hold: holdWords(opens), says: lapseWords(opens) },
   };
+}
+
+/** The first of its openings was its making, the second its restoring. */
+function claimsOf(e: Evaluation, l: LooseEnd, me: Viewer, detail: LooseEndDetails[string] | undefined): ClaimView[] {
+  return (detail?.openings ?? []).flatMap((id, n): ClaimView[] => {
+    const o = e.facts.snapshot.openings.find((x) => x.id === id);
+    if (!o?.undisturbed || o.undisturbed.confirmed) return [];
+    const when = n === 0 ? "taking it off" : "putting it back";
+    return [
+      {
+        opening: o.id,
+        looseEnd: l.id,
+        form: `${anchorOfOpening(o.id)}-undisturbed`,
+        says: `${nameIn(e.snapshot, o.by)} says that ${when} disturbed nothing. It counts as an opening until a second person has looked and confirms that.`,
+        may: mayOf(mayConfirmUndisturbed(e, { opening: o.id, member: me.id })),
+      },
+    ];
+  });
 }
 
 const gateName = (e: Evaluation, id: string): string => e.snapshot.gates.find((g) => g.id === id)?.name ?? "a gate";

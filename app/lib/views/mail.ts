@@ -62,7 +62,7 @@ export function mailView(rows: MailRow[], now: number, timeZone: string, again: 
     groups.set(key, group);
   }
   return {
-    state: parts.filter(Boolean).join(", ") || "nothing was sent yet",
+    state: parts.filter(Boolean).join(", ") || "nothing has been sent yet",
     sent: rows.length ? sent / rows.length : 0,
     lost,
     groups: [...groups.values()],

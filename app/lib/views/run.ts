@@ -99,7 +99,7 @@ export function runView(e: Evaluation, runId: string, me: Viewer, place: string)
     notice: noticeOf(e, run, judged),
     clearance: clearanceView(e, judged.clearance),
     card: run.plan ? cardView(run.plan.card, run.plan.version) : null,
-    stops: stopViews(e, judged),
+    stops: stopViews(e, judged, me.id),
     roll: rollView(e, run, me.id),
     mine: mineView(e, run, me.id),
     wind: windView(e, run),
@@ -121,17 +121,17 @@ export function runView(e: Evaluation, runId: string, me: Viewer, place: string)
 }
 
 /** What stops it, or what is left after it ended. */
-export function stopViews(e: Evaluation, judged: RunResult): StopView[] {
+export function stopViews(e: Evaluation, judged: RunResult, me: string): StopView[] {
   const list =
     judged.state === "ended" ? judged.reviewBlockers : ["planned", "held", "called"].includes(judged.state) ? judged.blockers : [];
-  return list.map((b, i) => stopView(e, b, i + 1));
+  return list.map((b, i) => stopView(e, b, i + 1, me));
 }
 
-export const stopView = (e: Evaluation, b: Blocker, n: number): StopView => ({
+export const stopView = (e: Evaluation, b: Blocker, n: number, me: string): StopView => ({
   n,
   title: b.title,
   sentence: b.sentence,
-  who: whoClears(e.snapshot, b.owner),
+  who: whoClears(e.snapshot, b.owner, me),
   place: placeOf(e.snapshot, b.link),
 });
 

@@ -10,6 +10,7 @@ import { meaningOf } from "#app/lib/record/shown";
 import type { UnitSystem } from "#app/lib/units/display";
 import type { Viewer } from "#app/lib/views/board";
 import { proofView } from "#app/lib/views/gate-proof";
+import { itemsWords, workedOut } from "#app/lib/views/items-words";
 import { anyOf, gateOf, nameIn, placeOf, whoClears } from "#app/lib/views/places";
 import { valveOf } from "#app/lib/views/shown-states";
 
@@ -26,6 +27,8 @@ export interface SheetView {
   /** "did this work or saw it done: 10 items of Oil prime, last on 4 Dec ..." */
   sentence: string;
   items: { key: string; words: string; said: string; who: string }[];
+  /** Over the list: "7 items, and 1 that the board works out". */
+  signed: string;
   meaning: string;
   means: string[];
   covers: Cover[];
@@ -58,8 +61,9 @@ export function sheetView(e: Evaluation, gateId: string, me: Viewer & { units: U
     as,
     roles,
     act: as === "builder" ? "Sign as builder" : `Countersign as ${as}`,
-    sentence: sentenceOf(e, result.covers, as),
+    sentence: sentenceOf(e, gateId, result.covers, as),
     items: result.covers.map((c) => coverView(e, c, me.units)),
+    signed: itemsWords(e, gateId),
     meaning: meaningOf(as),
     means: meansOf(e, gateId, me.id, last),
     covers: result.covers,
@@ -80,13 +84,15 @@ export function sheetView(e: Evaluation, gateId: string, me: Viewer & { units: U
 
 const proofOf = (e: Evaluation, cover: Cover) => proofsOf(e.facts, cover.item).find((p) => p.id === cover.proof) ?? null;
 
-function sentenceOf(e: Evaluation, covers: Cover[], as: SigningRole): string {
+function sentenceOf(e: Evaluation, gate: string, covers: Cover[], as: SigningRole): string {
   const proofs = covers.flatMap((c) => proofOf(e, c) ?? []);
   const done = proofs.filter((p) => p.state === "done").length;
   const na = proofs.filter((p) => p.state === "na").length;
   const people = anyOf([...new Set(proofs.map((p) => nameIn(e.snapshot, p.did)))]).replace(/ or (?=[^,]*$)/, " and ");
   const newest = proofs.length ? Math.max(...proofs.map((p) => p.counts)) : null;
-  const what = `${count(done, "item")} done${na ? `, ${na} not applicable` : ""}, by ${people || "nobody"}${newest === null ? "" : `, the last on ${e.facts.when(newest)}`}`;
+  const by = workedOut(e, gate);
+  const rest = by ? `, and ${by} that the board works out` : "";
+  const what = `${count(done, "item")} done${na ? `, ${na} not applicable` : ""}, by ${people || "nobody"}${newest === null ? "" : `, the last on ${e.facts.when(newest)}`}${rest}`;
   return as === "builder"
     ? `did this work or saw it done: ${what}.`
     : `did none of this work and have looked at what is recorded: ${what}.`;
@@ -113,7 +119,7 @@ function meansOf(e: Evaluation, gateId: string, me: string, last: boolean): stri
     .filter((m) => m.id !== me && m.roles.some((r) => r.to === null && (next as string[]).includes(r.role)))
     .map((m) => m.name);
   return [
-    `All ${result?.of ?? 0} items stand as they are written down now.`,
+    `Everything stands as it is written down now: ${itemsWords(e, gateId)}.`,
     until.length
       ? `It stands until ${e.facts.when(Math.min(...until))}, or until a system of it is opened.`
       : systems

@@ -9,7 +9,9 @@ import { type Evaluation, evaluate, withOpening } from "#app/lib/gates/evaluate"
 import { itemsIn } from "#app/lib/gates/facts";
 import type { ItemResult } from "#app/lib/gates/result";
 import type { Gate, LooseEnd, Opening, Snapshot } from "#app/lib/gates/snapshot";
+import { quoted } from "#app/lib/gates/steps";
 import { count } from "#app/lib/gates/who";
+import { isComputed } from "#app/lib/gates/work-facts";
 import type { SystemKey } from "#app/lib/template/types";
 import type { Viewer } from "#app/lib/views/board";
 import { gateOf } from "#app/lib/views/places";
@@ -31,7 +33,7 @@ export interface LapsedGate {
   /** "signed to lapsed" */
   words: string;
   /** Items that no longer stand, or lapse. */
-  items: { id: string; key: string; words: string }[];
+  items: { id: string; key: string; words: string; computed: boolean }[];
   /** What it then waits for, where no item of its own lapses. */
   waits: string | null;
 }
@@ -86,7 +88,7 @@ function lapsedGate(before: Evaluation, after: Evaluation, gate: Gate): LapsedGa
     before: shown(was),
     after: shown(is),
     words: was.state === is.state ? `stays ${is.state}` : `${was.state} to ${is.state}`,
-    items: items.map(({ id, key, words }) => ({ id, key, words })),
+    items: items.map((item) => ({ id: item.id, key: item.key, words: quoted(item), computed: isComputed(item) })),
     waits: items.length === 0 && waits.length > 0 ? listed(waits) : null,
   };
 }
@@ -129,13 +131,18 @@ export function lapsesByLooseEnd(e: Evaluation, me: Viewer, end: Pick<LooseEnd, 
 export const holdWords = ({ hold }: WhatLapses): string | null =>
   hold && `GO for run ${hold.run} turns into HOLD: ${count(hold.told, "person gets", "people get")} a mail.`;
 
-/** "2 signed gates fall: Fuel prime, Walk-round. FP3, FP4 lapse.", or that nothing does. */
+/** "2 signed gates fall: Fuel prime and Walk-round. FP3 “Purge the line” lapses: do it again afterwards.", or that nothing does. */
 export function lapseWords(w: WhatLapses): string {
   const fallen = w.gates.filter((g) => g.before.state === "signed" && g.after.state !== "signed").map((g) => g.name);
-  const keys = w.gates.flatMap((g) => g.items.map((i) => i.key));
+  const items = w.gates.flatMap((g) => g.items);
+  const named = (computed: boolean) => items.filter((i) => i.computed === computed).map((i) => `${i.key} “${i.words}”`);
+  const [proved, worked] = [named(false), named(true)];
   const parts = [
     fallen.length ? `${count(fallen.length, "signed gate falls", "signed gates fall")}: ${listed(fallen, 4)}.` : "",
-    keys.length ? `${listed(keys, 8)} ${keys.length === 1 ? "lapses" : "lapse"}.` : "",
+    proved.length ? `${listed(proved, 4)} ${proved.length === 1 ? "lapses: do it" : "lapse: do them"} again afterwards.` : "",
+    worked.length
+      ? `${listed(worked, 4)} ${worked.length === 1 ? "stands" : "stand"} no longer: the board works ${worked.length === 1 ? "it" : "them"} out again once the cause is put right.`
+      : "",
     w.releaseLapses ? "The release lapses." : "",
   ].filter(Boolean);
   return parts.length ? parts.join(" ") : "Nothing that stands now lapses.";
