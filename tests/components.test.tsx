@@ -209,6 +209,14 @@ describe("parts", () => {
     expect(screen.getAllByRole("listitem")[1]).toHaveTextContent("inspector Hanne Oduya asked 10:51 CET");
   });
 
+  it("a stamp that no longer holds is split and not filled", () => {
+    const signature = { role: "signed as builder, lapsed", name: "Mirela Tansen", time: "4 Dec 2026 10:51 CET", lapsed: true };
+    const { container } = render(<Stamp signatures={[signature]} />);
+    expect(container.querySelectorAll(".stamp-fill, .stamp-edge")).toHaveLength(0);
+    expect(container.querySelectorAll(".stamp-split")).toHaveLength(1);
+    expect(screen.getByRole("listitem")).toHaveTextContent("signed as builder, lapsed Mirela Tansen");
+  });
+
   it("the strip marks the page that is open", () => {
     render(
       <Strip

@@ -15,7 +15,7 @@ function purged() {
     FP: {
       items: {
         FP1: { words: "Outdoors, gear off.", step: { endedBy: "FP3" } },
-        FP2: { words: "Purge the line.", systems: ["fuel-fwd"], follows: ["FP1"] },
+        FP2: { words: "Purge the line.", systems: ["fueleng"], follows: ["FP1"] },
         FP3: { words: "Gear back on." },
       },
     },
@@ -70,7 +70,7 @@ describe("a step that would not hold for work done now", () => {
   it("comes first on the page and on the board, before the item that an opening made lapse", () => {
     const board = purged();
     board.now += board.s.settings.stepWindow + TICK;
-    board.open(["fuel-fwd"], { closed: board.now });
+    board.open(["fueleng"], { closed: board.now });
     board.wait();
     const page = view(board);
     const [step, purge] = page.items;

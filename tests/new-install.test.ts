@@ -225,10 +225,12 @@ describe("ratings and limits as typed", () => {
     expect(faults(sent({ windLimit: { value: "25" } }))).toEqual(["windLimit.value"]);
   });
 
-  it("take a registration of any signs up to 12, in capitals", () => {
+  it("take a registration of up to 12 letters, digits and hyphens, in capitals", () => {
     const named = (registration: string) => identitySchema.safeParse({ registration, name: "Plank", timeZone: "UTC" });
     expect(named(" n0-551k ").data?.registration).toBe("N0-551K");
     expect(named("N0551KN0551KN").success).toBe(false);
+    for (const not of ["!!", "N0 51K", "N0_51", "-N051", "N051-", "N0--51", "Ñ0551"])
+      expect(named(not).error?.issues[0]?.message).toMatch(/^Letters and digits, with a hyphen between/);
     expect(named("").error?.issues[0]?.message).toMatch(/registration/);
   });
 });

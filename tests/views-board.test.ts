@@ -51,7 +51,12 @@ describe("the answer", () => {
   });
 
   it("names who can clear each stop, or says what comes first", () => {
-    for (const stop of boardView(judged(gates()), builder).stops) expect(stop.who).toMatch(/^For Member |invite/);
+    const who = (me: typeof builder) => boardView(judged(gates()), me).stops.map((s) => s.who);
+    for (const words of who(builder)) expect(words).toMatch(/^For you|^For Member |invite/);
+    const mount = boardView(judged(gates()), builder).stops.findIndex((s) => s.title.startsWith("Mount"));
+    expect(who(builder)[mount]).toMatch(/^For you, Member \w+ or \d more\.$/);
+    // The others are named to whoever cannot clear it.
+    expect(boardView(judged(gates()), crew).stops[mount]?.who).toMatch(/^For Member \w+, Member \w+ or \d more\.$/);
   });
 
   it("says how far a clear run is cleared, and a lead is offered GO", () => {
@@ -83,7 +88,18 @@ describe("the answer", () => {
 describe("what I can do now", () => {
   it("gives a builder the gate to begin, with its first item", () => {
     const [first] = boardView(judged(gates()), builder).acts;
-    expect(first).toEqual({ label: "Begin Mount", note: "Next: Work m1", href: "/installs/install/gates/MF#item-m1" });
+    expect(first).toEqual({ label: "Begin Mount", note: "Next: m1 Work m1", href: "/installs/install/gates/MF#item-m1" });
+  });
+
+  it("sends whoever would work on a system that is open to its closing first", () => {
+    const board = signAll(gates()).wait();
+    const opening = board.open(["fueleng"]);
+    board.wait();
+    expect(boardView(judged(board), builder).acts[0]).toEqual({
+      label: "Close: fuel, forward of the firewall",
+      note: "then f1 Work f1",
+      href: `/installs/install/openings#opening-${opening.id}`,
+    });
   });
 
   it("gives an inspector the countersignature, and not to whoever signed first", () => {
@@ -128,6 +144,16 @@ describe("what I can do now", () => {
     expect(before.acts.map((a) => a.label)).toEqual(["Read the run card"]);
     run.acks.push({ ...board.record("ack", { by: "fi", as: "crew" }), version: plan.version });
     expect(boardView(judged(board), crew).acts.map((a) => a.label)).toEqual(["Answer the roll call"]);
+    board.answer(run, "fi");
+    expect(boardView(judged(board), crew).acts).toEqual([]);
+    board.wait();
+    // After a HOLD everybody is asked again, whether a GO stood or not.
+    board.act(run, "hold", { reason: "smoke", auto: false }, { by: "cy", as: "builder" });
+    expect(boardView(judged(board), crew).acts[0]).toMatchObject({
+      label: "Answer the roll call",
+      note: expect.stringContaining("after HOLD"),
+    });
+    board.wait();
     board.answer(run, "fi");
     expect(boardView(judged(board), crew).acts).toEqual([]);
     expect(boardView(judged(board), builder).crew).toBeNull();

@@ -84,6 +84,35 @@ describe("a row", () => {
     expect(rowOf(board, "MF", builder).confirm).toMatchObject({ ok: false, reason: expect.stringContaining("another person") });
   });
 
+  it("leads to the closing of a system that is still open, and takes its proof for the next thing only then", () => {
+    const board = makeBoard({ MF: { items: { m1: { systems: ["fueleng"] } } } });
+    board.proof("m1");
+    board.wait();
+    const opening = board.open(["fueleng"]);
+    board.wait();
+    const href = `/installs/install/openings#opening-${opening.id}`;
+    const row = rowOf(board, "MF", builder);
+    expect(row).toMatchObject({ nut: "lapsed", open: false });
+    expect(row.first).toMatchObject([
+      { label: "Close: fuel, forward of the firewall", href, sentence: expect.stringContaining("would not count") },
+    ]);
+    expect(pageOf(board, "MF", builder).foot.act).toEqual({ label: "Close: fuel, forward of the firewall", note: "before m1", href });
+    opening.closed = board.now;
+    board.wait();
+    expect(rowOf(board, "MF", builder)).toMatchObject({ open: true, first: [] });
+    expect(pageOf(board, "MF", builder).foot.act?.label).toBe("Do again: m1");
+  });
+
+  it("draws a signature of a lapsed gate as one that no longer holds", () => {
+    const board = makeBoard({ MF: { items: { m1: { systems: ["oil"] } } } });
+    board.proof("m1");
+    board.wait().signGate("MF");
+    expect(pageOf(board, "MF", builder).signatures.map((s) => s.lapsed)).toEqual([false, false]);
+    board.wait().open(["oil"], { closed: board.now });
+    board.wait();
+    expect(pageOf(board, "MF", builder).signatures.map((s) => s.lapsed)).toEqual([true, true]);
+  });
+
   it("gives the reason of a lapse, and an inspector may keep it", () => {
     const board = makeBoard({ MF: { items: { m1: { systems: ["oil"] } } } });
     board.proof("m1");
@@ -201,6 +230,22 @@ describe("reading a row back", () => {
 });
 
 describe("the sign sheet", () => {
+  it("counts apart what the board works out by itself, in the same words on foot and sheet", () => {
+    const worked: Part = { kind: "computed", rule: "loose-ends" } as Part;
+    const board = makeBoard({ WR: { items: { w1: {}, w2: {}, w3: { parts: [worked] } } } });
+    board.proof("w1");
+    board.proof("w2");
+    board.wait();
+    const words = "2 items, and 1 that the board works out";
+    expect(pageOf(board, "WR", builder).foot.act).toMatchObject({ label: "Sign as builder", note: `${words}, with your PIN` });
+    const sheet = sheetView(evaluate(board.s, board.now), "WR", builder, null);
+    expect(sheet).toMatchObject({
+      signed: words,
+      means: expect.arrayContaining([`Everything stands as it is written down now: ${words}.`]),
+    });
+    expect(sheet?.sentence).toMatch(/2 items done, .*, and 1 that the board works out\.$/);
+  });
+
   it("covers today's list, and refuses the one who did the work with the rules' own sentence", () => {
     const board = makeBoard({ MF: { name: "Mount", items: { m1: {}, m2: {} } } });
     board.proof("m1");
@@ -216,6 +261,7 @@ describe("the sign sheet", () => {
       covers: board.covers("MF"),
     });
     expect(sheet?.sentence).toContain("2 items done, by Member bo and Member di");
+    expect(sheet?.signed).toBe("2 items");
     expect(sheetView(e, "MF", inspector, null)?.refusal).toMatchObject({ title: "Your own work", who: "For Member ed." });
   });
 });

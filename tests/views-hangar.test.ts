@@ -60,6 +60,13 @@ describe("a row of the hangar", () => {
     run.acks = [];
     expect(waits()).toEqual(["Read the run card"]);
     Object.assign(run, { acks, answers });
+    board.wait();
+    board.act(run, "hold", { reason: "smoke", auto: false }, { by: "cy", as: "builder" });
+    expect(waits()).toEqual(["Answer the roll call"]);
+    board.wait();
+    board.answer(run, "fi");
+    expect(waits()).toEqual([]);
+    run.acts.pop();
     expect(row().planned).toMatch(/^Run 1a is planned for \w{3} \d+ \w{3} \d\d:\d\d \S+\.$/);
     expect(row().clearance).toMatch(/^Cleared to [\d,]+ rpm\.$/);
     expect(row().answer.title).toBe("Clear for run 1a");

@@ -85,7 +85,7 @@ describe("the findings of a run", () => {
   it("are those that stop it or cap it below its plan, the hardest first", () => {
     const board = signAll(gates()).wait();
     const run = board.run("1");
-    const plan = (run.plans[0]?.rpm ?? 0) * 1;
+    const plan = board.plan(run).rpm;
     board.finding("watch");
     board.finding("limiting", { cap: plan + 1 });
     const low = board.finding("limiting", { cap: plan / 2 });

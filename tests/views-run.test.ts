@@ -1,9 +1,11 @@
 import { describe, expect, it } from "vitest";
 import { evaluate } from "#app/lib/gates/evaluate";
+import type { RunState } from "#app/lib/gates/result";
 import { planForm, windForm } from "#app/lib/schemas/run-forms";
 import { crewRule } from "#app/lib/template/positions";
 import { buildUpView } from "#app/lib/views/build-up";
 import { goView } from "#app/lib/views/go";
+import { holdWords } from "#app/lib/views/hold-words";
 import { mailView } from "#app/lib/views/mail";
 import { mailReaders, planView } from "#app/lib/views/plan";
 import { runView, type Viewer } from "#app/lib/views/run";
@@ -206,6 +208,15 @@ describe("the GO tag", () => {
   });
 });
 
+describe("the HOLD sheet", () => {
+  it("speaks of GO only where one stands", () => {
+    const back = (state: RunState) => holdWords(state, "2").back;
+    expect(back("called")).toContain("GO stays");
+    for (const state of ["planned", "held", "running", "ended", "scrubbed", "reviewed"] as const) expect(back(state)).not.toContain("GO");
+    expect(holdWords("held", "2")).toMatchObject({ title: "HOLD stands already, run 2", act: "HOLD for another reason" });
+  });
+});
+
 describe("the ladder and the plan's start", () => {
   it("offers the next rung to the lead until a run of it is under way", () => {
     const board = makeBoard({ FP: { items: { FP1: {} } } });
@@ -221,6 +232,15 @@ describe("the ladder and the plan's start", () => {
     });
     board.plan(board.run("1"));
     expect(rungs()[0]).toMatchObject({ plan: null, runs: [{ label: "1a", state: "planned" }] });
+  });
+
+  it("says why the numbers skip a rung that the traits leave out", () => {
+    const board = makeBoard({ FP: { items: { FP1: {} } } });
+    const leftOut = () => buildUpView(evaluate(board.s, board.now), "la").leftOut;
+    board.s.traits = { ...board.s.traits, propeller: "fixed" };
+    expect(leftOut()).toEqual(["Run 4, propeller, is not on this ladder: no hydraulic governor and no electric pitch drive."]);
+    board.s.traits = { ...board.s.traits, propeller: "cshyd" };
+    expect(leftOut()).toEqual([]);
   });
 
   it("starts from the rung's speed and crew, with room for one fire guard an extinguisher", () => {

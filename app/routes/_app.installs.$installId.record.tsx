@@ -51,7 +51,7 @@ export default function Record({ loaderData }: Route.ComponentProps) {
           Line {view.head.seq}. Each line carries a hash over itself and the line before, so this one speaks for all of them. It stands in
           each GO, HOLD and release mail.
         </p>
-        <p className="mt-2 font-mono text-body break-all">{view.head.hash}</p>
+        <p className="mt-2 fig break-all">{view.head.hash}</p>
         <div className="mt-3 flex flex-wrap gap-3">
           <Fitting href={view.checkHref}>Check the chain</Fitting>
           <Fitting href={view.exportHref} document>

@@ -100,12 +100,12 @@ describe("a loose end", () => {
   });
 
   it("of which its maker says that it disturbed nothing opens its system until a second person has confirmed that", async () => {
-    await w.prove("MF1");
-    const mf1 = await w.item("MF1");
-    const stands = async () => (await w.board()).result.items[mf1.id]?.stands;
+    await w.prove("MF6");
+    const mf6 = await w.item("MF6");
+    const stands = async () => (await w.board()).result.items[mf6.id]?.stands;
     expect(await stands()).toBe(true);
     w.clock.add(MINUTE);
-    const { looseEnd } = value(await make("bea", { system: mf1.systems[0], undisturbed: true }));
+    const { looseEnd } = value(await make("bea", { system: mf6.systems[0], undisturbed: true }));
     const [made] = (await snapshot()).openings;
     expect(made).toMatchObject({ undisturbed: { confirmed: null }, by: "bea" });
     expect(await stands()).toBe(false);

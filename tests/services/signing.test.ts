@@ -178,3 +178,64 @@ describe("the release", () => {
     });
   });
 });
+
+describe("two tablets at once", () => {
+  it("one proof of an item is taken; whoever was slower is told who was first and when, and may still record another", async () => {
+    const withdrawn = await w.proofInput("MF1");
+    const now = (await w.board()).result.items[withdrawn.item]?.proof ?? null;
+    const both = await Promise.all([
+      recordProof(w.act("bea"), { ...withdrawn, seen: now }),
+      recordProof(w.act("tom"), { ...(await w.proofInput("MF1")), seen: now }),
+    ]);
+    expect(both.map((o) => o.ok)).toEqual([true, false]);
+    expect(both[1]).toMatchObject({ ok: false, status: 409, code: "stale" });
+    expect(both[1]?.ok === false && both[1].message).toMatch(/^Bea recorded it on 3 Dec \d\d:\d\d CET, after this page was opened\./);
+    const first = both[0]?.ok ? both[0].value.proof : "";
+    expect((await w.board()).result.items[withdrawn.item]?.proof).toBe(first);
+    expect(await recordProof(w.act("tom"), { ...(await w.proofInput("MF1")), seen: first })).toMatchObject({ ok: true });
+  });
+
+  it("bad news is taken all the same", async () => {
+    const input = await w.proofInput("MF1");
+    expect(await recordProof(w.act("cal"), { ...input, as: "crew", state: "failed", evidence: [], seen: null })).toMatchObject({
+      ok: true,
+    });
+  });
+
+  it("one first signature is taken when two builders sign, and the other is told that it is there", async () => {
+    const gates = await w.sheetOf("MF");
+    const both = await Promise.all([
+      signGates(w.act("bea"), { as: "builder", gates, pin: PIN }),
+      signGates(w.act("tom"), { as: "builder", gates, pin: PIN }),
+    ]);
+    expect(both.map((o) => o.ok).sort()).toEqual([false, true]);
+    expect(await countSignatures()).toBe(1);
+    expect(await state()).toBe("half signed");
+  });
+
+  it("a signature that meets an opening is refused, and says who opened what", async () => {
+    const gates = await w.sheetOf("MF");
+    const [opened, signed] = await Promise.all([
+      openSystem(w.act("cal"), { systems: ["mount"], reason: "mount bolt turned", closed: false, opened: null } as never),
+      signGates(w.act("bea"), { as: "builder", gates, pin: PIN }),
+    ]);
+    expect(opened.ok).toBe(true);
+    expect(await state()).not.toBe("half signed");
+    if (!signed.ok) expect(signed.message).toContain("Cal opened it 3 Dec");
+    const late = await signGates(w.act("bea"), { as: "builder", gates, pin: PIN });
+    expect(late).toMatchObject({ ok: false, status: 409 });
+    expect(late.ok === false && late.message).toContain("Cal opened it 3 Dec");
+  });
+
+  it("a sheet that somebody proved an item of meanwhile names the person, the item and the time", async () => {
+    const gates = await w.sheetOf("MF");
+    const { e, id } = await w.gate("MF");
+    const key = e.snapshot.items.find((i) => i.gate === id && !i.hidden && !i.secondEyes)?.key ?? "";
+    w.clock.add(MINUTE);
+    value(await recordProof(w.act("tom"), { ...(await w.proofInput(key)), told: true }));
+    const late = await signGates(w.act("bea"), { as: "builder", gates, pin: PIN });
+    expect(late.ok === false && late.message).toMatch(
+      new RegExp(`^Tom proved ${key} on 3 Dec \\d\\d:\\d\\d CET since you opened this sheet\\.`),
+    );
+  });
+});

@@ -40,7 +40,7 @@ export function ProveForm(props: ProveFormProps) {
   const summary = entry.errors.map((e) => ({ field: fieldId(item.id, e.field), message: e.message }));
   return (
     <Form method="post" id={formId} className="prove" encType={hasPhoto ? "multipart/form-data" : undefined} preventScrollReset noValidate>
-      <HiddenIds commandId={commandId} also={{ item: item.id, revision: item.revision }} />
+      <HiddenIds commandId={commandId} also={{ item: item.id, revision: item.revision, seen: item.seen }} />
       <ErrorSummary errors={summary} title={summary.length === 1 ? "Not recorded: one thing to put right" : undefined} />
       {item.parts.map((part) => (
         <PartFields key={part.n} part={part} item={item.id} n={part.n} entry={entry} units={units} tools={tools} live={live} />

@@ -8,7 +8,7 @@ export function LineOfRecord({ row }: { row: RecordRow }) {
       id={row.anchor}
       className="grid scroll-mt-24 grid-cols-[56px_minmax(0,1fr)] gap-x-4 border-t border-line px-4 py-4 tablet:grid-cols-[72px_minmax(0,1fr)_minmax(0,16rem)] tablet:px-6"
     >
-      <span className="font-mono text-lead tabular-nums">
+      <span className="fig text-lead tabular-nums">
         <span className="sr-only">Line </span>
         {row.seq}
       </span>
@@ -46,7 +46,7 @@ export function LineOfRecord({ row }: { row: RecordRow }) {
             <Link to={row.gate.href}>{row.gate.label}</Link>
           </p>
         )}
-        <p className="font-mono text-note text-ink-2" title={row.hash}>
+        <p className="fig text-note text-ink-2" title={row.hash}>
           {row.hash.slice(0, 12)}
         </p>
       </div>

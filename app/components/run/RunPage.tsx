@@ -7,6 +7,7 @@ import { HoldForm } from "#app/components/run/HoldForm";
 import { MyAnswer, MyPlaces } from "#app/components/run/MyBrief";
 import { RollCall } from "#app/components/run/RollCall";
 import { RunCardView } from "#app/components/run/RunCardView";
+import { RunFindings } from "#app/components/run/RunFindings";
 import { RunFoot } from "#app/components/run/RunFoot";
 import { RunTitle } from "#app/components/run/RunTitle";
 import type { RunPageView } from "#app/components/run/runPageView";
@@ -99,6 +100,7 @@ function CrewFirst(props: RunPageProps) {
         <div className="flex flex-col gap-8 pt-3">
           <Cleared view={view} />
           <Stops view={view} />
+          <RunFindings {...view.findings} />
           <RollCall {...view.roll} gear={view.gear} pusher={view.pusher} wind={view.wind.short} />
           {!mine.acknowledge && <RunCardView {...card} />}
         </div>
@@ -119,6 +121,7 @@ function Whole(props: RunPageProps) {
       </div>
       <div className="flex flex-col gap-8 border-ink px-4 py-5 max-wide:border-t-2 tablet:px-6 wide:border-l-2">
         <Stops view={view} />
+        <RunFindings {...view.findings} />
         <RollCall {...view.roll} gear={view.gear} pusher={view.pusher} wind={view.wind.short} />
         {mine && (
           <div className="flex flex-col gap-4">

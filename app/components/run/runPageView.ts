@@ -6,6 +6,7 @@ import type { RunCardProps } from "#app/components/run/RunCardView";
 import type { LadderRung } from "#app/components/run/RunTitle";
 import type { StopRow } from "#app/components/run/StopList";
 import type { PlanStation } from "#app/components/ui/FloorPlan";
+import type { RunFindings } from "#app/lib/views/run-findings";
 
 export interface Allowed {
   ok: boolean;
@@ -25,6 +26,7 @@ export interface RunPageView {
   clearance: Omit<ClearanceBlockProps, "lower"> & { lower: number | null };
   card: RunCardProps | null;
   stops: StopRow[];
+  findings: RunFindings;
   roll: { title: string; entries: RollRow[]; empty: string[]; stations: PlanStation[] };
   mine: (BriefProps & { inShort: string }) | null;
   wind: { newest: string | null; limit: string; short: string };

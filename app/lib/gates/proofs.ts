@@ -112,7 +112,7 @@ export function openingFails(facts: Facts, item: Item, counts: Instant): Cause |
     if (slot?.open)
       return {
         code: "system-open",
-        sentence: `Opened ${facts.when(slot.open.opened)}: ${slot.open.reason}. Close the opening, then do this again.`,
+        sentence: `${nameOf(facts, slot.open.by)} opened it ${facts.when(slot.open.opened)}: ${slot.open.reason}. Close the opening, then do this again.`,
       };
   }
   for (const system of item.systems) {
@@ -120,7 +120,7 @@ export function openingFails(facts: Facts, item: Item, counts: Instant): Cause |
     if (closed && (closed.closed as Instant) >= counts)
       return {
         code: "system-opened-since",
-        sentence: `Opened ${facts.when(closed.opened)} after it was done: ${closed.reason}. Do it again.`,
+        sentence: `${nameOf(facts, closed.by)} opened it ${facts.when(closed.opened)}, after this was done: ${closed.reason}. Do it again.`,
       };
   }
   return null;

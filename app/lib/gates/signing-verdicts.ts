@@ -1,5 +1,6 @@
 /** May this member sign this now, or take a signature back? Gates and the release: two people, each over the list that they were shown. */
 import type { Evaluation } from "#app/lib/gates/evaluate";
+import { itemOf, nameOf, proofsOf } from "#app/lib/gates/facts";
 import { needsRole, no, notFound, OK, refuse } from "#app/lib/gates/permit";
 import { sameRelease } from "#app/lib/gates/release";
 import type { ReleaseResult, Verdict } from "#app/lib/gates/result";
@@ -79,10 +80,25 @@ export function maySign(e: Evaluation, a: { gate: string; member: string; as: Si
       ...at,
       code: "stale",
       title: "The gate has changed",
-      sentence: "A proof was added or changed since you opened this sheet. Read it again, then sign.",
+      sentence: `${whatChanged(e, a.covers, result.covers)} since you opened this sheet. Read it again, then sign.`,
       roles: wanted,
     });
   return OK;
+}
+
+/** Who did what to the gate after the sheet was drawn: the newest such act. */
+function whatChanged(e: Evaluation, shown: Cover[], today: Cover[]): string {
+  const seen = new Map(shown.map((c) => [c.item, c]));
+  const changed = today.filter((c) => seen.get(c.item)?.proof !== c.proof || seen.get(c.item)?.revision !== c.revision);
+  const acts = changed.flatMap((c) => {
+    const item = itemOf(e.facts, c.item);
+    const last = proofsOf(e.facts, c.item).at(-1);
+    if (!item || !last) return [];
+    const act = last.withdrawn ? { ...last.withdrawn, did: "withdrew the proof of" } : { ...last, did: "proved" };
+    return [{ at: act.recorded, words: `${nameOf(e.facts, act.by)} ${act.did} ${item.key} on ${e.facts.when(act.recorded)}` }];
+  });
+  const [newest] = acts.sort((a, b) => b.at - a.at);
+  return newest?.words ?? "The items of this gate were changed";
 }
 
 /** @param a.covers what the signer was shown; null asks only whether they may sign now. */

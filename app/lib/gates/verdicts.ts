@@ -5,7 +5,7 @@
 
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import { numberMissing } from "#app/lib/gates/evidence";
-import { currentProof, heldRole, itemOf, nameOf } from "#app/lib/gates/facts";
+import { currentProof, heldRole, itemOf, nameOf, proofsOf } from "#app/lib/gates/facts";
 import { needsMember, needsRole, no, notFound, OK, refuse } from "#app/lib/gates/permit";
 import type { BlockerCode, Verdict } from "#app/lib/gates/result";
 import type { Proof, Role } from "#app/lib/gates/snapshot";
@@ -13,10 +13,13 @@ import { isComputed } from "#app/lib/gates/work-facts";
 
 const subjectOf = (gate: string) => ({ subject: ["gate", gate] as ["gate", string], page: "gate" as const, id: gate });
 
-/** @param a.told the maker was told that a new proof of a standing item in a signed gate makes its signatures lapse. */
+/**
+ * @param a.seen id of the proof that the maker saw, null = none: somebody else may have been faster. Left out: not asked.
+ * @param a.told the maker was told that a new proof of a standing item in a signed gate makes its signatures lapse.
+ */
 export function mayProve(
   e: Evaluation,
-  a: { item: string; member: string; as: Role; state: Proof["state"]; late: boolean; told?: boolean },
+  a: { item: string; member: string; as: Role; state: Proof["state"]; late: boolean; told?: boolean; seen?: string | null },
 ): Verdict {
   const item = itemOf(e.facts, a.item);
   const gate = item && e.facts.gates.get(item.gate);
@@ -42,6 +45,8 @@ export function mayProve(
       roles: ["builder", "inspector"],
     });
   if (!heldRole(e.facts, a.member, a.as, e.at)) return needsRole(e, a.member, [a.as], "prove it so") ?? OK;
+  const faster = somebodyFaster(e, item.id, a.seen);
+  if (faster) return faster;
   const signed = e.result.gates[gate.id]?.stands && e.result.items[item.id]?.stands;
   const toldFirst: Verdict | null =
     signed && !a.told
@@ -90,6 +95,25 @@ export function mayProve(
   return toldFirst ?? OK;
 }
 
+/** Two tablets at one item: the second one is told who was first, and looks before it writes over it. */
+function somebodyFaster(e: Evaluation, item: string, seen: string | null | undefined): Verdict | null {
+  const current = currentProof(e.facts, item);
+  if (seen === undefined || (current?.id ?? null) === seen) return null;
+  const last = proofsOf(e.facts, item).at(-1);
+  const what = current
+    ? `${nameOf(e.facts, current.by)} recorded ${current.state === "failed" ? "that it is not right" : "it"} on ${e.facts.when(current.recorded)}`
+    : `${nameOf(e.facts, last?.withdrawn?.by ?? "")} took its proof back${last?.withdrawn ? ` on ${e.facts.when(last.withdrawn.recorded)}` : ""}`;
+  return no(e, {
+    subject: ["item", item],
+    page: "gate",
+    id: itemOf(e.facts, item)?.gate ?? null,
+    code: "stale",
+    title: "Somebody was faster",
+    sentence: `${what}, after this page was opened. Look at it first; if yours is still wanted, record it again.`,
+    roles: ["builder", "inspector"],
+  });
+}
+
 export function mayWithdrawProof(e: Evaluation, a: { proof: string; member: string }): Verdict {
   const proof = e.snapshot.proofs.find((p) => p.id === a.proof);
   if (!proof) return notFound(e, "proof");
@@ -125,11 +149,18 @@ function present(e: Evaluation, id: string): { proof: Proof; verdict: null } | {
       verdict: no(e, {
         code: "stale",
         title: "A newer proof is there",
-        sentence: "This proof was replaced or withdrawn since you opened the page. Look at the item again.",
+        sentence: `${changedBy(e, proof)} since you opened the page. Look at the item again.`,
         roles: ["builder"],
       }),
     };
   return { proof, verdict: null };
+}
+
+/** Who replaced or withdrew a proof, and when. */
+function changedBy(e: Evaluation, proof: Proof): string {
+  if (proof.withdrawn) return `${nameOf(e.facts, proof.withdrawn.by)} withdrew this proof on ${e.facts.when(proof.withdrawn.recorded)}`;
+  const last = proofsOf(e.facts, proof.item).at(-1);
+  return last ? `${nameOf(e.facts, last.by)} recorded a newer proof on ${e.facts.when(last.recorded)}` : "This proof was replaced";
 }
 
 export function mayConfirm(e: Evaluation, a: { proof: string; member: string; as: Role }): Verdict {

@@ -120,6 +120,7 @@ async function prove(acting: Acting, intent: "prove" | "preview" | "failed" | "n
   const parsed = recordProofSchema.safeParse({
     item: item.id,
     revision: Number(text(form, "revision")),
+    seen: form.has("seen") ? text(form, "seen") || null : undefined,
     as: text(form, "as") || install.me.roles[0],
     state,
     evidence,

@@ -6,6 +6,8 @@ export const recordProofSchema = z.object({
   item: idSchema,
   /** Revision of the item that was on the screen. */
   revision: z.number().int(),
+  /** The proof that was on the screen: null = none. Left out: not asked whether somebody was faster. */
+  seen: idSchema.nullable().optional(),
   as: z.enum(["builder", "inspector", "lead", "crew"]),
   state: z.enum(["done", "failed", "na"]),
   /** One entry per part of the item; checked against the item by `checkEvidence`. */

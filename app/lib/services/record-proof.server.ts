@@ -20,7 +20,7 @@ export function recordProof(act: Act, input: RecordProof): Promise<Outcome<{ pro
     const late = at !== null;
     // A failing proof is bad news: it names whatever role the person holds.
     const as = state === "failed" ? roleOf(d.member, input.as, "builder", "inspector") : input.as;
-    const refusal = refusalOf(mayProve(d.e, { item: itemId, member: d.member.id, as, state, late, told: input.told }));
+    const refusal = refusalOf(mayProve(d.e, { item: itemId, member: d.member.id, as, state, late, told: input.told, seen: input.seen }));
     if (refusal) return refusal;
     if (item.revision !== input.revision) return stale(`${item.key} was changed since you opened the page. Read it again, then record it.`);
     if (state === "na" && input.note.length < 3) return invalid("Say why the item does not apply.");

@@ -30,6 +30,8 @@ export interface ItemView {
   anchor: string;
   key: string;
   revision: number;
+  /** Id of the proof that is shown, "" = none: so that two tablets do not prove it over each other. */
+  seen: string;
   words: string;
   caution: string | null;
   source: string | null;
@@ -92,6 +94,7 @@ export function itemView(e: Evaluation, item: Item, me: Reader, wantedBy: string
     anchor: anchorOf(item.id),
     key: item.key,
     revision: item.revision,
+    seen: proof?.id ?? "",
     words: item.words,
     caution: item.caution,
     source: item.source ?? null,

@@ -13,6 +13,7 @@ import { format } from "#app/lib/units/display";
 import { type LineRunView, lineOf } from "#app/lib/views/board-line";
 import { nameIn, type Place, placeOf, runOf, whoClears } from "#app/lib/views/places";
 import { type MineView, mineView, type RollView, rollView } from "#app/lib/views/run-crew";
+import { type RunFindings, runFindings } from "#app/lib/views/run-findings";
 import {
   type CardView,
   type ClearanceView,
@@ -52,6 +53,7 @@ export interface RunView {
   clearance: ClearanceView;
   card: CardView | null;
   stops: StopView[];
+  findings: RunFindings;
   roll: RollView;
   mine: MineView | null;
   wind: WindView;
@@ -100,6 +102,7 @@ export function runView(e: Evaluation, runId: string, me: Viewer, place: string)
     clearance: clearanceView(e, judged.clearance),
     card: run.plan ? cardView(run.plan.card, run.plan.version) : null,
     stops: stopViews(e, judged, me.id),
+    findings: runFindings(e, runId),
     roll: rollView(e, run, me.id),
     mine: mineView(e, run, me.id),
     wind: windView(e, run),
