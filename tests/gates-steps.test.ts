@@ -1,6 +1,7 @@
 import { describe, expect, it } from "vitest";
 import { evaluate } from "#app/lib/gates/evaluate";
 import { stepsToRedoFirst } from "#app/lib/gates/steps";
+import { boardView } from "#app/lib/views/board";
 import { nextItem } from "#app/lib/views/board-acts";
 import { gateView } from "#app/lib/views/gate";
 import type { Reader } from "#app/lib/views/gate-item";
@@ -70,20 +71,27 @@ describe("a step that would not hold for work done now", () => {
   it("comes first on the page and on the board, before the item that an opening made lapse", () => {
     const board = purged();
     board.now += board.s.settings.stepWindow + TICK;
-    board.open(["fueleng"], { closed: board.now });
+    const opening = board.open(["fueleng"]);
+    board.wait();
+    // A system that is open comes before everything.
+    expect(boardView(evaluate(board.s, board.now), builder).acts[0]?.label).toBe("Close: fuel, forward of the firewall");
+    expect(view(board).items.map((i) => i.wanted)).toEqual([null, null, null]);
+    opening.closed = board.now;
     board.wait();
     const page = view(board);
     const [step, purge] = page.items;
     expect(purge).toMatchObject({ nut: "lapsed", open: false });
     expect(purge?.first).toEqual([
       {
-        label: "FP1 Outdoors, gear off",
         act: "Do again first: FP1",
         href: "#item-FP1",
         sentence: "Do FP1 first: it was done more than 12 h ago, and a proof of this given now would lapse at once.",
       },
     ]);
-    expect(step).toMatchObject({ open: true, wanted: "FP2 rests on it. Do this again first, then FP2." });
+    expect(step).toMatchObject({
+      open: true,
+      wanted: { sentence: "Do this again first: it was done more than 12 h ago, and FP2 rests on it." },
+    });
     expect(page.foot.act).toMatchObject({ label: "Do again first: FP1", note: "FP2 rests on it", href: "#item-FP1" });
     expect(nextItem(evaluate(board.s, board.now), "FP")?.key).toBe("FP1");
 

@@ -94,7 +94,7 @@ describe("a row", () => {
     const row = rowOf(board, "MF", builder);
     expect(row).toMatchObject({ nut: "lapsed", open: false });
     expect(row.first).toMatchObject([
-      { label: "Close: fuel, forward of the firewall", href, sentence: expect.stringContaining("would not count") },
+      { act: "Close: fuel, forward of the firewall", href, sentence: expect.stringContaining("would not count") },
     ]);
     expect(pageOf(board, "MF", builder).foot.act).toEqual({ label: "Close: fuel, forward of the firewall", note: "before m1", href });
     opening.closed = board.now;
@@ -243,7 +243,7 @@ describe("the sign sheet", () => {
       signed: words,
       means: expect.arrayContaining([`Everything stands as it is written down now: ${words}.`]),
     });
-    expect(sheet?.sentence).toMatch(/2 items done, .*, and 1 that the board works out\.$/);
+    expect(sheet?.sentence).toMatch(/2 items done, .*; and 1 that the board works out\.$/);
   });
 
   it("covers today's list, and refuses the one who did the work with the rules' own sentence", () => {

@@ -186,7 +186,28 @@ describe("the crew", () => {
 });
 
 describe("the crib", () => {
-  const crib = (board: Board) => cribView(evaluated(board), "la", "si", { wrench: "4471" });
+  const crib = (board: Board) => cribView(evaluated(board), "la", "si", { serials: { wrench: "4471" }, checks: {}, bottles: {} });
+
+  it("lists what runs out, out of date first, then by days left", () => {
+    const board = makeBoard({});
+    const DAY = 86_400_000;
+    const tool = board.tool("old", board.now - DAY);
+    board.tool("soon", board.now + 2 * DAY);
+    board.tool("never").checks = [];
+    board.tool("bad").checks.push({ id: "b", at: board.now, good: false, due: null, since: null });
+    const [first] = board.s.extinguishers;
+    if (!first) throw new Error("no extinguisher");
+    board.s.extinguishers = [{ ...first, lookDue: board.now + DAY / 2, serviceDue: board.now + 40 * DAY }];
+    const { due } = crib(board);
+    expect(due.slice(0, 6).map((d) => [d.name, d.what, d.word.replace(/ since .*/, ""), d.state])).toEqual([
+      ["Wrench bad", "calibration", "out of tolerance", "out"],
+      ["Wrench never", "calibration", "never done", "out"],
+      [tool.name, "calibration", "past its date", "out"],
+      ["Cart one", "monthly look", "last day", "due soon"],
+      ["Wrench soon", "calibration", "2 days left", "due soon"],
+      ["Cart one", "yearly service", "40 days left", "in date"],
+    ]);
+  });
 
   it("names the proofs that fall when the tool is found out of tolerance, as the evaluator then judges", () => {
     const board = makeBoard({ OP: { items: { OP1: { parts: [torque()] }, OP2: {} } } });

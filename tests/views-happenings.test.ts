@@ -19,8 +19,8 @@ import { looseEndsView } from "#app/lib/views/loose-ends";
 import { openingsView, seenOf } from "#app/lib/views/openings";
 import { valveOf } from "#app/lib/views/shown-states";
 import { presetsOn, systemsOn, systemWords } from "#app/lib/views/systems";
-import { holdWords, lapsesByLooseEnd, lapsesByOpening, lapseWords, type WhatLapses } from "#app/lib/views/what-lapses";
-import { type Board, makeBoard, signAll } from "./support/snapshots";
+import { holdWords, lapsesByBadCheck, lapsesByLooseEnd, lapsesByOpening, lapseWords, type WhatLapses } from "#app/lib/views/what-lapses";
+import { type Board, makeBoard, signAll, torque } from "./support/snapshots";
 import { MINUTE, value, type Workshop, workshop } from "./support/workshop";
 
 const builder = { id: "bo", roles: ["builder" as const] };
@@ -77,6 +77,18 @@ describe("what an opening makes lapse", () => {
     expect(seenOf(judged(board), ["mount", "oil"], true)).toBe(before);
     expect(seenOf(judged(board), ["mount", "oil"], false)).not.toBe(before);
     expect(seenOf(judged(signAll(gates()).wait()), ["mount", "oil"], true)).not.toBe(before);
+  });
+
+  it("knows what a bad check of a tool undoes, as the board shows it afterwards", () => {
+    const board = makeBoard({ MF: { items: { m1: { parts: [torque()] }, m2: {} } } });
+    signAll(board).wait();
+    const e = judged(board);
+    const check = { at: board.now, since: null };
+    const w = lapsesByBadCheck(e, "wrench", check);
+    expect(w.gates.map((g) => [g.id, g.after.state, g.items.map((i) => i.key)])).toEqual([["MF", "lapsed", ["m1"]]]);
+    board.s.tools[0]?.checks.push({ id: "bad", good: false, due: null, ...check });
+    expect(judged(board).result.gates.MF?.state).toBe("lapsed");
+    expect(lapsesByBadCheck(e, "another", check).gates).toEqual([]);
   });
 
   it("knows that a loose end of its own gate stops it, and that one asked for opens nothing", () => {

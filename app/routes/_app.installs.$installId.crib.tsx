@@ -1,15 +1,16 @@
 import { data, redirect } from "react-router";
 import { AddExtinguisher, AddTool } from "#app/components/crib/AddForms";
 import { BottleItem } from "#app/components/crib/BottleItem";
+import { DueList } from "#app/components/crib/DueList";
 import { ToolItem } from "#app/components/crib/ToolItem";
 import { CautionSlab } from "#app/components/ui/CautionSlab";
 import { Notice } from "#app/components/ui/Notice";
 import { TitlePipe } from "#app/components/ui/TitlePipe";
 import { db } from "#app/db/client.server";
-import { serialsOf } from "#app/db/queries/crib.server";
+import { cribTold } from "#app/db/queries/crib.server";
 import { actOnCrib } from "#app/lib/http/crib-acts.server";
-import { readForm } from "#app/lib/http/form.server";
 import { installContext } from "#app/lib/http/install.server";
+import { readPhotoForm } from "#app/lib/http/multipart.server";
 import { newId } from "#app/lib/ids";
 import { format } from "#app/lib/units/display";
 import { cribView } from "#app/lib/views/crib";
@@ -21,7 +22,7 @@ export const meta: Route.MetaFunction = () => [{ title: "Crib · Bladecount" }];
 export async function loader({ context }: Route.LoaderArgs) {
   const { e, me, installId } = context.get(installContext);
   return {
-    view: cribView(e, me.id, me.units, await serialsOf(db(), installId)),
+    view: cribView(e, me.id, me.units, await cribTold(db(), installId)),
     unit: format("mass", 1, me.units).unit,
     zone: e.facts.when(e.at).split(" ").at(-1) ?? "local time",
     formId: newId(),
@@ -30,7 +31,9 @@ export async function loader({ context }: Route.LoaderArgs) {
 
 export async function action({ context, request }: Route.ActionArgs) {
   const install = context.get(installContext);
-  const acted = await actOnCrib(install, await readForm(request));
+  const act = { installId: install.installId, actor: { userId: install.me.id } };
+  const { form, refused } = await readPhotoForm(request, act, ["good-check", "bad-check"]);
+  const acted = await actOnCrib(install, form, refused[0]?.message ?? null);
   if (!acted) throw data("This page does not know that form. Load it again; nothing was changed.", { status: 400 });
   if (!acted.done) return data(acted.reply, { status: acted.status });
   return redirect(`${boardOf(install.installId)}/crib#${acted.anchor}`, 303);
@@ -47,6 +50,7 @@ export default function Crib({ loaderData, actionData }: Route.ComponentProps) {
           {may.why} You may still say that a tool was found out of tolerance, or take an extinguisher out of use.
         </Notice>
       )}
+      <DueList rows={view.due} />
       <section aria-labelledby="tools">
         <h2 id="tools" className="border-b-2 border-ink px-4 pt-5 pb-3 text-h3 tablet:px-6">
           Measuring tools

@@ -1,15 +1,19 @@
 import { asc, eq } from "drizzle-orm";
 import { afterAll, beforeAll, beforeEach, describe, expect, it, vi } from "vitest";
-import { db } from "#app/db/client.server";
+import { db, write } from "#app/db/client.server";
+import { recordLines } from "#app/db/queries/record-lines.server";
 import { outbox } from "#app/db/schema/outbox";
 import { now } from "#app/lib/clock";
+import { RULES_VERSION } from "#app/lib/gates/rules-version";
 import { runsOutBefore } from "#app/lib/gates/runs-out";
 import { mailWorker } from "#app/lib/mail/worker.server";
+import { applyRules } from "#app/lib/services/apply-rules.server";
 import { boardClock } from "#app/lib/services/board-clock.server";
 import { callGo } from "#app/lib/services/call-go.server";
 import { callHold } from "#app/lib/services/call-hold.server";
 import { giveLeaseBack, takeLease } from "#app/lib/services/lease.server";
 import { addMember } from "#app/lib/services/members.server";
+import { beginRecord } from "#app/lib/services/perform.server";
 import { planRun } from "#app/lib/services/plan-run.server";
 import { remindRunsOut } from "#app/lib/services/remind-runs-out.server";
 import { acknowledgeBrief, answerRollCall, recordWind } from "#app/lib/services/roll-call.server";
@@ -45,6 +49,20 @@ async function plan(start: number): Promise<string> {
   const base = { run: null, rung: "1", place: "Apron south", rpm, positions: [...POSITIONS], windLimit: 7, gustLimit: 10 };
   return value(await planRun(w.act("lio"), { ...base, plannedStart: start })).run;
 }
+let runId = "";
+async function called(): Promise<void> {
+  const run = await plan(now() + HOUR);
+  for (const person of ["bea", "lio", "tom", "cal", "ines", "olga"] as const) {
+    w.clock.add(1000);
+    value(await acknowledgeBrief(w.act(person), { run, version: 1 }));
+    value(await answerRollCall(w.act(person), { run, version: 1, answer: "go", reason: "", queueEmpty: true }));
+  }
+  value(await recordWind(w.act("cal"), { run, speed: 3, gust: 5, tail: false }));
+  w.clock.add(MINUTE);
+  value(await callGo(w.act("lio"), { run, version: 1, pin: PIN }));
+  runId = run;
+}
+
 const mails = (kind: string) => db().select().from(outbox).where(eq(outbox.kind, kind)).orderBy(asc(outbox.toUserId));
 
 describe("the clock of several processes", () => {
@@ -103,20 +121,28 @@ describe("what runs out before a planned run", () => {
   });
 });
 
+describe("a program with other rules", () => {
+  it("finds an install made under these rules in order", async () => {
+    expect(await applyRules()).toBe(0);
+  });
+
+  it("writes it into the record once, and holds a GO that was called before", async () => {
+    await called();
+    const older = await write(async (tx) => {
+      const { writer } = await beginRecord(tx, w.installId);
+      return writer.record({ by: "lio", as: "lead" }, { type: "rules-changed", data: { from: "0", to: "1", stands: [] } });
+    });
+    expect(await applyRules()).toBe(1);
+    const lines = await recordLines(db(), w.installId, { after: older.seq });
+    expect(lines.map((l) => l.event.type)).toEqual(["rules-changed", "hold-called"]);
+    expect(lines[0]?.event.data).toMatchObject({ from: "1", to: RULES_VERSION });
+    expect((await w.board()).result.runs.find((r) => r.id === runId)?.state).toBe("held");
+    expect((await mails("hold")).length).toBe(6);
+    expect(await applyRules()).toBe(0);
+  });
+});
+
 describe("a GO mail that waited", () => {
-  async function called(): Promise<void> {
-    const run = await plan(now() + HOUR);
-    for (const person of ["bea", "lio", "tom", "cal", "ines", "olga"] as const) {
-      w.clock.add(1000);
-      value(await acknowledgeBrief(w.act(person), { run, version: 1 }));
-      value(await answerRollCall(w.act(person), { run, version: 1, answer: "go", reason: "", queueEmpty: true }));
-    }
-    value(await recordWind(w.act("cal"), { run, speed: 3, gust: 5, tail: false }));
-    w.clock.add(MINUTE);
-    value(await callGo(w.act("lio"), { run, version: 1, pin: PIN }));
-    runId = run;
-  }
-  let runId = "";
   const sent: string[] = [];
   const worker = () =>
     mailWorker(async (row) => {

@@ -1,5 +1,6 @@
 import { afterAll, beforeAll, beforeEach, describe, expect, it, vi } from "vitest";
 import { db } from "#app/db/client.server";
+import { cribTold } from "#app/db/queries/crib.server";
 import { looseEndDetails, openingDetails } from "#app/db/queries/happening-details.server";
 import { recordLines } from "#app/db/queries/record-lines.server";
 import { verify } from "#app/lib/record/chain";
@@ -231,6 +232,33 @@ describe("the crib", () => {
     expect(await recordToolCheck(w.act("bea"), { tool: "nope", on: null, good: false, due: null, note: "" })).toMatchObject(
       refused(404, "not-found"),
     );
+  });
+
+  it("keeps a certificate's number, and takes no photo that is not here", async () => {
+    const { tool } = value(await addTool(w.act("bea"), { name: "Torque wrench", serial: "" }));
+    const check = { tool, on: null, good: true, due: "2027-01-01", certificate: "K-4471" };
+    expect(await recordToolCheck(w.act("bea"), { ...check, photo: "nope" })).toMatchObject(refused(422, "invalid"));
+    const { check: id } = value(await recordToolCheck(w.act("bea"), check));
+    expect((await cribTold(db(), w.installId)).checks[id]).toMatchObject({ certificate: "K-4471", photo: null, by: "bea" });
+  });
+
+  it("takes a first day of doubt on a bad check alone, and none after the day on which it was found", async () => {
+    const { tool } = value(await addTool(w.act("bea"), { name: "Torque wrench", serial: "" }));
+    const check = (good: boolean, since: string) =>
+      recordToolCheck(w.act("bea"), { tool, on: "2026-12-01", good, due: good ? "2027-01-01" : null, since, note: "reads low" });
+    expect(await check(true, "2026-11-01")).toMatchObject(refused(422, "invalid"));
+    expect(await check(false, "2026-12-09")).toMatchObject(refused(422, "invalid"));
+    value(await check(false, "2026-11-01"));
+    expect((await snapshot()).tools[0]?.checks[0]?.since).toBe(Date.UTC(2026, 9, 31, 23));
+  });
+
+  it("takes a label's rating that fits its class, and no other", async () => {
+    const add = (rating: string, classB: boolean) =>
+      addExtinguisher(w.act("bea"), { name: "By the door", agent: "powder", classB, charge: 2, rating, position: "left of the door" });
+    expect(await add("10-B:C", false)).toMatchObject(refused(422, "invalid"));
+    expect(await add("2-A", true)).toMatchObject(refused(422, "invalid"));
+    const { extinguisher } = value(await add("10-B:C", true));
+    expect((await cribTold(db(), w.installId)).bottles[extinguisher]).toEqual({ rating: "10-B:C", position: "left of the door" });
   });
 
   it("makes a torque doubtful whose wrench is found out of tolerance afterwards", async () => {

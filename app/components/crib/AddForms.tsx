@@ -59,6 +59,15 @@ export function AddExtinguisher({ commandId, reply, first, unit }: AddProps & { 
           className="w-full max-w-[460px]"
         />
         <ChoiceGroup {...field("agent")} label="Agent" options={AGENT_CHOICES} />
+        <TextInput
+          {...field("rating")}
+          label="Rating"
+          optional
+          hint="As on its label, such as 10-B:C or 113B."
+          figures
+          maxLength={40}
+          className="w-full max-w-[320px]"
+        />
         <Choice
           kind="checkbox"
           id="add-extinguisher-classB"
@@ -70,6 +79,14 @@ export function AddExtinguisher({ commandId, reply, first, unit }: AddProps & { 
           Class B
         </Choice>
         <NumberInput {...field("charge")} label="Charge" hint="Mass of agent, on the label." unit={unit} size={6} />
+        <TextInput
+          {...field("position")}
+          label="Where it stands"
+          optional
+          hint="Left of the hangar door; by the fire guard on run days."
+          maxLength={120}
+          className="w-full max-w-[560px]"
+        />
         <Fitting size="act" className="tablet:min-w-80" note="then enter its look and service">
           Add the extinguisher
         </Fitting>

@@ -1,19 +1,21 @@
 import { CheckForm } from "#app/components/crib/CheckForm";
 import { CribItem } from "#app/components/crib/CribItem";
 import type { FormReply } from "#app/lib/schemas/form-reply";
-import type { CribView, ToolRow } from "#app/lib/views/crib";
+import type { CheckShown, CribView, ToolRow } from "#app/lib/views/crib";
 
 interface ToolItemProps {
   row: ToolRow;
   view: Pick<CribView, "ticks" | "days" | "may">;
   commandId: string;
-  reply: FormReply | undefined;
+  reply: (FormReply & { checking?: CheckShown }) | undefined;
 }
 
 export function ToolItem({ row, view, commandId, reply }: ToolItemProps) {
   const shared = { subject: { field: "tool", id: row.id, name: row.name }, commandId, reply } as const;
+  const badForm = `${row.anchor}-bad`;
+  const checking = reply?.checking?.form === badForm ? reply.checking : undefined;
   return (
-    <CribItem row={row} ticks={view.ticks}>
+    <CribItem row={row} ticks={view.ticks} told={row.last}>
       {view.may.ok && (
         <CheckForm
           {...shared}
@@ -22,14 +24,15 @@ export function ToolItem({ row, view, commandId, reply }: ToolItemProps) {
           opens="Enter a good check"
           on={{ label: "Day of the check", value: view.days.today }}
           due={{ label: "Last day in date", hint: "As its label or certificate says.", value: "" }}
-          note={{ label: "Who checked it, certificate", optional: true }}
+          certificate
+          note={{ label: "Who checked it", optional: true }}
           act="In tolerance"
           actNote={`${row.name}, in date to that day`}
         />
       )}
       <CheckForm
         {...shared}
-        id={`${row.anchor}-bad`}
+        id={badForm}
         intent="bad-check"
         opens="It was found out of tolerance"
         says={
@@ -43,9 +46,17 @@ export function ToolItem({ row, view, commandId, reply }: ToolItemProps) {
           )
         }
         on={{ label: "Day on which it was found", value: view.days.today }}
+        since={{
+          label: "In doubt since",
+          hint: row.doubtFrom
+            ? `Empty: since its last good check, ${row.doubtFrom}. Type a day only if the doubt reaches further back.`
+            : "It has had no good check: every proof with it is in doubt.",
+        }}
+        certificate
+        checking={checking}
         note={{ label: "What was found", optional: false }}
         act="Out of tolerance"
-        actNote={row.reach ? `lapses ${row.reach}` : "out of use until a good check"}
+        actNote={row.reach ? "what lapses is shown first" : "out of use until a good check"}
       />
     </CribItem>
   );

@@ -104,13 +104,9 @@ export function ItemRow({ item, reply, shared, busy }: ItemRowProps) {
             ))}
           </Notice>
         )}
-        {item.wanted && (
-          <Notice kind="plain" title="Do this again first">
-            {item.wanted}
-          </Notice>
-        )}
+        {item.wanted && <Notice kind="plain" title={item.wanted.sentence} />}
         {item.first.map((first) => (
-          <Notice key={first.href} kind="plain" title={first.sentence} action={<Fitting href={first.href}>{first.label}</Fitting>} />
+          <Notice key={first.href} kind="plain" title={first.sentence} action={<Fitting href={first.href}>{first.act}</Fitting>} />
         ))}
         {item.nut === "todo" && item.reasons[0] && (item.proof || item.computed || !open) && !item.prove.numberMissing && (
           <p className="item-reason">

@@ -57,11 +57,18 @@ export async function stockCrib({ data, act, clock, board }: Crew): Promise<void
   const due = (days: number) => dateAfter(clock.present, days, zone);
   const { tool } = value(await addTool(act(data.lead), data.wrench));
   value(
-    await recordToolCheck(act(data.lead), { tool, on: null, good: true, due: due(240), note: "Checked against the club's beam wrench" }),
+    await recordToolCheck(act(data.lead), {
+      tool,
+      on: null,
+      good: true,
+      due: due(240),
+      certificate: data.wrench.certificate,
+      note: "Checked against the club's beam wrench",
+    }),
   );
-  for (const { name, agent, charge } of data.extinguishers) {
+  for (const { name, agent, charge, rating, position } of data.extinguishers) {
     clock.minutes(3);
-    const { extinguisher } = value(await addExtinguisher(act(data.lead), { name, agent, classB: true, charge }));
+    const { extinguisher } = value(await addExtinguisher(act(data.lead), { name, agent, classB: true, charge, rating, position }));
     value(await recordLook(act(data.lead), { extinguisher, kind: "service", due: due(200), note: "" }));
     value(await recordLook(act(data.lead), { extinguisher, kind: "look", due: due(26), note: "" }));
   }

@@ -12,6 +12,7 @@ import {
   secondPersonFails,
   toolFails,
   validUntil,
+  withoutStop,
 } from "#app/lib/gates/proofs";
 import type { Blocker, ItemResult, ItemState } from "#app/lib/gates/result";
 import type { Instant, Item, Proof } from "#app/lib/gates/snapshot";
@@ -59,7 +60,7 @@ export function evaluateItem(facts: Facts, limits: GateLimits, own: ItemFacts): 
     return notStanding(facts, item, proof, "to do", [
       {
         code: "item-failed",
-        sentence: `${nameOf(facts, proof.did)} found it not right on ${facts.when(proof.counts)}${proof.note ? `: ${proof.note}` : ""}. Put it right and prove it again.`,
+        sentence: `${nameOf(facts, proof.did)} found it not right on ${facts.when(proof.counts)}${proof.note ? `: ${withoutStop(proof.note)}` : ""}. Put it right and prove it again.`,
       },
     ]);
 

@@ -104,6 +104,9 @@ export function keptAt(facts: Facts, gate: Gate, proof: Proof): Instant | null {
   return at;
 }
 
+/** What somebody wrote, as the end of a sentence that has its own full stop. */
+export const withoutStop = (text: string): string => text.trim().replace(/\.$/, "");
+
 /** Rule 6: newer than the closing of every opening of its systems, and none still open. `counts` already minds a keep. */
 export function openingFails(facts: Facts, item: Item, counts: Instant): Cause | null {
   if (!facts.openings.size) return null;
@@ -112,7 +115,7 @@ export function openingFails(facts: Facts, item: Item, counts: Instant): Cause |
     if (slot?.open)
       return {
         code: "system-open",
-        sentence: `${nameOf(facts, slot.open.by)} opened it ${facts.when(slot.open.opened)}: ${slot.open.reason}. Close the opening, then do this again.`,
+        sentence: `${nameOf(facts, slot.open.by)} opened it ${facts.when(slot.open.opened)}: ${withoutStop(slot.open.reason)}. Close the opening, then do this again.`,
       };
   }
   for (const system of item.systems) {
@@ -120,7 +123,7 @@ export function openingFails(facts: Facts, item: Item, counts: Instant): Cause |
     if (closed && (closed.closed as Instant) >= counts)
       return {
         code: "system-opened-since",
-        sentence: `${nameOf(facts, closed.by)} opened it ${facts.when(closed.opened)}, after this was done: ${closed.reason}. Do it again.`,
+        sentence: `${nameOf(facts, closed.by)} opened it ${facts.when(closed.opened)}, after this was done: ${withoutStop(closed.reason)}. Do it again.`,
       };
   }
   return null;

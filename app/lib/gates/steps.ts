@@ -5,7 +5,7 @@
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import { evidenceMeets } from "#app/lib/gates/evidence";
 import { type Facts, proofsOf } from "#app/lib/gates/facts";
-import { acceptanceFails, type Cause, revisionFails, secondPersonFails, toolFails } from "#app/lib/gates/proofs";
+import { acceptanceFails, type Cause, revisionFails, secondPersonFails, toolFails, withoutStop } from "#app/lib/gates/proofs";
 import type { Instant, Item, Proof } from "#app/lib/gates/snapshot";
 import { allProofs, type ItemFacts } from "#app/lib/gates/work-facts";
 
@@ -39,7 +39,7 @@ export function stepFault(facts: Facts, own: ItemFacts, proof: Pick<Proof, "coun
 }
 
 /** Words of an item inside quotation marks: without a full stop of their own. */
-export const quoted = (item: Item): string => item.words.replace(/\.$/, "");
+export const quoted = (item: Item): string => withoutStop(item.words);
 
 export const windowHours = (facts: Facts): number => Math.round(facts.snapshot.settings.stepWindow / 3600_000);
 

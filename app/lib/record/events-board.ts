@@ -7,7 +7,8 @@ const signed = { meaning: words, rulesVersion: z.string(), shownHash: sha256 };
 const revised = z.array(z.strictObject({ item: id, revision: z.number().int() }));
 
 export const boardEvents = [
-  event("install-created", { registration: words, name: words, timeZone: z.string(), traits: json, templateVersion: z.string(), values: json, gates: json, items: json, rungs: json, leftOut: json }),
+  event("install-created", { registration: words, name: words, timeZone: z.string(), traits: json, templateVersion: z.string(), values: json, gates: json, items: json, rungs: json, leftOut: json, rulesVersion: z.string().optional() }),
+  event("rules-changed", { from: z.string(), to: z.string(), stands: z.array(z.string()) }),
   event("member-added", { member: id, name: words, role }),
   event("role-ended", { member: id, name: words, role }),
   event("number-entered", { item: id, key: z.string(), part: z.number().int(), entered: json, source: words, revision: z.number().int() }),

@@ -19,6 +19,7 @@ export type Kind = (typeof KINDS)[number];
 
 const KIND_OF: Record<EventType, Kind> = {
   "install-created": "set-up and people",
+  "rules-changed": "set-up and people",
   "member-added": "set-up and people",
   "role-ended": "set-up and people",
   "number-entered": "set-up and people",
@@ -120,6 +121,11 @@ function sentence(event: RecordEvent, names: Names, units: UnitSystem): string[]
       return [
         `set up ${event.data.registration}, ${event.data.name}`,
         `Template ${event.data.templateVersion}, times in ${event.data.timeZone}`,
+      ];
+    case "rules-changed":
+      return [
+        `started a program whose rules are version ${event.data.to}, before them ${event.data.from}`,
+        event.data.stands.length ? `Stands signed by them: ${event.data.stands.join(", ")}` : "No gate stands signed by them",
       ];
     case "member-added":
       return [`gave ${event.data.name} the role ${event.data.role}`];

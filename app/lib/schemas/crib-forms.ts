@@ -1,6 +1,6 @@
 /** The crib's forms as a page sends them: text and dates in, the services' input out. Masses are typed in the person's units. Pure. */
 import { z } from "zod";
-import { commandIdSchema, idSchema, noteSchema, textSchema } from "#app/lib/schemas/act";
+import { commandIdSchema, freeTextSchema, idSchema, noteSchema, textSchema } from "#app/lib/schemas/act";
 import { addExtinguisherSchema, addToolSchema, dateSchema } from "#app/lib/schemas/crib";
 import { parseEntry, type UnitSystem } from "#app/lib/units/display";
 
@@ -21,6 +21,7 @@ export const goodCheckForm = z.object({
   tool: idSchema,
   on: date("Enter the day of the check."),
   due: date("Enter the last day in date, as the label or certificate says."),
+  certificate: freeTextSchema(80),
   note: noteSchema,
 });
 export const badCheckForm = z.object({
@@ -28,6 +29,12 @@ export const badCheckForm = z.object({
   commandId,
   tool: idSchema,
   on: date("Enter the day on which it was found."),
+  since: z
+    .string()
+    .default("")
+    .transform((text) => text.trim() || null)
+    .pipe(dateSchema.nullable()),
+  certificate: freeTextSchema(80),
   note: said("Say what was found, in a few words."),
 });
 export const addExtinguisherForm = (units: UnitSystem) =>
@@ -49,6 +56,8 @@ export const addExtinguisherForm = (units: UnitSystem) =>
         context.addIssue({ code: "custom", message: read.ok ? "Type the mass of agent on the label, above zero." : read.sentence });
         return z.NEVER;
       }),
+    rating: addExtinguisherSchema.shape.rating,
+    position: addExtinguisherSchema.shape.position,
   });
 const bottle = { commandId, extinguisher: idSchema };
 const lastDay = date("Enter the last day to which it is in date.");

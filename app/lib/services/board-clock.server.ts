@@ -3,6 +3,7 @@
 // Were this to stop, GO would be over all the same; the board derives that.
 import { newId } from "#app/lib/ids";
 import { log } from "#app/lib/log.server";
+import { applyRules } from "#app/lib/services/apply-rules.server";
 import { holdOverdue } from "#app/lib/services/hold-overdue.server";
 import { giveLeaseBack, takeLease } from "#app/lib/services/lease.server";
 import { remindRunsOut } from "#app/lib/services/remind-runs-out.server";
@@ -14,6 +15,8 @@ const NAME = "board-clock";
 
 /** What the clock does, with the words for the log, and how often, in rounds. */
 const WORK: { name: string; every: number; run: () => Promise<number> }[] = [
+  // Once a process: rules do not change while it runs.
+  { name: "records of installs under new rules", every: Number.POSITIVE_INFINITY, run: applyRules },
   { name: "GO ended by time", every: 1, run: holdOverdue },
   { name: "mails about what runs out", every: 20, run: remindRunsOut },
 ];
@@ -30,7 +33,7 @@ export function boardClock(me = newId()): BoardClock {
     if (!(await takeLease(NAME, me, LEASE))) return false;
     const now = round++;
     for (const { name, every, run } of WORK) {
-      if (now % every) continue;
+      if (every === Number.POSITIVE_INFINITY ? now > 0 : now % every) continue;
       try {
         const done = await run();
         if (done) log.info({ done }, name);

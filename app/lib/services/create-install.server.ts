@@ -11,6 +11,7 @@ import { rungs } from "#app/db/schema/rungs";
 import { users } from "#app/db/schema/users";
 import { values } from "#app/db/schema/values";
 import { now as clock } from "#app/lib/clock";
+import { RULES_VERSION } from "#app/lib/gates/rules-version";
 import { DEFAULT_SETTINGS } from "#app/lib/gates/snapshot";
 import { newId } from "#app/lib/ids";
 import { FIRST } from "#app/lib/record/chain";
@@ -92,6 +93,7 @@ export function createInstall(
         items: plain(rows.items),
         rungs: plain(rows.rungs),
         leftOut: plain(board.leftOut),
+        rulesVersion: RULES_VERSION,
       },
     });
     await writer.record(who, { type: "member-added", data: { member: person.id, name: person.name, role: "lead" } });

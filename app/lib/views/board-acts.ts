@@ -107,18 +107,21 @@ function workActs(e: Evaluation, me: Viewer): ActView[] {
     if (!gate || !next) return [];
     const name = e.facts.gates.get(id)?.name ?? "the gate";
     const label = gate.state === "lapsed" ? `Do ${name} again` : gate.done ? `Carry on with ${name}` : `Begin ${name}`;
-    const [closing] = openSystems(e, next);
-    if (closing) return [{ label: closing.act, note: `then ${next.key} ${next.words}`, href: closing.href }];
+    const own = nextOwn(e, id);
+    const [closing] = own ? openSystems(e, own) : [];
+    if (own && closing) return [{ label: closing.act, note: `then ${own.key} ${own.words}`, href: closing.href }];
     return [{ label, note: `Next: ${next.key} ${next.words}`, href: gateOf(install, next.gate, next.id) }];
   });
 }
 
-/**
- * The first item of a gate that somebody has to prove: not done, and everything that it follows stands. Where a step that it rests
- * on would not hold for work done now, that step.
- */
-export function nextItem(e: Evaluation, gate: string): Item | null {
+/** The first item of a gate that somebody has to prove: not done, and everything that it follows stands. */
+function nextOwn(e: Evaluation, gate: string): Item | null {
   const items = itemsIn(e.facts, gate).filter((i) => !isComputed(i) && ["to do", "lapsed"].includes(e.result.items[i.id]?.state ?? ""));
-  const next = items.find((i) => i.follows.every((f) => e.result.items[f]?.stands ?? true)) ?? items[0] ?? null;
-  return next && (stepsToRedoFirst(e, next.id)[0]?.step ?? next);
+  return items.find((i) => i.follows.every((f) => e.result.items[f]?.stands ?? true)) ?? items[0] ?? null;
+}
+
+/** That item; or, where a step that it rests on would not hold for work done now, the step. */
+export function nextItem(e: Evaluation, gate: string): Item | null {
+  const own = nextOwn(e, gate);
+  return own && (stepsToRedoFirst(e, own.id)[0]?.step ?? own);
 }

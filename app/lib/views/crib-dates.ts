@@ -31,6 +31,13 @@ export function dueView(name: string, ends: Instant | null, soon: number, now: I
   return { name, state: "due soon", word: left === 1 ? "last day" : `${left} days left`, until, share };
 }
 
+/** "12 days left", "last day", "past its date since 3 Nov 2026". @param ends as in `dueView`. */
+export function daysLeft(ends: Instant, now: Instant, timeZone: string): string {
+  if (ends <= now) return `past its date since ${dayText(ends, timeZone)}`;
+  const left = Math.max(1, Math.ceil((ends - now) / DAY));
+  return left === 1 ? "last day" : `${left} days left`;
+}
+
 const RANK: Record<DueState, number> = { out: 0, "due soon": 1, "in date": 2 };
 /** Of several dates the one that matters first. */
 export const worstOf = (dues: DueView[]): DueView | undefined =>

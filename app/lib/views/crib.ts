@@ -1,12 +1,15 @@
 /** The crib as its page shows it: tools and extinguishers, in date or not, and what hangs on each. Pure. */
 
+import { type CribDue, cribDues, toolEnds } from "#app/lib/gates/crib-dues";
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import { allItems, currentProof } from "#app/lib/gates/facts";
 import { mayEditCrib } from "#app/lib/gates/set-up-verdicts";
 import type { Extinguisher, Instant, Tool } from "#app/lib/gates/snapshot";
 import { count } from "#app/lib/gates/who";
 import { format, type UnitSystem } from "#app/lib/units/display";
-import { type DueState, type DueView, dateAfter, dueView, monthTicks, worstOf } from "#app/lib/views/crib-dates";
+import { type DueState, type DueView, dateAfter, daysLeft, dayText, dueView, monthTicks, worstOf } from "#app/lib/views/crib-dates";
+import { nameIn } from "#app/lib/views/places";
+import type { WhatLapses } from "#app/lib/views/what-lapses";
 
 export interface CribRow {
   id: string;
@@ -24,6 +27,10 @@ export interface CribRow {
 }
 
 export interface ToolRow extends CribRow {
+  /** Its newest check: day, certificate, who entered it, remark. Null = none. */
+  last: { says: string; photo: string | null } | null;
+  /** "its last good check, 1 Jun 2026": from when it is in doubt if found out of tolerance; null where it never had one. */
+  doubtFrom: string | null;
   /** Proofs that fall if it is found out of tolerance now: "OP10, FP4". Null = none. */
   reach: string | null;
 }
@@ -32,8 +39,36 @@ export interface BottleRow extends CribRow {
   withdrawn: boolean;
 }
 
+/** One date of the list of what runs out. */
+export interface DueRow {
+  key: string;
+  anchor: string;
+  name: string;
+  /** "calibration", "monthly look", "yearly service" */
+  what: string;
+  word: string;
+  until: string | null;
+  state: DueState;
+}
+
+/** By ids, from the records beside the snapshot. */
+export interface CribTold {
+  serials: Record<string, string>;
+  checks: Record<string, { certificate: string; photo: string | null; note: string; by: string }>;
+  bottles: Record<string, { rating: string; position: string }>;
+}
+
+/** What a bad check would undo, shown once before it is recorded. */
+export interface CheckShown {
+  form: string;
+  seen: string;
+  lapses: WhatLapses;
+}
+
 export interface CribView {
   state: string;
+  /** What runs out, out of date first, then the soonest. */
+  due: DueRow[];
   fill: number;
   tools: ToolRow[];
   bottles: BottleRow[];
@@ -54,15 +89,16 @@ const AGENTS: Record<Extinguisher["agent"], string> = {
 };
 export const AGENT_CHOICES = Object.entries(AGENTS).map(([value, label]) => ({ value, label }));
 
-export function cribView(e: Evaluation, member: string, units: UnitSystem, serials: Record<string, string>): CribView {
+export function cribView(e: Evaluation, member: string, units: UnitSystem, told: CribTold): CribView {
   const zone = e.snapshot.install.timeZone;
-  const tools = e.snapshot.tools.map((t) => toolRow(e, t, serials[t.id] ?? ""));
-  const bottles = e.snapshot.extinguishers.map((x) => bottleRow(e, x, units));
+  const tools = e.snapshot.tools.map((t) => toolRow(e, t, told));
+  const bottles = e.snapshot.extinguishers.map((x) => bottleRow(e, x, units, told));
   const rows = [...tools, ...bottles.filter((b) => !b.withdrawn)];
   const of = (state: DueState) => rows.filter((r) => r.state === state).length;
   const verdict = mayEditCrib(e, { member });
   return {
     state: rows.length ? stateWords(rows.length, of("out"), of("due soon")) : "no tool and no extinguisher yet",
+    due: cribDues(e.snapshot).map((d) => dueRow(e, d)),
     fill: rows.length ? (rows.length - of("out")) / rows.length : 0,
     tools,
     bottles,
@@ -78,16 +114,24 @@ const stateWords = (all: number, out: number, soon: number): string =>
     ? [out ? `${out} not in date` : "", soon ? `${soon} due soon` : "", `${all - out - soon} in date`].filter(Boolean).join(", ")
     : `all ${all} in date`;
 
+const WHAT: Record<CribDue["kind"], string> = { calibration: "calibration", look: "monthly look", service: "yearly service" };
+
+function dueRow(e: Evaluation, { kind, id, name, ends, bad }: CribDue): DueRow {
+  const zone = e.snapshot.install.timeZone;
+  const { state } = dueView(WHAT[kind], ends, SOON[kind], e.at, zone);
+  const row = { key: `${kind} ${id}`, anchor: anchorOfCrib(id), name, what: WHAT[kind], state };
+  if (ends === null) return { ...row, word: bad ? "out of tolerance" : "never done", until: null };
+  return { ...row, word: daysLeft(ends, e.at, zone), until: dayText(ends - 1, zone) };
+}
+
 export const anchorOfCrib = (id: string): string => `crib-${id}`;
 
 /** Days before the end from which a date is "due soon": time to send a wrench away, and to walk round with the monthly look. */
 const SOON = { calibration: 30, look: 7, service: 30 };
 
-function toolRow(e: Evaluation, tool: Tool, serial: string): ToolRow {
-  const newest = tool.checks.reduce<Instant | null>((at, c) => (at === null || c.at > at ? c.at : at), null);
-  const last = tool.checks.filter((c) => c.at === newest);
-  const bad = last.some((c) => !c.good);
-  const ends = last.length && !bad ? Math.min(...last.map((c) => c.due ?? 0)) : null;
+function toolRow(e: Evaluation, tool: Tool, told: CribTold): ToolRow {
+  const { ends, bad } = toolEnds(tool);
+  const serial = told.serials[tool.id];
   const due = dueView("calibration", ends, SOON.calibration, e.at, e.snapshot.install.timeZone);
   const word = bad ? "out of tolerance" : due.word === "never done" ? "no check" : due.word;
   const lastGood = tool.checks.filter((c) => c.good).reduce<Instant>((at, c) => Math.max(at, c.at), Number.NEGATIVE_INFINITY);
@@ -103,8 +147,26 @@ function toolRow(e: Evaluation, tool: Tool, serial: string): ToolRow {
     dues: [{ ...due, word }],
     hangs: toolHangs(e, tool.id, used),
     rev: String(tool.checks.length),
+    last: lastCheck(e, tool, told),
+    doubtFrom: Number.isFinite(lastGood) ? dayText(lastGood - 1, e.snapshot.install.timeZone) : null,
     reach: reach.length ? reach.join(", ") : null,
   };
+}
+
+/** Of several at one instant the one that was recorded last. */
+function lastCheck(e: Evaluation, tool: Tool, told: CribTold): ToolRow["last"] {
+  const last = tool.checks.reduce<Tool["checks"][number] | null>((newest, c) => (newest && newest.at > c.at ? newest : c), null);
+  if (!last) return null;
+  const { certificate = "", photo = null, note = "", by = "" } = told.checks[last.id] ?? {};
+  const day = dayText(last.at - 1, e.snapshot.install.timeZone);
+  const what = last.good ? `Checked ${day}` : `Found out of tolerance ${day}`;
+  const since = last.since === null ? "" : `, in doubt since ${dayText(last.since, e.snapshot.install.timeZone)}`;
+  const says = [
+    `${what}${since}${by ? `, entered by ${nameIn(e.snapshot, by)}` : ""}.`,
+    certificate ? `Certificate ${certificate}.` : "",
+    note && !/[.!?]$/.test(note) ? `${note}.` : note,
+  ];
+  return { says: says.filter(Boolean).join(" "), photo };
 }
 
 interface Used {
@@ -132,7 +194,8 @@ function toolHangs(e: Evaluation, tool: string, used: Used[]): string {
   return fell.length ? `${words} ${count(fell.length, "proof")} to do again: ${fell.map((u) => u.key).join(", ")}.` : words;
 }
 
-function bottleRow(e: Evaluation, x: Extinguisher, units: UnitSystem): BottleRow {
+function bottleRow(e: Evaluation, x: Extinguisher, units: UnitSystem, told: CribTold): BottleRow {
+  const { rating = "", position = "" } = told.bottles[x.id] ?? {};
   const zone = e.snapshot.install.timeZone;
   const dues = x.withdrawn
     ? []
@@ -142,7 +205,14 @@ function bottleRow(e: Evaluation, x: Extinguisher, units: UnitSystem): BottleRow
     id: x.id,
     anchor: anchorOfCrib(x.id),
     name: x.name,
-    detail: `${AGENTS[x.agent]}, ${format("mass", x.charge, units).text}, ${x.classB ? "class B" : "not class B"}`,
+    detail: [
+      AGENTS[x.agent],
+      format("mass", x.charge, units).text,
+      rating ? `rated ${rating}` : x.classB ? "class B" : "not class B",
+      position,
+    ]
+      .filter(Boolean)
+      .join(", "),
     state: worst?.state ?? "out",
     word: x.withdrawn ? "withdrawn" : (worst?.word ?? ""),
     dues,

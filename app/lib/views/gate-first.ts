@@ -1,17 +1,16 @@
 /** What comes before an item that is to be proved: a step that would not hold now, a system that is still open. Pure. */
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import { allItems } from "#app/lib/gates/facts";
+import { withoutStop } from "#app/lib/gates/proofs";
 import type { Item } from "#app/lib/gates/snapshot";
-import { quoted, type StepFault, stepsToRedoFirst, windowHours } from "#app/lib/gates/steps";
+import { type StepFault, stepsToRedoFirst, windowHours } from "#app/lib/gates/steps";
 import { inSentence } from "#app/lib/gates/who";
 import { isComputed } from "#app/lib/gates/work-facts";
 import { anchorOf, boardOf, gateOf, rowAnchor } from "#app/lib/views/places";
 import { systemWords } from "#app/lib/views/systems";
 
 export interface First {
-  /** On the link: "FP1 Outdoors, gear off". */
-  label: string;
-  /** On the foot: "Close: fuel, forward of the firewall". */
+  /** On the link: "Do again first: FP1", "Close: fuel, forward of the firewall". */
   act: string;
   href: string;
   sentence: string;
@@ -24,14 +23,22 @@ export function firstOf(e: Evaluation, item: Item): First[] {
   return [...openSystems(e, item), ...stepsFirst(e, item)];
 }
 
-/** Steps that stand and are to be done again first, each with the keys of the items that ask for it. */
-export function wantedFirst(e: Evaluation): ReadonlyMap<string, string[]> {
-  const wanted = new Map<string, string[]>();
+/** Why a step that stands is wanted again. */
+export interface Wanted {
+  keys: string[];
+  /** "it was done more than 12 h ago" */
+  why: string;
+}
+
+/** Steps that are to be done again first, each with the keys of the items that ask for it. */
+export function wantedFirst(e: Evaluation): ReadonlyMap<string, Wanted> {
+  const wanted = new Map<string, Wanted>();
   for (const item of allItems(e.facts)) {
     if (!item.follows.length || openSystems(e, item).length) continue;
     const result = e.result.items[item.id];
     if (!result || result.stands || result.state === "second eyes" || result.state === "not applicable") continue;
-    for (const { step } of stepsToRedoFirst(e, item.id)) wanted.set(step.id, [...(wanted.get(step.id) ?? []), item.key]);
+    for (const { step, fault } of stepsToRedoFirst(e, item.id))
+      wanted.set(step.id, { keys: [...(wanted.get(step.id)?.keys ?? []), item.key], why: faultWords(e, fault) });
   }
   return wanted;
 }
@@ -43,7 +50,8 @@ function stepsFirst(e: Evaluation, item: Item): First[] {
     if (!begun && !e.result.items[step.id]?.stands) return [];
     const href = step.gate === item.gate ? `#${anchorOf(step.id)}` : gateOf(e.snapshot.install.id, step.gate, step.id);
     const sentence = `Do ${step.key} first: ${faultWords(e, fault)}, and a proof of this given now would lapse at once.`;
-    return [{ label: `${step.key} ${quoted(step)}`, act: `Do again first: ${step.key}`, href, sentence }];
+    const act = `Do again first: ${step.key}`;
+    return [{ act, href, sentence }];
   });
 }
 
@@ -73,7 +81,7 @@ export function openSystems(e: Evaluation, item: Item): First[] {
   return [...open.values()].map((o) => {
     const act = `Close: ${inSentence(systemWords(o.systems))}`;
     const href = `${boardOf(e.snapshot.install.id)}/openings#${rowAnchor("openings", o.id)}`;
-    const sentence = `Open since ${e.facts.when(o.opened)}: ${o.reason.replace(/\.$/, "")}. Close it first: a proof of this given now would not count.`;
-    return { label: act, act, href, sentence };
+    const sentence = `Open since ${e.facts.when(o.opened)}: ${withoutStop(o.reason)}. Close it first: a proof of this given now would not count.`;
+    return { act, href, sentence };
   });
 }

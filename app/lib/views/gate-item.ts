@@ -12,7 +12,7 @@ import type { Item, Role } from "#app/lib/gates/snapshot";
 import { mayAccept, mayConfirm, mayKeep, mayProve, mayWithdrawProof } from "#app/lib/gates/verdicts";
 import { isComputed } from "#app/lib/gates/work-facts";
 import type { UnitSystem } from "#app/lib/units/display";
-import { type First, firstOf } from "#app/lib/views/gate-first";
+import { type First, firstOf, type Wanted } from "#app/lib/views/gate-first";
 import { type PartView, partViews } from "#app/lib/views/gate-parts";
 import { type ProofView, proofView } from "#app/lib/views/gate-proof";
 import { anchorOf, listOf, whoClears } from "#app/lib/views/places";
@@ -52,7 +52,7 @@ export interface ItemView {
   /** What comes before it: were it proved now, it would lapse at once. */
   first: First[];
   /** A step that is done, and is wanted again before the items that rest on it: why. */
-  wanted: string | null;
+  wanted: { note: string; sentence: string } | null;
   prove: Ask & { roles: Role[]; told: boolean; lateAllowed: boolean; numberMissing: boolean };
   failed: Ask;
   na: Ask;
@@ -75,8 +75,8 @@ export interface Reader {
 
 const ask = (v: Verdict): Ask => (v.ok ? { ok: true, reason: "" } : { ok: false, reason: v.blockers[0]?.sentence ?? "" });
 
-/** @param wantedBy keys of the items before which this step is to be done again. */
-export function itemView(e: Evaluation, item: Item, me: Reader, wantedBy: string[] = []): ItemView {
+/** @param wantedBy why this step is to be done again before others. */
+export function itemView(e: Evaluation, item: Item, me: Reader, wantedBy?: Wanted): ItemView {
   const result = e.result.items[item.id];
   if (!result) throw new Error("An item that the board does not know");
   const proof = currentProof(e.facts, item.id);
@@ -85,7 +85,7 @@ export function itemView(e: Evaluation, item: Item, me: Reader, wantedBy: string
   const prove = proveOf(e, item, me, parts);
   const following = item.follows.every((f) => e.result.items[f]?.stands ?? true);
   const first = firstOf(e, item);
-  const wanted = result.stands && wantedBy.length > 0;
+  const wanted = result.stands && wantedBy !== undefined;
   const asked = !result.stands && result.state !== "second eyes" && following && first.length === 0;
   const open = !computed && prove.ok && (asked || wanted) && !waitsForAcceptance(result.blockers);
   const newest = [...proofsOf(e.facts, item.id)].reverse();
@@ -116,9 +116,7 @@ export function itemView(e: Evaluation, item: Item, me: Reader, wantedBy: string
     tickOnly: parts.every((p) => p.kind === "tick" && !p.missing),
     open,
     first,
-    wanted: wanted
-      ? `${listOf(wantedBy)} ${wantedBy.length === 1 ? "rests" : "rest"} on it. Do this again first, then ${listOf(wantedBy)}.`
-      : null,
+    wanted: wanted ? wantedWords(wantedBy) : null,
     prove,
     failed: ask(mayProve(e, { item: item.id, member: me.id, as: me.roles[0] ?? "crew", state: "failed", late: false })),
     na: ask(mayProve(e, { item: item.id, member: me.id, as: prove.roles[0] ?? "builder", state: "na", late: false })),
@@ -131,6 +129,11 @@ export function itemView(e: Evaluation, item: Item, me: Reader, wantedBy: string
     record: recordLinks(e, { kind: "item", id: item.id }),
     offersLooseEnd: item.offersLooseEnd !== null,
   };
+}
+
+function wantedWords({ keys, why }: Wanted): NonNullable<ItemView["wanted"]> {
+  const note = `${listOf(keys)} ${keys.length === 1 ? "rests" : "rest"} on it`;
+  return { note, sentence: `Do this again first: ${why}, and ${note}.` };
 }
 
 /** Under the nut, in the row's own words: nobody does a computed item, and of two people one was there. */

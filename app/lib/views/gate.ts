@@ -244,7 +244,7 @@ function nextOf(items: ItemView[]): FootView["act"] {
   const waiting = left.find((i) => i.confirm?.ok || i.accept?.ok);
   if (waiting) return act(waiting.confirm?.ok ? "Look and confirm" : "Accept or not", waiting);
   for (const i of items) {
-    if (i.wanted && i.open) return act("Do again first", i, i.wanted.replace(/\..*$/, ""));
+    if (i.wanted && i.open) return act("Do again first", i, i.wanted.note);
     if (!i.reasons.length) continue;
     const [first] = i.first.filter((f) => !f.href.startsWith("#"));
     if (first) return { label: first.act, note: `before ${i.key}`, href: first.href };

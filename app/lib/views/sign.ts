@@ -91,7 +91,7 @@ function sentenceOf(e: Evaluation, gate: string, covers: Cover[], as: SigningRol
   const people = anyOf([...new Set(proofs.map((p) => nameIn(e.snapshot, p.did)))]).replace(/ or (?=[^,]*$)/, " and ");
   const newest = proofs.length ? Math.max(...proofs.map((p) => p.counts)) : null;
   const by = workedOut(e, gate);
-  const rest = by ? `, and ${by} that the board works out` : "";
+  const rest = by ? `; and ${by} that the board works out` : "";
   const what = `${count(done, "item")} done${na ? `, ${na} not applicable` : ""}, by ${people || "nobody"}${newest === null ? "" : `, the last on ${e.facts.when(newest)}`}${rest}`;
   return as === "builder"
     ? `did this work or saw it done: ${what}.`

@@ -8,7 +8,7 @@ import { rpmText } from "#app/lib/gates/clearance";
 import { type Evaluation, evaluate, withOpening } from "#app/lib/gates/evaluate";
 import { itemsIn } from "#app/lib/gates/facts";
 import type { ItemResult } from "#app/lib/gates/result";
-import type { Gate, LooseEnd, Opening, Snapshot } from "#app/lib/gates/snapshot";
+import type { Gate, Instant, LooseEnd, Opening, Snapshot } from "#app/lib/gates/snapshot";
 import { quoted } from "#app/lib/gates/steps";
 import { count } from "#app/lib/gates/who";
 import { isComputed } from "#app/lib/gates/work-facts";
@@ -123,6 +123,13 @@ export function lapsesByLooseEnd(e: Evaluation, me: Viewer, end: Pick<LooseEnd, 
   const withEnd: Snapshot = { ...e.snapshot, looseEnds: [...e.snapshot.looseEnds, made] };
   const next = asked ? withEnd : withOpening(withEnd, draftOpening(e, me, [end.system], true));
   return whatLapses(e, evaluate(next, e.at));
+}
+
+/** What this tool's having been found out of tolerance would undo. @param check instants of the finding and of the first doubt. */
+export function lapsesByBadCheck(e: Evaluation, tool: string, check: { at: Instant; since: Instant | null }): WhatLapses {
+  const made = { id: "not-recorded", good: false, due: null, ...check };
+  const tools = e.snapshot.tools.map((t) => (t.id === tool ? { ...t, checks: [...t.checks, made] } : t));
+  return whatLapses(e, evaluate({ ...e.snapshot, tools }, e.at));
 }
 
 // ---------------------------------------------------------------- in words

@@ -18,7 +18,7 @@ export interface MailPage {
   /** "N0417B Wren, run 1, First start" */
   registration: string;
   what: string;
-  word: "GO" | "No-go" | "HOLD" | "SCRUB" | "Runs out";
+  word: "GO" | "No-go" | "HOLD" | "SCRUB" | "Runs out" | "Due soon";
   /** How far the pipe under the word is filled, 0 to 1, and whether a spade stands there. */
   pipe: { fill: number; spade: boolean };
   /** Shown by mail programs beside the subject. */

@@ -34,6 +34,19 @@ export function dayAndTime(at: number, timeZone: string): string {
   return `${weekday.format(at)} ${when(at, timeZone)}`;
 }
 
+const dates = new Map<string, Intl.DateTimeFormat>();
+
+/** @returns the day at the install that holds the instant: "Sat 5 Dec 2026". Throws RangeError on an unknown zone. */
+export function dayOnly(at: number, timeZone: string): string {
+  let date = dates.get(timeZone);
+  if (!date) {
+    date = new Intl.DateTimeFormat("en-GB", { weekday: "short", day: "numeric", month: "short", year: "numeric", timeZone });
+    dates.set(timeZone, date);
+  }
+  const part = Object.fromEntries(date.formatToParts(at).map((p) => [p.type, p.value]));
+  return `${part.weekday} ${part.day} ${part.month} ${part.year}`;
+}
+
 /** @returns the instant at the install and in UTC: "Sat 5 Dec 09:30 CET (08:30 UTC)", with the date where that differs. */
 export function timeInBoth(at: number, timeZone: string): string {
   const local = dayAndTime(at, timeZone);
