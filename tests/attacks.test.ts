@@ -22,7 +22,7 @@ import { addTool } from "#app/lib/services/crib.server";
 import { planRun } from "#app/lib/services/plan-run.server";
 import { raiseFinding } from "#app/lib/services/raise-finding.server";
 import { imageType } from "#app/lib/storage/image-type";
-import { stripMetadata } from "#app/lib/storage/strip-metadata";
+import { rewritePicture } from "#app/lib/storage/picture.server";
 import { toSI } from "#app/lib/units/convert";
 import { buildIfStale } from "../scripts/prepare.mjs";
 import { startInstance } from "../scripts/running.mjs";
@@ -203,10 +203,10 @@ describe("ids of another install in the forms of one's own", () => {
 });
 
 describe("a picture", () => {
-  it("loses what stands behind its end: another picture with its place in it, or anything else", () => {
-    const clean = stripMetadata(Buffer.concat([jpeg(), jpeg("46.9 N 7.4 E"), Buffer.from("<script>alert(1)</script>")]), "image/jpeg");
-    const bytes = Buffer.from(clean ?? []);
-    expect(imageType(bytes)).toMatchObject({ type: "image/jpeg", width: 2, height: 1 });
+  it("loses what stands behind its end: another picture with its place in it, or anything else", async () => {
+    const sent = Buffer.concat([jpeg(), jpeg("46.9 N 7.4 E"), Buffer.from("<script>alert(1)</script>")]);
+    const bytes = Buffer.from((await rewritePicture(sent, "image/jpeg", 1000))?.bytes ?? []);
+    expect(imageType(bytes)).toMatchObject({ type: "image/jpeg" });
     expect(bytes.includes("46.9 N")).toBe(false);
     expect(bytes.includes("<script>")).toBe(false);
   });

@@ -23,6 +23,11 @@ const Environment = z.object({
   SMTP_SECURE: z.enum(["0", "1"]).default("0"),
   SMTP_USER: z.string().min(1).optional(),
   SMTP_PASSWORD: z.string().min(1).optional(),
+  S3_BUCKET: z.string().min(3).optional(),
+  S3_REGION: z.string().min(1).default("us-east-1"),
+  S3_ENDPOINT: z.url({ protocol: /^https?$/, error: "S3_ENDPOINT must be a web address such as https://s3.example" }).optional(),
+  S3_ACCESS_KEY_ID: z.string().min(1).optional(),
+  S3_SECRET_ACCESS_KEY: z.string().min(1).optional(),
   MAIL_FROM: z.string().min(3).default("Bladecount <board@bladecount.example>"),
 });
 
@@ -37,6 +42,8 @@ export function readEnv(source: Record<string, string | undefined>) {
   }
   const e = parsed.data;
   const dataFolder = resolve(e.DATA_DIR);
+  if (e.S3_BUCKET && !(e.S3_ACCESS_KEY_ID && e.S3_SECRET_ACCESS_KEY))
+    throw new Error("Settings cannot be used. S3_BUCKET needs S3_ACCESS_KEY_ID and S3_SECRET_ACCESS_KEY beside it");
   const origin = e.APP_ORIGIN ? new URL(e.APP_ORIGIN).origin : undefined;
   return Object.freeze({
     mode: e.NODE_ENV,
@@ -55,6 +62,16 @@ export function readEnv(source: Record<string, string | undefined>) {
     logLevel: e.LOG_LEVEL ?? (e.NODE_ENV === "test" ? "silent" : "info"),
     smtp: { host: e.SMTP_HOST, port: e.SMTP_PORT, secure: e.SMTP_SECURE === "1", user: e.SMTP_USER, password: e.SMTP_PASSWORD },
     mailFrom: e.MAIL_FROM,
+    /** Where photos and logs are kept; undefined = in the data folder. */
+    bucket: e.S3_BUCKET
+      ? {
+          bucket: e.S3_BUCKET,
+          region: e.S3_REGION,
+          endpoint: e.S3_ENDPOINT,
+          accessKeyId: e.S3_ACCESS_KEY_ID ?? "",
+          secretAccessKey: e.S3_SECRET_ACCESS_KEY ?? "",
+        }
+      : undefined,
     /** bcrypt's cost. 12 takes about 0.25 s; tests hash often and protect nobody. */
     hashCost: e.NODE_ENV === "test" ? 4 : 12,
   });

@@ -2,7 +2,7 @@ import { db } from "#app/db/client.server";
 import { fileFor } from "#app/db/queries/files.server";
 import { actorOf } from "#app/lib/auth/actor.server";
 import { requireUser } from "#app/lib/auth/guards.server";
-import { readBytes } from "#app/lib/storage/local.server";
+import { readBytes, readThumb } from "#app/lib/storage/files.server";
 import type { Route } from "./+types/files.$fileId";
 
 export const middleware: Route.MiddlewareFunction[] = [requireUser];
@@ -18,17 +18,19 @@ export async function loader({ request, params, context }: Route.LoaderArgs) {
       status: 404,
       headers: { "Content-Type": "text/plain; charset=utf-8" },
     });
-  const tag = `"${file.hash}"`;
+  // A small copy for lists: `?small`.
+  const small = new URL(request.url).searchParams.has("small");
+  const tag = `"${file.hash}${small ? "-small" : ""}"`;
   const headers = new Headers({
     ETag: tag,
     "Cache-Control": "private, max-age=86400, immutable",
     Vary: "Cookie",
-    "Content-Type": file.type,
-    "Content-Disposition": `inline; filename="photo-${file.id}.${ending}"`,
+    "Content-Type": small ? "image/webp" : file.type,
+    "Content-Disposition": `inline; filename="photo-${file.id}.${small ? "webp" : ending}"`,
     "Content-Security-Policy": "default-src 'none'; sandbox",
   });
   if (request.headers.get("If-None-Match") === tag) return new Response(null, { status: 304, headers });
-  const bytes = await readBytes(file.hash);
+  const bytes = await (small ? readThumb(file.hash) : readBytes(file.hash));
   headers.set("Content-Length", String(bytes.length));
   return new Response(new Uint8Array(bytes), { headers });
 }

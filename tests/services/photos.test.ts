@@ -1,12 +1,15 @@
 import { createHash } from "node:crypto";
+import sharp from "sharp";
 import { afterAll, beforeAll, describe, expect, it, vi } from "vitest";
 import { db } from "#app/db/client.server";
 import { fileFor } from "#app/db/queries/files.server";
+import { now } from "#app/lib/clock";
 import { PHOTO_LIMITS, storePhoto } from "#app/lib/services/store-photo.server";
+import { sweepFiles } from "#app/lib/services/sweep-files.server";
+import { keepBytes, readBytes, readThumb } from "#app/lib/storage/files.server";
 import { imageType } from "#app/lib/storage/image-type";
-import { readBytes } from "#app/lib/storage/local.server";
-import { stripMetadata } from "#app/lib/storage/strip-metadata";
-import { jpeg, png } from "../support/picture";
+import { rewritePicture, thumbnailOf } from "#app/lib/storage/picture.server";
+import { jpeg, png, webp } from "../support/picture";
 import { value, type Workshop, workshop } from "../support/workshop";
 
 // Each test works a whole install through its services.
@@ -28,7 +31,7 @@ describe("a photo", () => {
     const bytes = await readBytes(row?.hash ?? "");
     expect(createHash("sha256").update(bytes).digest("hex")).toBe(row?.hash);
     expect(bytes.length).toBe(row?.size);
-    expect(bytes.includes("47.1 N")).toBe(false);
+    expect(Buffer.from(bytes).includes("47.1 N")).toBe(false);
     expect(await fileFor(db(), file, "olga")).toBeNull();
   });
 
@@ -60,81 +63,59 @@ function huge(): Buffer {
   return bytes;
 }
 
-describe("metadata", () => {
-  it("goes from a JPEG, but for how the picture is turned", () => {
-    const before = jpeg();
-    expect(imageType(before)).toEqual({ type: "image/jpeg", width: 2, height: 1 });
-    const after = Buffer.from(stripMetadata(before, "image/jpeg") ?? []);
-    expect(imageType(after)).toEqual({ type: "image/jpeg", width: 2, height: 1 });
-    expect(after.includes("47.1 N")).toBe(false);
-    expect(after.includes("JFIF")).toBe(true);
-    // Exif 2.32, 4.6.4: tag 0x0112, type SHORT, one value, 6 = turned a quarter clockwise.
-    expect(after.includes(Buffer.from([0x01, 0x12, 0, 3, 0, 0, 0, 1, 0, 6]))).toBe(true);
-    expect(after.subarray(-4)).toEqual(before.subarray(-4));
+describe("a picture written anew", () => {
+  const PIXELS = PHOTO_LIMITS.pixels;
+  const places = (bytes: Uint8Array | undefined) => {
+    const text = Buffer.from(bytes ?? []).toString("latin1");
+    return ["47.1 N", "46.9 N", "Exif", "<script>"].filter((word) => text.includes(word));
+  };
+
+  it("has no place and no device in it, and is turned as the camera was held", async () => {
+    expect(places(jpeg())).toEqual(["47.1 N", "Exif"]);
+    const after = await rewritePicture(jpeg(), "image/jpeg", PIXELS);
+    expect(imageType(jpeg())).toMatchObject({ width: 2, height: 1 });
+    expect(after).toMatchObject({ type: "image/jpeg", width: 1, height: 2 });
+    expect(imageType(after?.bytes ?? new Uint8Array())).toMatchObject({ type: "image/jpeg", width: 1, height: 2 });
+    expect(places(after?.bytes)).toEqual([]);
   });
 
-  it("goes from a WebP, whose header no longer announces it", () => {
-    const before = webp([part("EXIF", [1, 2, 3]), part("XMP ", [4, 5])]);
-    expect(imageType(before)).toEqual({ type: "image/webp", width: 2, height: 1 });
-    const after = Buffer.from(stripMetadata(before, "image/webp") ?? []);
-    expect(after.includes("EXIF") || after.includes("XMP ")).toBe(false);
-    expect(after.readUInt32LE(4)).toBe(after.length - 8);
-    expect(after[20]).toBe(0);
-    expect(imageType(after)).toEqual({ type: "image/webp", width: 2, height: 1 });
-  });
-
-  it("goes from between the scans of a JPEG, past fill bytes, and from behind its end", () => {
-    const whole = jpeg();
-    const scan = whole.subarray(whole.length - 14, whole.length - 2);
-    // A marker in coded data is stuffed (FF 00) or a restart (FF D0 to D7): T.81 B.1.1.5 and B.2.1.
-    const coded = Buffer.from([1, 0xff, 0x00, 2, 0xff, 0xd3, 3]);
-    const said = (marker: number) => Buffer.concat([Buffer.from([0xff, 0xff, marker, 0, 10]), Buffer.from("46.9 N 7")]);
-    const before = Buffer.concat([
-      ...[whole.subarray(0, whole.length - 2), coded, said(0xfe), said(0xe1), said(0xe2), scan, coded],
-      ...[Buffer.from([0xff, 0xff, 0xff, 0xd9]), jpeg("46.9 N"), Buffer.from("<script>")],
-    ]);
-    const after = Buffer.from(stripMetadata(before, "image/jpeg") ?? []);
-    expect(after.includes("46.9 N") || after.includes("47.1 N") || after.includes("<script>")).toBe(false);
-    const [fill, end] = [Buffer.from([0xff]), Buffer.from([0xff, 0xd9])];
-    const scans = Buffer.concat([scan, coded, fill, scan, coded, fill, fill, end]);
-    expect(after.subarray(-scans.length)).toEqual(scans);
-    expect(imageType(after)).toEqual({ type: "image/jpeg", width: 2, height: 1 });
-  });
-
-  it.each<[string, Buffer, "image/png" | "image/webp"]>([
+  it.each([
+    ["JPEG", jpeg(), "image/jpeg"],
     ["PNG", png(), "image/png"],
-    ["WebP", webp([]), "image/webp"],
-  ])("goes from behind the end of a %s, and with parts that no picture is drawn from", (_, picture, type) => {
-    const clean = Buffer.from(stripMetadata(picture, type) ?? []);
-    expect(clean.length).toBeGreaterThan(0);
-    expect(stripMetadata(Buffer.concat([picture, Buffer.from("46.9 N <script>")]), type)).toEqual(new Uint8Array(clean));
-    expect(stripMetadata(withOwnPart(picture, type), type)).toEqual(new Uint8Array(clean));
+    ["WebP", webp, "image/webp"],
+  ] as const)("of kind %s has nothing behind its end, whatever was sent there", async (_, given, type) => {
+    const more = Buffer.concat([given, jpeg("46.9 N"), Buffer.from("<script>alert(1)</script>")]);
+    const [clean, cut] = await Promise.all([rewritePicture(given, type, PIXELS), rewritePicture(more, type, PIXELS)]);
+    expect(places(cut?.bytes)).toEqual([]);
+    expect(cut?.bytes).toEqual(clean?.bytes);
   });
 
-  it("of a damaged picture is no picture", () => {
-    expect(stripMetadata(png().subarray(0, 60), "image/png")).toBeNull();
-    expect(stripMetadata(jpeg().subarray(0, 30), "image/jpeg")).toBeNull();
+  it("of a damaged file is none", async () => {
+    expect(await rewritePicture(png().subarray(0, 60), "image/png", PIXELS)).toBeNull();
+    expect(await rewritePicture(jpeg().subarray(0, 90), "image/jpeg", PIXELS)).toBeNull();
+  });
+
+  it("has a small copy for lists, no longer than 480 px", async () => {
+    const wide = await sharp({ create: { width: 1200, height: 300, channels: 3, background: "#777" } })
+      .png()
+      .toBuffer();
+    expect(imageType(await thumbnailOf(wide))).toEqual({ type: "image/webp", width: 480, height: 120 });
   });
 });
 
-const part = (kind: string, data: number[]): Buffer =>
-  Buffer.concat([Buffer.from(kind, "latin1"), u32(data.length), Buffer.from(data), Buffer.alloc(data.length % 2)]);
-
-/** A WebP of 2 by 1 pixels with `more` behind its picture. */
-function webp(more: Buffer[]): Buffer {
-  const body = Buffer.concat([part("VP8X", [0x0c, 0, 0, 0, 1, 0, 0, 0, 0, 0]), part("VP8L", [0x2f, 0, 0, 0, 0]), ...more]);
-  return Buffer.concat([Buffer.from("RIFF"), u32(body.length + 4), Buffer.from("WEBP"), body]);
-}
-
-/** The picture with a part of somebody's own making inside it. */
-function withOwnPart(picture: Buffer, type: "image/png" | "image/webp"): Buffer {
-  if (type === "image/webp") return webp([part("GPSx", [...Buffer.from("46.9 N")])]);
-  const own = Buffer.concat([Buffer.from([0, 0, 0, 6]), Buffer.from("gpSx46.9 N"), Buffer.alloc(4)]);
-  return Buffer.concat([picture.subarray(0, 33), own, picture.subarray(33)]);
-}
-
-function u32(n: number): Buffer {
-  const bytes = Buffer.alloc(4);
-  bytes.writeUInt32LE(n);
-  return bytes;
-}
+describe("files that no row names", () => {
+  it("go after a day, and those of the record stay", async () => {
+    const { file } = value(await storePhoto(w.act("bea"), { bytes: png(77), name: "kept.png" }));
+    const row = await fileFor(db(), file, "bea");
+    const lost = await keepBytes(Buffer.from("left by a crash"), "image/png");
+    await readThumb(row?.hash ?? "");
+    // The clock of the files is the disk's own.
+    w.clock.add(Date.now() - now());
+    expect(await sweepFiles()).toBe(0);
+    w.clock.add(25 * 3600_000);
+    expect(await sweepFiles()).toBeGreaterThan(0);
+    await expect(readBytes(lost)).rejects.toThrow("missing");
+    expect((await readBytes(row?.hash ?? "")).length).toBe(row?.size);
+    expect((await readThumb(row?.hash ?? "")).length).toBeGreaterThan(0);
+  });
+});

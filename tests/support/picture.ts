@@ -1,5 +1,6 @@
-// Tiny pictures, byte by byte: the smallest that their formats allow, with what a camera writes about place and device.
+// Tiny pictures with what a camera writes about place and device.
 import { crc32, deflateSync } from "node:zlib";
+import sharp from "sharp";
 
 function chunk(kind: string, data: Uint8Array): Buffer {
   const body = Buffer.concat([Buffer.from(kind, "latin1"), data]);
@@ -22,19 +23,21 @@ export function png(shade = 0, comment = "taken at 47.1 N 8.5 E"): Buffer {
   ]);
 }
 
-/** The head of a JPEG of 2 by 1 pixels, turned by a quarter (orientation 6), with a place in its Exif. Its picture data is not real. */
+const plain = await sharp({ create: { width: 2, height: 1, channels: 3, background: "#884422" } })
+  .jpeg()
+  .toBuffer();
+
+/** A JPEG of 2 by 1 pixels, turned by a quarter (orientation 6), with a place in its Exif and in a comment. */
 export function jpeg(place = "47.1 N 8.5 E"): Buffer {
   const tiff = Buffer.from([0x49, 0x49, 42, 0, 8, 0, 0, 0, 1, 0, 0x12, 0x01, 3, 0, 1, 0, 0, 0, 6, 0, 0, 0, 0, 0, 0, 0]);
   const exif = Buffer.concat([Buffer.from("Exif\0\0", "latin1"), tiff, Buffer.from(place, "latin1")]);
   const segment = (marker: number, data: Buffer) =>
     Buffer.concat([Buffer.from([0xff, marker, (data.length + 2) >> 8, (data.length + 2) & 255]), data]);
-  return Buffer.concat([
-    Buffer.from([0xff, 0xd8]),
-    segment(0xe0, Buffer.from("JFIF\0\x01\x01\0\0\x01\0\x01\0\0", "latin1")),
-    segment(0xe1, exif),
-    segment(0xfe, Buffer.from(place, "latin1")),
-    segment(0xc0, Buffer.from([8, 0, 1, 0, 2, 1, 1, 0x11, 0])),
-    segment(0xda, Buffer.from([1, 1, 0, 0, 63, 0])),
-    Buffer.from([0x12, 0x34, 0xff, 0xd9]),
-  ]);
+  return Buffer.concat([plain.subarray(0, 2), segment(0xe1, exif), segment(0xfe, Buffer.from(place, "latin1")), plain.subarray(2)]);
 }
+
+/** A WebP of 2 by 1 pixels with a place in its Exif. */
+export const webp: Buffer = await sharp({ create: { width: 2, height: 1, channels: 3, background: "#224488" } })
+  .withExif({ IFD0: { ImageDescription: "46.9 N 7.4 E" } })
+  .webp()
+  .toBuffer();

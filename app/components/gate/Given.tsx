@@ -46,7 +46,7 @@ function GivenPart({ one }: { one: GivenView }) {
         <div className="given-photos">
           {one.files.map((file, i) => (
             <a key={file} href={`/files/${file}`}>
-              <img src={`/files/${file}`} alt={`${one.of}, ${i + 1} of ${one.files.length}`} width="132" height="88" loading="lazy" />
+              <img src={`/files/${file}?small`} alt={`${one.of}, ${i + 1} of ${one.files.length}`} width="132" height="88" loading="lazy" />
             </a>
           ))}
         </div>

@@ -7,7 +7,7 @@ export function Photos({ files, of }: { files: string[]; of: string }) {
         <li key={file}>
           <a href={`/files/${file}`} className="block">
             <img
-              src={`/files/${file}`}
+              src={`/files/${file}?small`}
               alt={files.length > 1 ? `${of}, photo ${n + 1} of ${files.length}` : of}
               width="150"
               height="100"

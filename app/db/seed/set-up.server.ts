@@ -55,14 +55,15 @@ export function said(word: MakersWord) {
 export async function stockCrib({ data, act, clock, board }: Crew): Promise<void> {
   const zone = (await board()).snapshot.install.timeZone;
   const due = (days: number) => dateAfter(clock.present, days, zone);
-  const { tool } = value(await addTool(act(data.lead), data.wrench));
+  const { certificate, ...wrench } = data.wrench;
+  const { tool } = value(await addTool(act(data.lead), wrench));
   value(
     await recordToolCheck(act(data.lead), {
       tool,
       on: null,
       good: true,
       due: due(240),
-      certificate: data.wrench.certificate,
+      certificate,
       note: "Checked against the club's beam wrench",
     }),
   );

@@ -7,6 +7,7 @@ import { applyRules } from "#app/lib/services/apply-rules.server";
 import { holdOverdue } from "#app/lib/services/hold-overdue.server";
 import { giveLeaseBack, takeLease } from "#app/lib/services/lease.server";
 import { remindRunsOut } from "#app/lib/services/remind-runs-out.server";
+import { sweepFiles } from "#app/lib/services/sweep-files.server";
 
 const EVERY = 15_000;
 /** A process that dies is replaced after this long. */
@@ -19,6 +20,7 @@ const WORK: { name: string; every: number; run: () => Promise<number> }[] = [
   { name: "records of installs under new rules", every: Number.POSITIVE_INFINITY, run: applyRules },
   { name: "GO ended by time", every: 1, run: holdOverdue },
   { name: "mails about what runs out", every: 20, run: remindRunsOut },
+  { name: "files that no record names, removed", every: 240, run: sweepFiles },
 ];
 
 export interface BoardClock {

@@ -1,44 +1,52 @@
-// Files in the data folder, each under the SHA-256 of its bytes: the same bytes are kept once, and a name can never be chosen
-// by whoever sends them. Written beside, flushed, then renamed, so that a file is whole or not there.
-import { createHash, randomBytes } from "node:crypto";
-import { access, mkdir, open, readFile, rename } from "node:fs/promises";
-import { join } from "node:path";
-import { env } from "#app/lib/env.server";
+// The byte store on the disk. Written beside, flushed, then renamed, so that a file is whole or not there.
+import { randomBytes } from "node:crypto";
+import { access, mkdir, open, opendir, readFile, rename, rm, stat } from "node:fs/promises";
+import { dirname, join, relative, sep } from "node:path";
+import { type ByteStore, checkKey } from "#app/lib/storage/store";
 
-const root = () => join(env.dataFolder, "files");
+const absent = (error: unknown): boolean => (error as NodeJS.ErrnoException).code === "ENOENT";
 
-function pathOf(hash: string): string {
-  if (!/^[0-9a-f]{64}$/.test(hash)) throw new Error("Not a file's hash");
-  return join(root(), hash.slice(0, 2), hash);
-}
-
-/** SHA-256, hex: the name under which `keepBytes` keeps them. */
-export const hashOfBytes = (bytes: Uint8Array): string => createHash("sha256").update(bytes).digest("hex");
-
-/** Keeps the bytes and returns their SHA-256, hex. On return they are on the disk. */
-export async function keepBytes(bytes: Uint8Array): Promise<string> {
-  const hash = hashOfBytes(bytes);
-  const path = pathOf(hash);
-  if (await exists(path)) return hash;
-  await mkdir(join(root(), hash.slice(0, 2)), { recursive: true, mode: 0o700 });
-  const beside = `${path}.${randomBytes(6).toString("hex")}`;
-  const file = await open(beside, "wx", 0o600);
-  try {
-    await file.writeFile(bytes);
-    await file.sync();
-  } finally {
-    await file.close();
-  }
-  await rename(beside, path);
-  return hash;
-}
-
-/** The bytes of a file that a row names. Throws when they are missing. */
-export const readBytes = (hash: string): Promise<Buffer> => readFile(pathOf(hash));
-
-async function exists(path: string): Promise<boolean> {
-  return access(path).then(
-    () => true,
-    () => false,
-  );
+/** @param root folder that holds nothing else. */
+export function localStore(root: string): ByteStore {
+  const pathOf = (key: string) => join(root, ...checkKey(key).split("/"));
+  return {
+    async put(key, bytes) {
+      const path = pathOf(key);
+      await mkdir(dirname(path), { recursive: true, mode: 0o700 });
+      const beside = `${path}.${randomBytes(6).toString("hex")}.part`;
+      const file = await open(beside, "wx", 0o600);
+      try {
+        await file.writeFile(bytes);
+        await file.sync();
+      } finally {
+        await file.close();
+      }
+      await rename(beside, path);
+    },
+    async get(key) {
+      return readFile(pathOf(key)).catch((error: unknown) => {
+        if (absent(error)) return null;
+        throw error;
+      });
+    },
+    has: (key) =>
+      access(pathOf(key)).then(
+        () => true,
+        () => false,
+      ),
+    remove: (key) => rm(pathOf(key), { force: true }),
+    async *list(prefix) {
+      const folder = join(root, ...prefix.split("/").filter(Boolean));
+      try {
+        for await (const entry of await opendir(folder, { recursive: true })) {
+          if (!entry.isFile()) continue;
+          const path = join(entry.parentPath, entry.name);
+          const found = await stat(path).catch(() => null);
+          if (found) yield { key: relative(root, path).split(sep).join("/"), changed: found.mtimeMs };
+        }
+      } catch (error) {
+        if (!absent(error)) throw error;
+      }
+    },
+  };
 }
