@@ -30,7 +30,7 @@ describe("links to where bad news is written down", () => {
     const item = recordLinks(e, { kind: "item", id: "m2" });
     expect(read(e, item.opening.href)).toMatchObject({ systems: ["mount", "bay"], back: { label: "Mount, m2" } });
     expect(item.opening.href).not.toContain("#");
-    expect(read(e, item.finding.href)).toMatchObject({ systems: ["mount"], where: "at item m2, work m2" });
+    expect(read(e, item.finding.href)).toMatchObject({ systems: ["mount"], where: "at item m2 of Mount" });
     expect(recordLinks(e, { kind: "board", id: null }).opening.href).toMatch(/\/openings\?from=board$/);
   });
 

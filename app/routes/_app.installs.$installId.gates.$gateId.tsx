@@ -2,7 +2,7 @@ import { data, redirect, useNavigation } from "react-router";
 import { AgainBand } from "#app/components/gate/AgainBand";
 import { GateHead } from "#app/components/gate/GateHead";
 import { ItemRow, type RowReply } from "#app/components/gate/ItemRow";
-import { RecordWays } from "#app/components/gate/RecordWays";
+import { RecordBar } from "#app/components/gate/RecordWays";
 import { Signatures } from "#app/components/gate/Signatures";
 import { CautionSlab } from "#app/components/ui/CautionSlab";
 import { Fitting } from "#app/components/ui/Fitting";
@@ -94,9 +94,7 @@ export default function Gate({ loaderData, actionData }: Route.ComponentProps) {
             />
           ))}
         </ol>
-        <div className="px-4 py-3 tablet:px-6">
-          <RecordWays links={view.record} about={view.name} />
-        </div>
+        <RecordBar links={view.record} />
         <Signatures
           signatures={view.signatures.map((s) => ({ ...s, hash: s.id ? grouped(hashes[s.id]) : undefined }))}
           former={view.former}

@@ -76,7 +76,7 @@ test("whoever did a part of the work does not countersign it: page, form and API
   await sign(builder, "Jonas", "builder");
 
   await inspector.goto(`${sorrel.gate("WR")}/sign`);
-  const sentence = "You did or recorded part of Walk-round yourself. Whoever countersigns did none of it: another inspector must.";
+  const sentence = "You did or recorded part of Walk-round yourself. Whoever countersigns did none of it: another lead or inspector must.";
   await expect(inspector.getByRole("main")).toContainText(sentence);
   await expect(inspector.getByLabel("Your signing PIN")).toHaveCount(0);
   await expectRefused(inspector, await trySigning(inspector, "Henrik", "WR", "inspector"), 403, sentence);

@@ -68,11 +68,11 @@ export function CheckForm({
       >
         <FormFaults faults={faults} />
         <HiddenIds commandId={`${commandId}-${intent}`} intent={intent} also={{ [subject.field]: subject.id, ...seen }} />
-        {says && <div className="max-w-[66ch]">{says}</div>}
+        {says && !checking && <div className="max-w-[66ch]">{says}</div>}
         <div className="flex flex-wrap items-start gap-x-4 gap-y-3">
           {on && <TextInput {...field("on", on.value)} type="date" label={on.label} />}
           {due && <TextInput {...field("due", due.value)} type="date" label={due.label} hint={due.hint} />}
-          {since && <TextInput {...field("since")} type="date" label={since.label} optional hint={since.hint} />}
+          {since && <TextInput {...field("since")} type="date" label={since.label} optional hint={since.hint} className="max-w-[420px]" />}
         </div>
         {certificate && (
           <>

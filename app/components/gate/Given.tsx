@@ -1,3 +1,4 @@
+import { Photos } from "#app/components/happenings/Photos";
 import { BandRule } from "#app/components/ui/BandRule";
 import { Figure } from "#app/components/ui/Figure";
 import { Tally } from "#app/components/ui/Tally";
@@ -42,15 +43,7 @@ function GivenPart({ one }: { one: GivenView }) {
         </div>
       );
     case "photos":
-      return (
-        <div className="given-photos">
-          {one.files.map((file, i) => (
-            <a key={file} href={`/files/${file}`}>
-              <img src={`/files/${file}?small`} alt={`${one.of}, ${i + 1} of ${one.files.length}`} width="132" height="88" loading="lazy" />
-            </a>
-          ))}
-        </div>
-      );
+      return <Photos files={one.files} of={one.of} />;
     case "words":
       return <p className="given-words">{one.text}</p>;
   }

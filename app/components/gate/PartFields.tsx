@@ -1,5 +1,5 @@
-import { FieldErrors } from "#app/components/forms/Field";
 import { NumberInput } from "#app/components/forms/NumberInput";
+import { PhotoInput } from "#app/components/forms/PhotoInput";
 import type { SelectOption } from "#app/components/forms/Select";
 import { TextInput } from "#app/components/forms/TextInput";
 import { CrankFields } from "#app/components/gate/CrankFields";
@@ -37,7 +37,17 @@ export function PartFields({ part, tools, live, ...rest }: PartFieldsProps) {
     case "sheet":
       return <SheetFields {...rest} sheet={part.sheet} live={live} />;
     case "photo":
-      return <PhotoField {...rest} of={part.of} optional={part.optional} />;
+      return (
+        <PhotoInput
+          id={controlId(item, `p${n}.photo`)}
+          name={`p${n}.photo`}
+          label={`Photo: ${part.of}`}
+          optional={part.optional}
+          defaultValue={(entry.typed[`p${n}.photo`] ?? []).filter(Boolean).join(",")}
+          joined={false}
+          errors={errorsOf(entry, `p${n}.photo`)}
+        />
+      );
     case "text":
       return (
         <TextInput
@@ -74,37 +84,4 @@ export function PartFields({ part, tools, live, ...rest }: PartFieldsProps) {
     case "computed":
       return null;
   }
-}
-
-function PhotoField({ item, n, entry, of, optional }: PartProps & { of: string; optional: boolean }) {
-  const name = `p${n}.photo`;
-  const id = controlId(item, name);
-  const errors = errorsOf(entry, name);
-  const stored = (entry.typed[name] ?? []).filter(Boolean);
-  return (
-    <div className="field photo-field">
-      <label htmlFor={id}>
-        Photo: {of}
-        {optional && <span className="field-optional"> (may stay empty)</span>}
-      </label>
-      <p className="field-hint" id={`${id}-hint`}>
-        JPEG, PNG or WebP, up to 12 MB each. Place and device are taken out of it.
-      </p>
-      <input
-        id={id}
-        name={name}
-        type="file"
-        accept="image/jpeg,image/png,image/webp"
-        capture="environment"
-        multiple
-        aria-describedby={`${id}-hint${errors.length ? ` ${id}-error` : ""}`}
-        aria-invalid={errors.length > 0 || undefined}
-      />
-      {stored.map((file) => (
-        <input key={file} type="hidden" name={name} value={file} />
-      ))}
-      {stored.length > 0 && <p>{stored.length === 1 ? "1 photo is here already." : `${stored.length} photos are here already.`}</p>}
-      <FieldErrors id={`${id}-error`} errors={errors} />
-    </div>
-  );
 }

@@ -70,7 +70,7 @@ export function MakeLooseEnd({ view, came, commandId, reply }: MakeLooseEndProps
             className="w-full"
           />
         )}
-        <Undisturbed {...field("undisturbed")} label="Taking it off disturbed nothing" />
+        {!came.asks && <Undisturbed {...field("undisturbed")} label="Taking it off disturbed nothing" />}
         <PhotoInput {...field("photos")} label="Photos" hint="As it is now, so that somebody else finds it." most={6} />
         {making && (
           <Notice kind={making.hold ? "hold" : "lapsed"} title={making.hold ?? "Look before it counts."} role="status">

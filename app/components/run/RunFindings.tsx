@@ -28,7 +28,7 @@ export function RunFindings({ list, raise }: View) {
           ))}
         </ul>
       )}
-      <p>
+      <p className="flex flex-wrap">
         <Fitting href={raise.href}>Raise a finding</Fitting>
       </p>
     </section>

@@ -40,7 +40,7 @@ export function maySign(e: Evaluation, a: { gate: string; member: string; as: Si
       ...at,
       code: "own-work",
       title: "Your own work",
-      sentence: `You did or recorded part of ${gate.name} yourself. Whoever countersigns did none of it: another ${a.as} must.`,
+      sentence: `You did or recorded part of ${gate.name} yourself. Whoever countersigns did none of it: another ${asked.join(" or ")} must.`,
       roles: wanted,
       barred: [...doers],
     });

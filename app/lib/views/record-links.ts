@@ -26,7 +26,7 @@ export interface CameFrom {
   systems: SystemKey[];
   /** The way back; null = from nowhere in particular. */
   back: Place | null;
-  /** "at item FP3, purge the supply line": joins a finding's words. */
+  /** "at item FP3 of Fuel prime": joins a finding's words. */
   where: string | null;
   /** The item that asks for a loose end, and what it asks for. */
   asks: { item: string; what: string; due: string } | null;
@@ -88,7 +88,7 @@ function placeOf(e: Evaluation, kind: string, id: string): Pick<CameFrom, "value
   const item = kind === "item" ? itemOf(e.facts, id) : undefined;
   if (item) {
     const place = { href: gateOf(install, item.gate, id), label: `${e.facts.gates.get(item.gate)?.name ?? "Gate"}, ${item.key}` };
-    return { value, back: place, where: `at item ${item.key}, ${lowerFirst(item.words.replace(/[.:]$/, ""))}` };
+    return { value, back: place, where: `at item ${item.key} of ${e.facts.gates.get(item.gate)?.name ?? "a gate"}` };
   }
   const run = kind === "run" ? e.facts.runs.get(id)?.run : undefined;
   if (run) return { value, back: { href: runOf(install, id), label: `Run ${run.label}` }, where: `at run ${run.label}` };
