@@ -146,7 +146,7 @@ describe("the database itself", () => {
     return client.execute(sql).finally(() => client.close());
   };
   const appendOnly = `events proofs confirmations acceptances keeps proof_withdrawals signatures signature_withdrawals release_signatures
-    release_signature_withdrawals openings opening_closings opening_mistakes loose_ends loose_end_events findings finding_events tool_checks
+    release_signature_withdrawals openings opening_closings opening_mistakes opening_undisturbed loose_ends loose_end_events findings finding_events tool_checks
     extinguisher_checks rung_events plan_versions acks answers winds run_acts exceedances exceedance_answers files`.split(/\s+/);
 
   it.each(appendOnly)("holds %s append-only", async (table) => {
@@ -164,7 +164,7 @@ describe("the database itself", () => {
     ["DELETE FROM openings", /append-only/],
     ["REPLACE INTO openings SELECT * FROM openings", /append-only/],
     [
-      "REPLACE INTO openings SELECT 'another', install_id, seq, recorded, by, 'lead', systems, 'nothing', opened FROM openings",
+      "REPLACE INTO openings SELECT 'another', install_id, seq, recorded, by, 'lead', systems, 'nothing', opened, happened, loose_end, claimed FROM openings",
       /append-only/,
     ],
     ["INSERT OR REPLACE INTO events SELECT * FROM events WHERE seq = 1", /goes on from its newest/],

@@ -56,6 +56,12 @@ export function PhotoInput({ id, name, label, hint, most = 10, optional = true, 
     for (const one of chosen) void send(one);
   }
 
+  // What came back with the form has become part of it: it is not listed as sent once more.
+  useEffect(() => {
+    const known = defaultValue.split(",");
+    setUploads((all) => (all.some((u) => known.includes(u.file)) ? all.filter((u) => !known.includes(u.file)) : all));
+  }, [defaultValue]);
+
   const sending = uploads.some((u) => u.state === "sending");
   useEffect(() => {
     const form = box.current?.closest("form");

@@ -6,6 +6,7 @@ import { log } from "#app/lib/log.server";
 import { applyRules } from "#app/lib/services/apply-rules.server";
 import { holdOverdue } from "#app/lib/services/hold-overdue.server";
 import { giveLeaseBack, takeLease } from "#app/lib/services/lease.server";
+import { remindDue } from "#app/lib/services/remind-due.server";
 import { remindRunsOut } from "#app/lib/services/remind-runs-out.server";
 import { sweepFiles } from "#app/lib/services/sweep-files.server";
 
@@ -20,6 +21,7 @@ const WORK: { name: string; every: number; run: () => Promise<number> }[] = [
   { name: "records of installs under new rules", every: Number.POSITIVE_INFINITY, run: applyRules },
   { name: "GO ended by time", every: 1, run: holdOverdue },
   { name: "mails about what runs out", every: 20, run: remindRunsOut },
+  { name: "mails about what runs out in the crib", every: 240, run: remindDue },
   { name: "files that no record names, removed", every: 240, run: sweepFiles },
 ];
 

@@ -178,7 +178,10 @@ function readCrank(r: Reader, n: number): Evidence | null {
   const before = r.errors.length;
   const bursts = began.flatMap((time, row) => {
     if (!time && !seconds[row] && !pressure[row]) return [];
-    const read = instantOfLocal(localOf(r.at.now, timeZone).date, time, timeZone);
+    // The crank clock gives the instant itself, a person the time of today.
+    const read = /^\d{12,14}$/.test(time)
+      ? { ok: true as const, at: Number(time) }
+      : instantOfLocal(localOf(r.at.now, timeZone).date, time, timeZone);
     const at = read.ok ? read.at : null;
     if (at === null)
       r.errors.push({ field: `p${n}.began.${row}`, message: `Burst ${row + 1}: enter when it began, by the clock at the install.` });
