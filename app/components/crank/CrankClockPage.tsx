@@ -1,6 +1,7 @@
 import { useEffect, useState } from "react";
 import { keepClock, readClock } from "#app/components/crank/crankStore";
 import { CautionSlab } from "#app/components/ui/CautionSlab";
+import { Figure } from "#app/components/ui/Figure";
 import { Fitting } from "#app/components/ui/Fitting";
 import { TitlePipe } from "#app/components/ui/TitlePipe";
 import { useLive } from "#app/components/ui/useLive";
@@ -52,8 +53,8 @@ export function CrankClockPage({ view }: { view: CrankView }) {
             <p className="crank-word" role="status">
               {face.word}
             </p>
-            <p className="crank-figure fig" aria-hidden="true">
-              {figureOf(face)}
+            <p className="crank-figure" aria-hidden="true">
+              <Figure {...figureOf(face)} />
             </p>
             <p className="crank-says">{face.sentence}</p>
           </section>
@@ -93,7 +94,7 @@ export function CrankClockPage({ view }: { view: CrankView }) {
                 <li key={b.at} className="flex flex-wrap gap-x-6 border-b border-line py-2">
                   <b className="fig">{n + 1}</b>
                   <span>{new Date(b.at).toLocaleTimeString("en-GB", { timeZone: view.timeZone, timeZoneName: "short" })}</span>
-                  <span className="fig">{b.seconds.toFixed(1)} s</span>
+                  <Figure value={b.seconds.toFixed(1)} unit="s" />
                   <span>{b.pressureAfter === null ? "no pressure" : `pressure after ${b.pressureAfter.toFixed(1)} s`}</span>
                 </li>
               ))}
@@ -123,8 +124,11 @@ export function CrankClockPage({ view }: { view: CrankView }) {
   );
 }
 
-const figureOf = ({ figure, tone }: CrankFace): string =>
-  figure === null ? "–" : tone === "rest" ? (figure >= 120 ? `${Math.ceil(figure / 60)} min` : `${figure} s`) : `${figure.toFixed(1)} s`;
+function figureOf({ figure, tone }: CrankFace): { value: string; unit?: string } {
+  if (figure === null) return { value: "–" };
+  if (tone !== "rest") return { value: figure.toFixed(1), unit: "s" };
+  return figure >= 120 ? { value: String(Math.ceil(figure / 60)), unit: "min" } : { value: String(figure), unit: "s" };
+}
 
 /** Keeps the screen on while the starter turns, where the device can. */
 function useAwake(wanted: boolean): void {

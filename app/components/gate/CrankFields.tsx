@@ -4,6 +4,7 @@ import { readClock } from "#app/components/crank/crankStore";
 import { NumberInput } from "#app/components/forms/NumberInput";
 import { TextInput } from "#app/components/forms/TextInput";
 import { controlId, errorsOf, type PartProps, typedIn } from "#app/components/gate/entry";
+import { Figure } from "#app/components/ui/Figure";
 import { Fitting } from "#app/components/ui/Fitting";
 import type { Burst } from "#app/lib/bench/crank";
 import type { CrankClock } from "#app/lib/bench/crank-clock";
@@ -104,7 +105,7 @@ function FromClock({ item, n, bursts, onDrop }: { item: string; n: number; burst
           <li key={b.at} className="flex flex-wrap gap-x-5 border-b border-line py-2">
             <b className="fig">{row + 1}</b>
             <span>{new Date(b.at).toLocaleString("en-GB", WHEN)}</span>
-            <span className="fig">{b.seconds.toFixed(1)} s</span>
+            <Figure value={b.seconds.toFixed(1)} unit="s" />
             <span>{b.pressureAfter === null ? "no pressure" : `pressure after ${b.pressureAfter.toFixed(1)} s`}</span>
             <input type="hidden" name={`p${n}.began`} id={controlId(item, `p${n}.began`, row)} value={b.at} />
             <input type="hidden" name={`p${n}.seconds`} value={b.seconds} />
