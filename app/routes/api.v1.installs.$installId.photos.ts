@@ -1,8 +1,10 @@
+import { db } from "#app/db/client.server";
+import { memberOf } from "#app/db/queries/membership.server";
 import { actorOf } from "#app/lib/auth/actor.server";
 import { requireUserOfApi } from "#app/lib/auth/guards.server";
 import { readPhotoForm } from "#app/lib/http/multipart.server";
 import { refusedJson } from "#app/lib/http/respond.server";
-import { invalid } from "#app/lib/services/outcome";
+import { invalid, notFound } from "#app/lib/services/outcome";
 import type { Route } from "./+types/api.v1.installs.$installId.photos";
 
 export const middleware: Route.MiddlewareFunction[] = [requireUserOfApi];
@@ -13,6 +15,7 @@ export function loader() {
 
 /** Stores one picture, for a record that will name it. Fields: commandId, photo. The same command again answers with the same file. */
 export async function action({ request, params, context }: Route.ActionArgs) {
+  if (!(await memberOf(db(), params.installId, actorOf(context).userId))) return refusedJson(notFound("That install"));
   const act = { installId: params.installId, actor: actorOf(context) };
   const { stored, refused } = await readPhotoForm(request, act, null);
   const [no] = refused;

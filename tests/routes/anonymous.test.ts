@@ -11,6 +11,7 @@ import { afterAll, beforeAll, describe, expect, it } from "vitest";
 import { db, openDatabase, setDatabase, write } from "#app/db/client.server";
 import { migrateDatabase } from "#app/db/migrate.server";
 import { gates } from "#app/db/schema/gates";
+import { items } from "#app/db/schema/items";
 import { users } from "#app/db/schema/users";
 import { hash } from "#app/lib/auth/hash.server";
 import { hashPin } from "#app/lib/auth/pin.server";
@@ -121,7 +122,11 @@ beforeAll(async () => {
   ids.runId = value(await planRun(act(), plan)).run;
   ids.installId = made.install;
   ids.gateId = (await db().select({ id: gates.id, key: gates.key, at: gates.installId }).from(gates)).find(
-    (g) => g.key === "MF" && g.at === made.install,
+    (g) => g.key === "OP" && g.at === made.install,
+  )?.id as string;
+  // The one that asks for cranking.
+  ids.itemId = (await db().select({ id: items.id, key: items.key, at: items.installId }).from(items)).find(
+    (i) => i.key === "OP4" && i.at === made.install,
   )?.id as string;
   file.close();
   setDatabase(undefined);
