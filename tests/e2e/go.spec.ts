@@ -78,3 +78,34 @@ test("the lead calls GO with PIN, and each of the crew has the mail", async ({ v
     expect(mail?.html).toContain("1,375");
   }
 });
+
+test("a fuel line is opened: the preview says what falls, GO turns to HOLD, and everyone is told", async ({ visit, instance }) => {
+  const page = await visit("Priya", "tablet");
+  await page.goto(sorrel.gate("FP"));
+  await page
+    .getByRole("link", { name: /^Opened a system/ })
+    .first()
+    .click();
+  await expect(page).toHaveURL(/\/openings\?.*from=/);
+  await page.getByRole("checkbox", { name: /^Fuel, forward of the firewall/ }).check();
+  await page.getByLabel("What was done, and why").fill("Hose nut turned: it wept");
+  await page.getByRole("button", { name: /^See what will lapse/ }).click();
+  await expect(page.getByRole("heading", { name: "What will lapse" }).locator("..")).toContainText("HOLD");
+  await expect(page.getByRole("heading", { name: "What will lapse" }).locator("..")).toContainText("Fuel flow and prime");
+  // Nothing counts before it is confirmed.
+  const board = async () => (await (await page.request.get(`/api/v1${sorrel.board}/board`)).json()).next;
+  expect((await board()).state).toBe("called");
+  await page.locator("footer, .foot").getByRole("button").last().click();
+  await expect.poll(async () => (await board()).state).toBe("held");
+  await page.goto(sorrel.board);
+  await expect(page.getByRole("heading", { level: 1 })).toContainText("HOLD, run 1");
+  await expect
+    .poll(async () => (await messagesIn(instance.inbox)).filter((m) => m.subject.startsWith("HOLD: run 1")).length, { timeout: 20_000 })
+    .toBe(6);
+
+  await page.goto(`${sorrel.board}/record?kind=openings`);
+  await expect(page.getByRole("main")).toContainText("Priya Fairlead opened");
+  await expect(page.getByRole("main")).toContainText("Hose nut turned: it wept");
+  await page.goto(`${sorrel.board}/record?check=1`);
+  await expect(page.getByRole("main")).toContainText("The chain is whole.");
+});

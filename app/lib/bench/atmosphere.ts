@@ -79,6 +79,15 @@ export function pressureAltitude(pressure: number): number {
   return inLayer((T0 / lapse) * (1 - (pressure / P0) ** (1 / EXPONENT)));
 }
 
+/**
+ * Pressure (Pa) at a field from an altimeter setting (QNH, Pa) and its elevation (m): an altimeter set to QNH reads the elevation there,
+ * so pressure altitude = elevation + pressure altitude of QNH. Source: the altimeter's definition (ICAO Doc 7488, from memory).
+ * RangeError outside the layer.
+ */
+export function stationPressure(setting: number, elevation: number): number {
+  return standardAir(pressureAltitude(setting) + elevation).pressure;
+}
+
 /** Density altitude (m) of air of `density` (kg/m³): h = (T0/L) (1 - (rho/rho0)^(1/(g/(R L) - 1))). RangeError outside the layer. */
 export function densityAltitude(density: number): number {
   needPositive({ density });

@@ -2,7 +2,7 @@
  * Reading a sheet's form back: plain repeated field names, one entry per row, into fields and rows of SI values.
  * What is not asked (`when`) is not read; an empty optional field is left out; an empty row is skipped.
  */
-import { amount, check, type FieldError, missing, notChosen } from "#app/lib/bench/check";
+import { amount, check, type FieldError, missing, notChosen, type Outcome } from "#app/lib/bench/check";
 import type { AmountField, FormField, FormGroup, SheetForm, UnitPair } from "#app/lib/bench/form";
 import type { Quantity } from "#app/lib/units/quantity";
 
@@ -81,4 +81,24 @@ export function readRows(definition: SheetForm, form: ReadonlyMap<string, readon
     return typed && row !== undefined ? [group, typed[Number(row)] ?? row, ...rest].join(".") : path;
   };
   return { flat, errors, rows };
+}
+
+export interface Readable {
+  form: SheetForm;
+  compute: (inputs: unknown) => Outcome<unknown>;
+  fromForm?: (flat: Record<string, unknown>) => { inputs: Record<string, unknown>; locate: (path: string) => string };
+}
+
+/** A sent form as inputs that compute, or a sentence for every bad field, the row counted as it was sent. */
+export function readWith(
+  sheet: Readable,
+  form: ReadonlyMap<string, readonly string[]>,
+  parse: Parse,
+): { ok: true; inputs: Record<string, unknown> } | { ok: false; errors: FieldError[] } {
+  const { flat, errors, rows } = readRows(sheet.form, form, parse);
+  if (errors.length > 0) return { ok: false, errors };
+  const { inputs, locate } = sheet.fromForm?.(flat) ?? { inputs: flat, locate: (path: string) => path };
+  const outcome = sheet.compute(inputs);
+  if (outcome.ok) return { ok: true, inputs };
+  return { ok: false, errors: outcome.errors.map(({ field, sentence }) => ({ field: rows(locate(field)), sentence })) };
 }

@@ -3,15 +3,26 @@
  * ratios, percent and rpm only; everything else is a figure with its quantity, shown in the reader's units.
  */
 import type { Outcome } from "#app/lib/bench/check";
-import type { SheetForm } from "#app/lib/bench/form";
+import type { SheetForm, UnitPair } from "#app/lib/bench/form";
 import type { ValueKey } from "#app/lib/template/types";
-import type { Quantity } from "#app/lib/units/quantity";
+import type { Band, Quantity } from "#app/lib/units/quantity";
 
 export interface SheetFigure {
   label: string;
   quantity: Quantity;
   /** SI */
   value: number;
+  /** Where another unit than the usual one of the quantity is read. */
+  as?: UnitPair;
+}
+
+/** The result against its limits, for a rule with the value's mark on it. */
+export interface ResultRule extends Band {
+  quantity: Quantity;
+  label: string;
+  /** SI */
+  value: number;
+  as?: UnitPair;
 }
 
 export interface SheetResult {
@@ -22,6 +33,9 @@ export interface SheetResult {
   cap: number | null;
   figures: SheetFigure[];
   caution: string;
+  /** What is left to the criterion; below zero = what is missing. */
+  margin?: SheetFigure;
+  rule?: ResultRule;
 }
 
 /** One input of a saved sheet and the values of the install that it may be, SI; `used` undefined = left empty. */
@@ -51,7 +65,8 @@ export interface SheetDef {
   fromForm?: (flat: Record<string, unknown>) => { inputs: Record<string, unknown>; locate: (path: string) => string };
 }
 
-export const figure = (label: string, quantity: Quantity, value: number): SheetFigure => ({ label, quantity, value });
+export const figure = (label: string, quantity: Quantity, value: number, as?: UnitPair): SheetFigure =>
+  as ? { label, quantity, value, as } : { label, quantity, value };
 
 /** `value` to `digits` decimals, never rounded up past a limit that it misses: 1.2499 is "1.24". */
 export function floorText(value: number, digits: number): string {

@@ -4,7 +4,7 @@
  */
 import type { FieldError, Outcome } from "#app/lib/bench/check";
 import type { SheetForm } from "#app/lib/bench/form";
-import { type Parse, readRows } from "#app/lib/bench/read-form";
+import { type Parse, readWith } from "#app/lib/bench/read-form";
 import { COMPRESSION } from "#app/lib/bench/sheet-compression";
 import { FUEL_FLOW } from "#app/lib/bench/sheet-fuel-flow";
 import { RESTRAINT } from "#app/lib/bench/sheet-restraint";
@@ -55,10 +55,5 @@ export function readSheetForm(
   form: ReadonlyMap<string, readonly string[]>,
   parse: Parse,
 ): { ok: true; inputs: Record<string, unknown> } | { ok: false; errors: FieldError[] } {
-  const { flat, errors, rows } = readRows(SHEETS[sheet].form, form, parse);
-  if (errors.length > 0) return { ok: false, errors };
-  const { inputs, locate } = SHEETS[sheet].fromForm?.(flat) ?? { inputs: flat, locate: (path: string) => path };
-  const outcome = SHEETS[sheet].compute(inputs);
-  if (outcome.ok) return { ok: true, inputs };
-  return { ok: false, errors: outcome.errors.map(({ field, sentence }) => ({ field: rows(locate(field)), sentence })) };
+  return readWith(SHEETS[sheet], form, parse);
 }
