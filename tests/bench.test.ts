@@ -168,16 +168,16 @@ describe("fuel flow", () => {
   });
 
   it("says what to do next, and which catch does not count", () => {
-    expect(result("fuel-flow", pumps(14, 15)).sentence).toBe("main: the last two catches differ by 6.9 %, more than 5 %: make another.");
-    expect(result("fuel-flow", pumps(14)).sentence).toBe("main has one catch only: make another.");
-    expect(result("fuel-flow", pumps(12.49, 12.49)).sentence).toMatch(/^main gives 1\.24 times .* less than the 1\.25 asked: look at/);
+    expect(result("fuel-flow", pumps(14, 15)).sentence).toBe("Main: the last two catches differ by 6.9 %, more than 5 %: make another.");
+    expect(result("fuel-flow", pumps(14)).sentence).toBe("Main has one catch only: make another.");
+    expect(result("fuel-flow", pumps(12.49, 12.49)).sentence).toMatch(/^Main gives 1\.24 times .* less than the 1\.25 asked: look at/);
     expect(result("fuel-flow", pumps(20, 14, 14)).sentence).toContain("An earlier catch that did not agree does not count.");
   });
 
   it("each pump alone: one weak pump fails the sheet and is the one named", () => {
     const done = result("fuel-flow", { ...FUEL, pumps: [FUEL.pumps[0], { name: "second", catches: [caught(9), caught(9)] }] });
     expect(done.passes).toBe(false);
-    expect(done.sentence).toMatch(/^second gives 0\.90/);
+    expect(done.sentence).toMatch(/^Second gives 0\.90/);
   });
 
   it("gravity asks for more than a pump", () => {
@@ -187,7 +187,7 @@ describe("fuel flow", () => {
 
   it("a weighed catch is the same as its volume", () => {
     const weighed = { mass: toSI(6, "lb"), seconds: 3600 / 14 };
-    const flow = (catches: unknown[]) => figureOf("fuel-flow", { ...FUEL, pumps: [{ name: "main", catches }] }, "main: flow, mean");
+    const flow = (catches: unknown[]) => figureOf("fuel-flow", { ...FUEL, pumps: [{ name: "main", catches }] }, "Main: flow, mean");
     expect(flow([weighed, weighed])).toBeCloseTo(flow([caught(14), caught(14)]) ?? 0, 15);
   });
 

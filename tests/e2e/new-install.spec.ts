@@ -30,7 +30,7 @@ async function answerFirstPage(page: Page): Promise<void> {
     .first()
     .click();
   await page.waitForURL("**/installs/new*");
-  await page.getByLabel("Registration").fill("N0834S");
+  await page.getByLabel("Registration", { exact: true }).fill("N0834S");
   await page.getByLabel("Name", { exact: true }).fill("Sundew");
   for (const [question, answer] of ANSWERS) await choose(page, question, answer);
 }

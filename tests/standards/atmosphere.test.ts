@@ -1,7 +1,19 @@
 /** Standard atmosphere and air density against published tables. */
+import psychrolib from "psychrolib";
 import { describe, expect, it } from "vitest";
-import { airDensity, densityAltitude, pressureAltitude, saturationPressure, soundSpeed, standardAir } from "#app/lib/bench/atmosphere";
+import {
+  airDensity,
+  densityAltitude,
+  pressureAltitude,
+  saturationPressure,
+  soundSpeed,
+  standardAir,
+  stationPressure,
+} from "#app/lib/bench/atmosphere";
+import { computeBench } from "#app/lib/bench/bench";
 import { fromSI, toSI } from "#app/lib/units/convert";
+
+psychrolib.SetUnitSystem(psychrolib.SI);
 
 const celsius = (n: number) => toSI(n, "°C");
 
@@ -52,6 +64,74 @@ describe("humid air: computed, agrees with a psychrometric library to its last p
     const rho = airDensity(85_000, celsius(30), saturationPressure(celsius(15)));
     // That formula reads 18.9 ft high on a standard day, hence the room.
     expect(Math.abs(fromSI(densityAltitude(rho), "ft") - 7795.9)).toBeLessThan(25);
+  });
+});
+
+describe("psychrolib (ASHRAE formulas) says the same", () => {
+  it.each([0, 1000, 2000, 5000, 8000, 10_000])("standard air at %i ft: pressure within 0.3 Pa, temperature to a thousandth", (feet) => {
+    const metres = toSI(feet, "ft");
+    const air = standardAir(metres);
+    expect(Math.abs(air.pressure - psychrolib.GetStandardAtmPressure(metres))).toBeLessThan(0.3);
+    expect(fromSI(air.temperature, "°C")).toBeCloseTo(psychrolib.GetStandardAtmTemperature(metres), 3);
+  });
+
+  it("saturated vapour over water within 0.25 % from 0 to 45 degC", () => {
+    for (let t = 1; t <= 45; t += 1)
+      expect(Math.abs(saturationPressure(celsius(t)) / psychrolib.GetSatVapPres(t) - 1)).toBeLessThan(0.0025);
+  });
+
+  it("moist air within 0.02 % over temperature, humidity and pressure", () => {
+    for (const t of [0.5, 10, 20, 30, 40])
+      for (const humidity of [0.1, 0.5, 0.8, 1])
+        for (const pressure of [70_000, 85_000, 101_325]) {
+          const ratio = psychrolib.GetHumRatioFromRelHum(t, humidity, pressure);
+          const density = airDensity(pressure, celsius(t), humidity * saturationPressure(celsius(t)));
+          expect(Math.abs(density / psychrolib.GetMoistAirDensity(t, ratio, pressure) - 1)).toBeLessThan(0.0002);
+        }
+  });
+
+  it("negative check: dew point is not humidity; at saturation both say the same", () => {
+    const t = celsius(25);
+    const byDew = airDensity(101_325, t, saturationPressure(celsius(15)));
+    const ratio = psychrolib.GetHumRatioFromTDewPoint(15, 101_325);
+    expect(Math.abs(byDew / psychrolib.GetMoistAirDensity(25, ratio, 101_325) - 1)).toBeLessThan(0.0002);
+    expect(byDew).toBeGreaterThan(airDensity(101_325, t, saturationPressure(t)));
+  });
+});
+
+describe("altimeter setting (definition of the altimeter, ICAO Doc 7488, from memory)", () => {
+  it("1013.25 hPa: the pressure at the field is that of standard air at its elevation", () => {
+    expect(stationPressure(101_325, toSI(5000, "ft"))).toBeCloseTo(84_307.3, 0);
+  });
+
+  it("at sea level the setting is the pressure, and 1 hPa is about 27 ft there", () => {
+    expect(stationPressure(99_000, 0)).toBeCloseTo(99_000, 6);
+    expect(fromSI(pressureAltitude(101_225), "ft")).toBeCloseTo(27.3, 0);
+  });
+});
+
+describe("the sheet", () => {
+  const altitude = (inputs: Record<string, unknown>, label: string) => {
+    const done = computeBench("atmosphere", inputs);
+    if (!done.ok) throw new Error(JSON.stringify(done.errors));
+    return fromSI(done.result.figures.find((f) => f.label === label)?.value ?? Number.NaN, "ft");
+  };
+
+  it("a standard day has its elevation as pressure and density altitude", () => {
+    const air = standardAir(toSI(5000, "ft"));
+    const inputs = { known: "setting", setting: 101_325, elevation: toSI(5000, "ft"), temperature: air.temperature, moisture: "none" };
+    expect(altitude(inputs, "Pressure altitude")).toBeCloseTo(5000, 6);
+    expect(altitude(inputs, "Density altitude")).toBeCloseTo(5000, 6);
+  });
+
+  it("NOAA's example as above: 850 hPa, 30 degC, dew point 15 degC, within 25 ft of 7795.9", () => {
+    const inputs = { known: "station", pressure: 85_000, temperature: celsius(30), moisture: "dew", dewPoint: celsius(15) };
+    expect(Math.abs(altitude(inputs, "Density altitude") - 7795.9)).toBeLessThan(25);
+  });
+
+  it("a dew point above the temperature is refused at its field", () => {
+    const inputs = { known: "station", pressure: 85_000, temperature: celsius(10), moisture: "dew", dewPoint: celsius(15) };
+    expect(computeBench("atmosphere", inputs)).toMatchObject({ ok: false, errors: [{ field: "dewPoint" }] });
   });
 });
 

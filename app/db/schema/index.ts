@@ -1,5 +1,7 @@
 // Every table, for Drizzle alone. Everybody else imports the noun's own file. Imports in this folder are relative:
 // the migration generator does not know the project's import names.
+export * from "./account-links";
+export * from "./api-tokens";
 export * from "./attempts";
 export * from "./commands";
 export * from "./crib";
@@ -9,6 +11,7 @@ export * from "./files";
 export * from "./findings";
 export * from "./gates";
 export * from "./installs";
+export * from "./invitations";
 export * from "./items";
 export * from "./leases";
 export * from "./loose-ends";

@@ -8,8 +8,9 @@ import { type Tx, write } from "#app/db/client.server";
 import { attempts } from "#app/db/schema/attempts";
 import { now } from "#app/lib/clock";
 import { secret } from "#app/lib/env.server";
+import { currentRequest } from "#app/lib/http/request.server";
 
-export type AttemptKind = "account" | "address" | "pin";
+export type AttemptKind = "account" | "address" | "pin" | "asks" | "mailbox";
 /** `until`: the instant before which nothing more is tried, if this try turns out wrong; in the past when there is no wait. */
 export type Attempt = { ok: true; failures: number; until: number } | { ok: false; until: number };
 
@@ -24,6 +25,9 @@ export const pinTries = 5;
 const waitAfter: Record<AttemptKind, (failures: number) => number> = {
   account: (n) => (n < 5 ? 0 : Math.min(minute, second * 2 ** (n - 4))),
   address: (n) => (n < 20 ? 0 : Math.min(15 * minute, second * 2 ** (n - 19))),
+  // Mails that somebody makes the instance send, whether wanted or not: nothing takes their count back but a day without any.
+  asks: (n) => (n < 20 ? 0 : Math.min(15 * minute, second * 2 ** (n - 19))),
+  mailbox: (n) => (n < 4 ? 0 : Math.min(60 * minute, minute * 2 ** (n - 3))),
   pin: (n) => (n % pinTries === 0 ? Math.min(day, 15 * minute * 2 ** (n / pinTries - 1)) : 0),
 };
 
@@ -58,6 +62,27 @@ export async function succeeded(tx: Tx, kind: AttemptKind, value: string): Promi
     await tx.delete(attempts).where(eq(attempts.key, key));
   }
   await tx.delete(attempts).where(lt(attempts.lastAt, now() - 2 * day));
+}
+
+/** The network address behind this request, as the server saw it. */
+export const addressNow = (): string => currentRequest()?.address ?? "unknown";
+
+/**
+ * Counts a mail that somebody asks for: by their network address, by their account where they have one, and by the mailbox that it
+ * goes to, for each kind of mail apart. Null when it may be sent, else the sentence that says how long to wait. It is the same whether
+ * the mailbox belongs to an account or not.
+ */
+export async function askedTooOften(kind: string, mailbox: string, userId?: string): Promise<string | null> {
+  const counts: [AttemptKind, string][] = [["asks", `address:${addressNow()}`]];
+  if (userId) counts.push(["asks", `account:${userId}`]);
+  counts.push(["mailbox", `${kind}:${mailbox}`]);
+  for (const [what, value] of counts) {
+    const attempt = await beginAttempt(what, value);
+    if (attempt.ok) continue;
+    const why = what === "mailbox" ? "Several mails went to this address lately" : "Many mails were asked for lately";
+    return `${why}. Wait ${waitInWords(attempt.until)}, then try again; look among the unwanted mail too.`;
+  }
+  return null;
 }
 
 /** "12 seconds", "3 minutes": how long to wait, rounded up. */

@@ -2,14 +2,12 @@
  * The form of the restraint sheet: labels, ranges, presets and where each value is filled from.
  * Friction values in the help texts are common practice, no source, taken at the low end.
  */
-import { ALTITUDE_RANGE, standardAir } from "#app/lib/bench/atmosphere";
+import { pressureField, RUN_UP_ALTITUDE, temperatureField } from "#app/lib/bench/air-fields";
 import { amountField, choiceField, type SheetForm, textField } from "#app/lib/bench/form";
 import { DEMAND_FACTOR } from "#app/lib/bench/restraint";
 import { FIGURE_OF_MERIT } from "#app/lib/bench/thrust";
 import { toSI } from "#app/lib/units/convert";
 
-/** Where aircraft are run up, m. */
-const ALTITUDE = { min: ALTITUDE_RANGE.min, max: 5000 };
 const deg = (n: number) => toSI(n, "deg");
 const rpm = (n: number) => toSI(n, "rpm");
 const FRICTION = [0.05, 1.2] as const;
@@ -58,21 +56,12 @@ export const RESTRAINT_FIELD = {
     "0.75 is a good propeller standing still; higher asks for more holding. Common practice.",
     { preset: FIGURE_OF_MERIT },
   ),
-  pressure: amountField(
+  pressure: pressureField(
     "pressure",
     "Air pressure at the field",
-    "pressure",
-    [standardAir(ALTITUDE.max).pressure, standardAir(ALTITUDE.min).pressure],
     "As it is here: the manifold gauge with the engine off. A report's sea-level pressure is higher, so on the safe side.",
-    { as: { si: "hPa", us: "inHg" } },
   ),
-  temperature: amountField(
-    "temperature",
-    "Air temperature",
-    "temperature",
-    [toSI(-50, "°C"), toSI(55, "°C")],
-    "The coldest expected for the run: cold air gives more thrust.",
-  ),
+  temperature: temperatureField("temperature", "Air temperature", "The coldest expected for the run: cold air gives more thrust."),
   factor: amountField("factor", "Gust and surge factor", "ratio", [1, 5], "Demand over steady thrust: 1.5. Common practice.", {
     preset: DEMAND_FACTOR,
   }),
@@ -162,9 +151,16 @@ export const RESTRAINT_FIELD = {
 };
 
 /** A saved sheet keeps the pressure as the altitude that it stands for in the standard atmosphere, m. */
-export const PRESSURE_ALTITUDE = amountField("pressureAltitude", "Pressure altitude", "length", [ALTITUDE.min, ALTITUDE.max], "", {
-  as: { si: "m", us: "ft" },
-});
+export const PRESSURE_ALTITUDE = amountField(
+  "pressureAltitude",
+  "Pressure altitude",
+  "length",
+  [RUN_UP_ALTITUDE.min, RUN_UP_ALTITUDE.max],
+  "",
+  {
+    as: { si: "m", us: "ft" },
+  },
+);
 
 const F = RESTRAINT_FIELD;
 export const RESTRAINT_FORM: SheetForm = {

@@ -151,6 +151,8 @@ function compute(inputs: unknown): Outcome<SheetResult> {
         figure("Spread between best and worst", "pressure", Math.max(...readings) - Math.min(...readings)),
       ],
       caution: form.caution,
+      margin: figure("Loss left to the limit, worst cylinder", "fraction", maxLoss - worst.lost),
+      rule: { quantity: "fraction", label: "Largest loss", value: worst.lost, min: null, max: maxLoss },
     },
   };
 }

@@ -84,6 +84,8 @@ type Inputs = z.infer<typeof schema>;
 
 interface PumpResult {
   passes: boolean;
+  /** Flow over take-off consumption, of the catches that count. */
+  ratio: number;
   says: string;
   figures: SheetFigure[];
 }
@@ -112,7 +114,7 @@ function judgePump({ name: typed, catches }: Inputs["pumps"][number], inputs: In
       flows.length < 2
         ? `${name} has one catch only: make another.`
         : `${name}: the last two catches differ by ${ceilText(100 * spread(flows.slice(-2)), 1)} %, more than ${100 * CATCH_SPREAD} %: make another.`;
-    return { passes: false, says, figures };
+    return { passes: false, ratio, says, figures };
   }
   const left = flows.length - counted.length;
   const aside =
@@ -120,9 +122,14 @@ function judgePump({ name: typed, catches }: Inputs["pumps"][number], inputs: In
       ? ""
       : ` ${left === 1 ? "An earlier catch that did not agree does" : `${left} earlier catches that did not agree do`} not count.`;
   if (atLeast(ratio, factor))
-    return { passes: true, says: `${name} gives ${floorText(ratio, 2)} times take-off consumption, ${factor} is asked.${aside}`, figures };
+    return {
+      passes: true,
+      ratio,
+      says: `${name} gives ${floorText(ratio, 2)} times take-off consumption, ${factor} is asked.${aside}`,
+      figures,
+    };
   const says = `${name} gives ${floorText(ratio, 2)} times take-off consumption, less than the ${factor} asked: look at vent, filter, line, valve and pump, then catch again.${aside}`;
-  return { passes: false, says, figures };
+  return { passes: false, ratio, says, figures };
 }
 
 function compute(inputs: unknown): Outcome<SheetResult> {
@@ -132,6 +139,8 @@ function compute(inputs: unknown): Outcome<SheetResult> {
   const takeoff = value.takeoffFlow ?? consumption(value.power ?? 0, value.specific ?? 0, value.density);
   const pumps = value.pumps.map((pump) => judgePump(pump, value, takeoff));
   const failing = pumps.filter((pump) => !pump.passes);
+  const weakest = Math.min(...pumps.map((pump) => pump.ratio));
+  const factor = FLOW_FACTOR[value.supply];
   return {
     ok: true,
     result: {
@@ -150,6 +159,8 @@ function compute(inputs: unknown): Outcome<SheetResult> {
         figure("Fuel in the feeding tank", "volume", value.fuelInTank),
       ],
       caution: FUEL_FLOW_FORM.caution,
+      margin: figure("Weakest supply above what is asked", "fraction", weakest / factor - 1),
+      rule: { quantity: "ratio", label: "Weakest supply over take-off consumption", value: weakest, min: factor, max: null },
     },
   };
 }

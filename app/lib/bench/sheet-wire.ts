@@ -32,7 +32,7 @@ const FIELD = {
     "Stranded aircraft wire loses more than solid copper of the same gauge.",
     { preset: "aircraft" },
   ),
-  length: amountField("length", "Length, one way", "length", [0.05, 50], "From the bus to the equipment, as the wire runs.", {
+  length: amountField("length", "Length, one way", "length", [0.1, 50], "From the bus to the equipment, as the wire runs.", {
     as: ALTITUDE,
   }),
   back: choiceField(

@@ -46,7 +46,7 @@ export function expectedRotation(then: StaticRun, density: number, breathing: Br
 
 /** Thrust now over thrust then, from densities and speeds: (rho / rho') (n / n')^2. */
 export function thrustRatio(now: StaticRun, then: StaticRun): number {
-  needPositive({ now: now.rotation, then: then.rotation, densityNow: now.density, densityThen: then.density });
+  needPositive({ rotation: now.rotation, earlier: then.rotation, density: now.density, earlierDensity: then.density });
   return (now.density / then.density) * (now.rotation / then.rotation) ** 2;
 }
 

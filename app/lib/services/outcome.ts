@@ -1,7 +1,7 @@
 // What a service answers: done, or no with the reason. The page, its action and the API all say the same sentence.
 import type { Blocker, Verdict } from "#app/lib/gates/result";
 
-export type RefusalStatus = 403 | 404 | 409 | 422;
+export type RefusalStatus = 403 | 404 | 409 | 422 | 429;
 
 export interface Refusal {
   ok: false;

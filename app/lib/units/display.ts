@@ -50,11 +50,24 @@ const STYLES: Record<Quantity, Record<UnitSystem, Style>> = {
   fraction: both("%", 0, 4),
 };
 
+/** Decimals of units that are read only where a field or figure asks for them; any other shows up to three. */
+const OTHER: Partial<Record<Unit, readonly [least: number, most: number]>> = {
+  m: [0, 1],
+  ft: [0, 1],
+  hPa: [0, 1],
+  inHg: [2, 2],
+  "m/s": [0, 1],
+  "ft/s": [0, 0],
+  mΩ: [0, 2],
+  W: [0, 1],
+};
+
 function styleFor(quantity: Quantity, system: UnitSystem, as?: Unit): Style {
   const own = STYLES[quantity][system];
   if (!as || as === own[0]) return own;
   if (!measures(as, quantity)) throw new Error(`${as} does not measure ${quantity}`);
-  return [as, 0, 3];
+  const [least, most] = OTHER[as] ?? [0, 3];
+  return [as, least, most];
 }
 
 /** The unit in which a person of this system reads and types `quantity`. */

@@ -20,6 +20,9 @@ const DARK = `@media (prefers-color-scheme:dark){
 .p{border-color:#9c988a!important}.e{background:#0e0f0c!important}.w{background:#3b1012!important;border-color:#ff8a80!important}.s{color:#ffa79e!important}
 .f{background:#8fb3ff!important;border-color:#6f97ef!important;color:#050b1c!important}.k{background:#ff8a80!important}}`;
 
+/** For mails of another make. */
+export const PAINT = { ink, ink2, ground, line, read, dark: DARK };
+
 /** Text as HTML text or as a double-quoted attribute. */
 export const escapeHtml = (text: string): string =>
   text.replace(/[&<>"']/g, (c) => ({ "&": "&amp;", "<": "&lt;", ">": "&gt;", '"': "&quot;", "'": "&#39;" })[c] ?? c);
