@@ -11,6 +11,7 @@ export default {
   reporters: ["clear-text", "progress-append-only", "json"],
   clearTextReporter: { logTests: false, allowColor: false, reportTests: false },
   jsonReporter: { fileName: "node_modules/.cache/mutation/report.json" },
+  ignorePatterns: ["test-results", "build", "data", "public", "fixtures"],
   tempDirName: "node_modules/.cache/mutation/sandbox",
   incremental: true,
   incrementalFile: "node_modules/.cache/mutation/incremental.json",

@@ -2,7 +2,7 @@
  * The standard atmosphere up to 11 km and the density of the air on the day.
  * Source: U.S. Standard Atmosphere 1976 (the same constants as ISO 2533 in this layer); altitudes are geopotential.
  */
-import { needNotNegative, needPositive } from "#app/lib/bench/compare";
+import { atLeast, atMost, needNotNegative, needPositive } from "#app/lib/bench/compare";
 
 /** Sea level: K, Pa. Lapse rate K/m. Gravity m/s². Gas constant of dry air J/(kg·K) = 8314.32 / 28.9644. */
 export const STANDARD = {
@@ -69,7 +69,7 @@ export function airDensity(pressure: number, temperature: number, vapour = 0): n
  */
 export function saturationPressure(temperature: number): number {
   const celsius = temperature - 273.15;
-  if (!(celsius >= -45 && celsius <= 60)) throw new RangeError(`temperature must be -45 to +60 degC, got ${celsius}`);
+  if (!(atLeast(celsius, -45) && atMost(celsius, 60))) throw new RangeError(`temperature must be -45 to +60 degC, got ${celsius}`);
   return 611.2 * Math.exp((17.62 * celsius) / (243.12 + celsius));
 }
 

@@ -105,7 +105,7 @@ function compute(inputs: unknown): Outcome<BenchResult> {
   const pressure = value.known === "station" ? value.pressure : stationPressure(value.setting, value.elevation);
   const vapour =
     value.moisture === "dew"
-      ? saturationPressure(Math.min(value.dewPoint, temperature))
+      ? saturationPressure(value.dewPoint)
       : value.moisture === "humidity"
         ? value.humidity * saturationPressure(temperature)
         : 0;
