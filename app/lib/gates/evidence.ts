@@ -19,16 +19,17 @@ const YES: Met = { ok: true };
 
 /** The band in force: its ends may come from values of the install. Null = a number is missing. SI, inclusive. */
 export function bandInForce(criterion: Criterion, valueOfInstall: (key: ValueKey) => number | null): Band | null {
+  if (!criterion.limit && !criterion.otherLimit)
+    return criterion.band && (criterion.band.min !== null || criterion.band.max !== null) ? criterion.band : null;
   const band: Band = { min: criterion.band?.min ?? null, max: criterion.band?.max ?? null };
-  if (criterion.limit || criterion.otherLimit)
-    for (const limit of [criterion.limit, criterion.otherLimit]) {
-      if (!limit) continue;
-      const value = valueOfInstall(limit.key);
-      if (value === null) return null;
-      // Where the item has a number of its own at that end, the narrower of the two counts.
-      if (limit.end === "min") band.min = band.min === null ? value : Math.max(band.min, value);
-      else band.max = band.max === null ? value : Math.min(band.max, value);
-    }
+  for (const limit of [criterion.limit, criterion.otherLimit]) {
+    if (!limit) continue;
+    const value = valueOfInstall(limit.key);
+    if (value === null) return null;
+    // Where the item has a number of its own at that end, the narrower of the two counts.
+    if (limit.end === "min") band.min = band.min === null ? value : Math.max(band.min, value);
+    else band.max = band.max === null ? value : Math.min(band.max, value);
+  }
   return band.min === null && band.max === null ? null : band;
 }
 
@@ -95,9 +96,13 @@ function partMet(facts: Facts, item: Item, part: Part, given: Evidence | null, p
 }
 
 function inBand(band: Band, places: number, values: number[], label: string): Met {
-  if (values.length !== places || !values.every(Number.isFinite)) return no("evidence-missing", `A value is missing: ${label}.`);
-  // With room for the last binary digit: a limit entered in one unit and a reading in another must meet at the boundary.
-  const out = values.some((v) => (band.min !== null && !atLeast(v, band.min)) || (band.max !== null && !atMost(v, band.max)));
+  if (values.length !== places) return no("evidence-missing", `A value is missing: ${label}.`);
+  let out = false;
+  for (const v of values) {
+    if (!Number.isFinite(v)) return no("evidence-missing", `A value is missing: ${label}.`);
+    // With room for the last binary digit: a limit entered in one unit and a reading in another must meet at the boundary.
+    out ||= (band.min !== null && !atLeast(v, band.min)) || (band.max !== null && !atMost(v, band.max));
+  }
   return out ? no("out-of-band", `${label} is outside its band. Put it right and measure again.`) : YES;
 }
 

@@ -3,6 +3,7 @@ import type { Facts } from "#app/lib/gates/facts";
 import type { GateLimits } from "#app/lib/gates/items";
 import type { RunFacts } from "#app/lib/gates/run-facts";
 import type { Gate, Instant, Rung } from "#app/lib/gates/snapshot";
+import { isComputed } from "#app/lib/gates/work-facts";
 
 /** Gates that a run of the rung requires where no plan says otherwise. `rung` null = all rungs are settled. */
 export function defaultRequired(facts: Facts, rung: Rung | null): string[] {
@@ -153,8 +154,8 @@ function afterLimits(facts: Facts, gate: Gate): GateLimits["after"] {
   if (!after.length) return NO_LIMITS;
   const limits = new Map<string, { at: Instant; gate: string }>();
   for (const id of after)
-    for (const { item, computed, newest: proof } of facts.gateFacts.get(id)?.items ?? []) {
-      if (item.step || computed) continue;
+    for (const { item, newest: proof } of facts.gateFacts.get(id)?.items ?? []) {
+      if (item.step || isComputed(item)) continue;
       // Withdrawn or not: taking a proof back must never let a later one count again.
       if (!proof || proof.state === "na") continue;
       for (const system of item.systems) {

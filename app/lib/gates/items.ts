@@ -18,7 +18,7 @@ import type { Blocker, ItemResult, ItemState } from "#app/lib/gates/result";
 import type { Instant, Item, Proof } from "#app/lib/gates/snapshot";
 import { quoted, stepCause, stepFault } from "#app/lib/gates/steps";
 import { blocker, ownerOf } from "#app/lib/gates/who";
-import type { ItemFacts } from "#app/lib/gates/work-facts";
+import { type ItemFacts, isComputed } from "#app/lib/gates/work-facts";
 
 /** Newer-than rules of a gate, worked out once for all of its items. */
 export interface GateLimits {
@@ -33,6 +33,11 @@ export interface GateLimits {
 /** Shared by every item that stands: most do, and none of them needs a list of its own. */
 const NONE = Object.freeze([]) as unknown as Blocker[];
 
+const NO_CAUSES: Cause[] = [];
+
+/** The list with one more reason; the same list where there is none, so that what stands needs no list. */
+const also = (list: Cause[], cause: Cause | null): Cause[] => (cause === null ? list : [...list, cause]);
+
 /**
  * @param own the item with what is recorded of it; those that it follows have been evaluated before.
  * @returns its state at `facts.at`, every failing rule as a blocker (first cause first), and until when it stands.
@@ -40,6 +45,7 @@ const NONE = Object.freeze([]) as unknown as Blocker[];
 export function evaluateItem(facts: Facts, limits: GateLimits, own: ItemFacts): ItemResult {
   const { item, current: proof } = own;
   const { gate } = own.of;
+  own.computed = isComputed(item);
   if (own.computed) return computedItem(facts, gate, item);
   if (!proof) return notStanding(facts, item, null, "to do", [nothingYet(facts, own)]);
 
@@ -67,25 +73,21 @@ export function evaluateItem(facts: Facts, limits: GateLimits, own: ItemFacts): 
   const met = evidenceMeets(facts, item, proof);
   if (!met.ok) return notStanding(facts, item, proof, "to do", [met]);
 
-  const lapsed: Cause[] = [];
-  const add = (cause: Cause | null) => {
-    if (cause) lapsed.push(cause);
-  };
-  add(revisionFails(item, proof));
-  add(toolFails(facts, proof));
+  let lapsed = also(also(NO_CAUSES, revisionFails(item, proof)), toolFails(facts, proof));
   let until: Instant | null = null;
   if (!item.step) {
     const kept = keptAt(facts, gate, proof);
     const counts = kept === null ? proof.counts : Math.max(kept, proof.counts);
     if (!lookBack) {
-      add(openingFails(facts, item, counts));
+      lapsed = also(lapsed, openingFails(facts, item, counts));
       until = validUntil(facts, item, gate, proof);
-      if (until !== null && until <= facts.at) add({ code: "ran-out", sentence: `Ran out on ${facts.when(until)}. Do it again.` });
+      if (until !== null && until <= facts.at)
+        lapsed = also(lapsed, { code: "ran-out", sentence: `Ran out on ${facts.when(until)}. Do it again.` });
     }
-    add(newerThanFails(facts, limits, item, proof, counts));
+    lapsed = also(lapsed, newerThanFails(facts, limits, item, proof, counts));
     if (item.follows.length || own.ends.length) {
       const followed = followsFail(facts, own, proof);
-      for (const cause of followed.causes) add(cause);
+      for (const cause of followed.causes) lapsed = also(lapsed, cause);
       until = soonest(until, followed.until);
     }
   }

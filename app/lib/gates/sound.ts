@@ -1,6 +1,6 @@
 /**
- * The snapshot as the rules may take it: what a second person must have said is dropped where that person could not say it, and no
- * instant that counts lies after the moment it was recorded. The product's own acts never write such a record; an import, a repair
+ * The snapshot as the rules may take it: what a second person must have said is dropped where that person could not say it. (That no
+ * proof counts later than it was recorded is seen to where proofs are tied to their items.) The product's own acts never write such a record; an import, a repair
  * or a damaged file might, and a wrong "yes" must not come of it. Records come out in the order in which they were made.
  */
 import type { Instant, Member, Recorded, Role, Snapshot } from "#app/lib/gates/snapshot";
@@ -24,9 +24,6 @@ export function soundSnapshot(s: Snapshot): Snapshot {
     members: [...s.members].sort((a, b) => compare(joined(a), joined(b)) || (a.id < b.id ? -1 : 1)),
     extinguishers: byId(s.extinguishers),
     runs: byId(s.runs),
-    proofs: s.proofs.some((p) => p.counts > p.recorded)
-      ? s.proofs.map((p) => (p.counts > p.recorded ? { ...p, counts: p.recorded } : p))
-      : s.proofs,
     findings: bySeq(s.findings).map((f) => (f.closed && !another(f.closed, f.fixed?.by, ["inspector"]) ? { ...f, closed: null } : f)),
     looseEnds: bySeq(s.looseEnds).map((l) => ({
       ...l,

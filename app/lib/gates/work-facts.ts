@@ -16,7 +16,7 @@ export interface Edges {
 export interface ItemFacts {
   item: Item;
   of: GateFacts;
-  /** Nobody ticks it: it is worked out. */
+  /** Nobody ticks it: it is worked out. Known once it is judged: looking at its parts before would be one more walk through memory. */
   computed: boolean;
   /** The proof that happened last, withdrawn or not; null = none. */
   newest: Proof | null;
@@ -112,7 +112,7 @@ export function gatherWork(snapshot: Snapshot, every: Map<string, Gate>): WorkFa
     const facts: ItemFacts = {
       item,
       of,
-      computed: isComputed(item),
+      computed: false,
       newest: null,
       earlier: NO_PROOFS,
       current: null,
@@ -137,7 +137,8 @@ export function gatherWork(snapshot: Snapshot, every: Map<string, Gate>): WorkFa
 
   const several: ItemFacts[] = [];
   const hidden: Proof[] = [];
-  for (const proof of snapshot.proofs) {
+  for (const given of snapshot.proofs) {
+    const proof = given.counts > given.recorded ? { ...given, counts: given.recorded } : given;
     const facts = itemFacts.get(proof.item);
     if (!facts) {
       hidden.push(proof);
