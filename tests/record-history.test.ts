@@ -88,6 +88,23 @@ describe("the record in words", () => {
     expect(told[6]).toMatchObject({ did: "closed the opening “strainer out”", about: 5 });
   });
 
+  it("says which value was confirmed and which number was entered, in the reader's units", () => {
+    const more = chain([
+      ...story,
+      { body: { type: "value-confirmed", data: { key: "redline", value: 45, source: "manual p. 9", revised: [] } } },
+      {
+        body: {
+          type: "number-entered",
+          data: { item: "i2", key: "IG1", part: 0, entered: { min: 0.0004, max: 0.0005 }, source: "plug box", revision: 2 },
+        },
+      },
+    ]).map((l) => l.event);
+    const words = (n: number, units: "si" | "us") => tell(more[n] as RecordEvent, namesIn(more), units);
+    expect(words(7, "si").did).toBe("confirmed the install's redline: 2,700 rpm");
+    expect(words(8, "si").details).toEqual([expect.stringMatching(/^Gap: .*0\.4.*0\.5 mm$/), "Read in: plug box", "Revision 2"]);
+    expect(words(8, "us").details[0]).toContain("in");
+  });
+
   it("keeps what was withdrawn readable, and says what became of it", () => {
     const view = recordView(lines, recordFilter(new URLSearchParams()), "in1", "si");
     const proof = view.rows.find((r) => r.seq === 4);

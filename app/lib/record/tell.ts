@@ -11,8 +11,8 @@ import type { Names } from "#app/lib/record/names";
 import { pointsTo } from "#app/lib/record/points-to";
 import { SYSTEM_NAMES } from "#app/lib/template/systems";
 import type { SystemKey } from "#app/lib/template/types";
-import { VALUE_LABELS } from "#app/lib/template/values";
-import { format, type UnitSystem } from "#app/lib/units/display";
+import { VALUES_BY_KEY } from "#app/lib/template/values";
+import { format, formatBand, type UnitSystem } from "#app/lib/units/display";
 
 export const KINDS = ["work", "signatures", "openings", "loose ends", "findings", "crib", "runs", "set-up and people"] as const;
 export type Kind = (typeof KINDS)[number];
@@ -134,12 +134,13 @@ function sentence(event: RecordEvent, names: Names, units: UnitSystem): string[]
     case "number-entered":
       return [
         `entered the maker's number of ${quote(name(event.data.item))}`,
+        enteredWords(event, names, units),
         `Read in: ${event.data.source}`,
         `Revision ${event.data.revision}`,
       ];
     case "value-confirmed":
       return [
-        `${event.data.source ? "confirmed" : "entered"} the install's ${valueWords(event.data.key)}`,
+        `${event.data.source ? "confirmed" : "entered"} the install's ${valueWords(event.data.key)}: ${valueShown(event.data.key, event.data.value, units)}`,
         event.data.source ? `Read in: ${event.data.source}` : "",
         event.data.revised.length ? `New revision of ${event.data.revised.map((r) => quote(name(r.item))).join(", ")}` : "",
       ];
@@ -305,4 +306,18 @@ function proofSentence(event: Extract<RecordEvent, { type: "proof" }>, names: Na
 
 const photosWords = (n: number): string => (n === 0 ? "" : n === 1 ? "With a photo" : `With ${n} photos`);
 const capWords = (cap: number | null): string => (cap === null ? "" : `Not above ${rpmText(cap)}`);
-const valueWords = (key: string): string => inSentence(VALUE_LABELS.get(key) ?? key);
+function valueShown(key: string, value: number | null, units: UnitSystem): string {
+  const known = VALUES_BY_KEY.get(key);
+  if (value === null) return "left empty";
+  return known ? format(known.quantity, value, units, known.shownIn).text : String(value);
+}
+
+/** A maker's number as it was entered: a band in the part's own quantity, or words. */
+function enteredWords({ data }: Extract<RecordEvent, { type: "number-entered" }>, names: Names, units: UnitSystem): string {
+  if (typeof data.entered === "string") return data.entered;
+  const band = data.entered as { min: number | null; max: number | null } | null;
+  const part = names.of.get(data.item)?.parts[data.part];
+  return band && part && "criterion" in part ? `${part.label}: ${formatBand(part.criterion.quantity, band, units)}` : "";
+}
+
+const valueWords = (key: string): string => inSentence(VALUES_BY_KEY.get(key)?.label ?? key);

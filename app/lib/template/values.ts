@@ -121,7 +121,9 @@ export const valueFault = ({ label, quantity }: Pick<ValueDef, "label" | "quanti
   MORE_THAN_NONE.has(quantity) && si <= 0 ? `${label} is more than zero: type the maker’s figure.` : null;
 
 /** Every value by its key, for words about one that an install may not ask for any more. */
-export const VALUE_LABELS: ReadonlyMap<string, string> = new Map(ROWS.map((row) => [row.key, row.label]));
+export const VALUES_BY_KEY: ReadonlyMap<string, Pick<ValueDef, "label" | "quantity" | "shownIn">> = new Map(
+  ROWS.map((row) => [row.key, row]),
+);
 
 /** The values that an install with these traits is asked for, with presets (SI) and where those come from. */
 export function valueDefs(traits: Traits): ValueDef[] {
