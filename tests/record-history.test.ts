@@ -100,7 +100,7 @@ describe("the record in words", () => {
       },
     ]).map((l) => l.event);
     const words = (n: number, units: "si" | "us") => tell(more[n] as RecordEvent, namesIn(more), units);
-    expect(words(7, "si").did).toBe("confirmed the install's redline: 2,700 rpm");
+    expect(words(7, "si").did).toBe("confirmed the install's redline: 2700 rpm");
     expect(words(8, "si").details).toEqual([expect.stringMatching(/^Gap: .*0\.4.*0\.5 mm$/), "Read in: plug box", "Revision 2"]);
     expect(words(8, "us").details[0]).toContain("in");
   });
