@@ -12,6 +12,7 @@ import { currentRequest, newRequestFacts, requestContext } from "#app/lib/http/r
 import { log } from "#app/lib/log.server";
 import { startMailWorker } from "#app/lib/mail/worker.server";
 import { startBoardClock } from "#app/lib/services/board-clock.server";
+import { firstPersonLink } from "#app/lib/services/first-person.server";
 
 export { createRequestHandler, RouterContextProvider } from "react-router";
 // For the server in front, which runs outside this bundle and must share its modules.
@@ -89,6 +90,10 @@ export async function boot(): Promise<() => Promise<void>> {
       `The database ${env.databaseUrl} cannot be used: ${reason}. See that its folder can be written and has room; if the file is damaged, restore a backup.`,
     );
   });
+  const first = await firstPersonLink();
+  // On the console and not in the log: logs are kept and copied, and this opens the instance.
+  if (first)
+    process.stderr.write(`\nNobody has an account here yet. Open this link once to make the first one, its administrator:\n${first}\n\n`);
   const mail = startMailWorker();
   const clock = startBoardClock();
   return async () => {

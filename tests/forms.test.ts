@@ -1,6 +1,7 @@
 import { parseWithZod } from "@conform-to/zod/v4";
 import { describe, expect, it } from "vitest";
 import type { z } from "zod";
+import * as account from "#app/lib/schemas/account";
 import * as crib from "#app/lib/schemas/crib-forms";
 import * as happenings from "#app/lib/schemas/happening-forms";
 import { ratingsForm } from "#app/lib/schemas/new-install";
@@ -34,7 +35,22 @@ const FORMS: Record<string, { schema: z.ZodType; fields: string[]; intent?: stri
   },
   ratings: { schema: ratingsForm([redline], "si"), fields: ["commandId", "values.redline.value", "values.redline.source"] },
   value: { schema: setUp.valueForm(redline, "si"), fields: ["commandId", "key", "value", "source"] },
-  "add member": { schema: setUp.addMemberForm, fields: ["commandId", "email", "role"] },
+  invite: { schema: account.inviteForm, fields: ["commandId", "email", "role"] },
+  "invitation again": { schema: account.invitationForm, fields: ["commandId", "invitation"] },
+  "further role": { schema: account.giveRoleForm, fields: ["commandId", "member", "role"] },
+  leave: { schema: account.leaveForm, fields: ["commandId"] },
+  "new person": { schema: account.newPersonForm, fields: ["name", "newPassword", "pin", "pinAgain"] },
+  "first person": { schema: account.firstPersonForm, fields: ["name", "email", "newPassword", "pin", "pinAgain"] },
+  "forgot the password": { schema: account.forgotForm, fields: ["email"] },
+  "reset the password": { schema: account.resetForm, fields: ["newPassword"] },
+  "change the password": { schema: account.passwordForm, fields: ["commandId", "password", "newPassword"] },
+  "change the address": { schema: account.addressForm, fields: ["commandId", "email", "password"] },
+  "change the PIN": { schema: account.pinForm, fields: ["commandId", "password", "pin", "pinAgain"] },
+  "end a session": { schema: account.sessionForm, fields: ["session"] },
+  "make a token": { schema: account.tokenForm, fields: ["commandId", "name", "may", "days", "password"] },
+  "end a token": { schema: account.endTokenForm, fields: ["token"] },
+  "person of the instance": { schema: account.personForm, fields: ["person"] },
+  "mail of the instance": { schema: account.instanceMailForm, fields: ["mail"] },
   "end role": { schema: setUp.endRoleForm, fields: ["commandId", "member", "role"] },
   "add tool": { schema: crib.addToolForm, fields: ["commandId", "name", "serial"], intent: "add-tool" },
   "good check": { schema: crib.goodCheckForm, fields: ["commandId", "tool", "on", "due", "note"], intent: "good-check" },
@@ -102,7 +118,7 @@ describe("an empty field", () => {
     ["add tool", "name", "Give it its name, such as the mark on its handle and its range."],
     ["bad check", "note", "Say what was found, in a few words."],
     ["good check", "due", "Enter the last day in date, as the label or certificate says."],
-    ["add member", "email", "Enter the mail address with which they sign in."],
+    ["invite", "email", "Enter the mail address of whoever is to join."],
     ["reason", "reason", "Say why, in a few words."],
     ["go", "pin", "Enter your PIN."],
     ["new install", "registration", "Enter the registration, as painted on the side."],

@@ -1,9 +1,10 @@
 import { parseWithZod } from "@conform-to/zod/v4";
 import { describe, expect, it } from "vitest";
 import { evaluate } from "#app/lib/gates/evaluate";
+import { inviteForm } from "#app/lib/schemas/account";
 import { addExtinguisherForm, badCheckForm, goodCheckForm } from "#app/lib/schemas/crib-forms";
 import { fieldsOf, replyOf } from "#app/lib/schemas/form-reply";
-import { addMemberForm, valueForm } from "#app/lib/schemas/set-up-forms";
+import { valueForm } from "#app/lib/schemas/set-up-forms";
 import { valueDefs } from "#app/lib/template/values";
 import { crewPageView } from "#app/lib/views/crew";
 import { cribView } from "#app/lib/views/crib";
@@ -178,10 +179,10 @@ describe("the crew", () => {
   });
 
   it("takes an address as people type it, and asks what they do", () => {
-    const good = parseWithZod(formOf({ email: " Noor@Demo.Example ", role: "crew" }), { schema: addMemberForm });
+    const good = parseWithZod(formOf({ email: " Noor@Demo.Example ", role: "crew" }), { schema: inviteForm });
     expect(good.status === "success" && good.value.email).toBe("noor@demo.example");
-    const bad = parseWithZod(formOf({ email: "noor" }), { schema: addMemberForm });
-    expect(bad.reply().error).toMatchObject({ email: [expect.stringContaining("mail address")], role: ["Choose what they do here."] });
+    const bad = parseWithZod(formOf({ email: "noor" }), { schema: inviteForm });
+    expect(bad.reply().error).toMatchObject({ email: [expect.stringContaining("address such as")], role: ["Choose what they do here."] });
   });
 });
 

@@ -10,26 +10,32 @@ import { hangarOf } from "#app/db/queries/hangar.server";
 import { actorOf } from "#app/lib/auth/actor.server";
 import { now } from "#app/lib/clock";
 import { hangarRow, hangarView } from "#app/lib/views/hangar";
+import { everywhereLinks } from "#app/lib/views/strip";
 import type { Route } from "./+types/_app.hangar";
 
 export const meta: Route.MetaFunction = () => [{ title: "Hangar · Bladecount" }];
 
 export async function loader({ context, url }: Route.LoaderArgs) {
-  const { userId, name } = actorOf(context);
+  const { userId, name, isAdmin } = actorOf(context);
   const rows = [];
   for (const { id, roles } of await hangarOf(db(), userId)) {
     const board = await boardNow(db(), id, now());
     if (board) rows.push(hangarRow(board.e, { id: userId, roles }, board.head.recorded));
   }
-  return { name, view: hangarView(rows), search: url.searchParams.get("q")?.slice(0, 80) ?? "" };
+  return {
+    name,
+    links: everywhereLinks("/hangar", isAdmin),
+    view: hangarView(rows),
+    search: url.searchParams.get("q")?.slice(0, 80) ?? "",
+  };
 }
 
 export default function Hangar({ loaderData }: Route.ComponentProps) {
-  const { name, view, search } = loaderData;
+  const { name, links, view, search } = loaderData;
   const none = view.rows.length === 0;
   return (
     <div className="page">
-      <Strip homeHref="/hangar" navLabel="Everywhere" links={LINKS} person={name} />
+      <Strip homeHref="/hangar" navLabel="Everywhere" links={links} person={name} />
       <main id="main">
         <TitlePipe title={view.title} state={view.state} fill={none ? 0 : 1} valve={view.waits ? "shut" : undefined} />
         {none ? <NoInstalls /> : <HangarTable key={search} rows={view.rows} search={search} newHref={NEW} />}
@@ -46,8 +52,3 @@ export default function Hangar({ loaderData }: Route.ComponentProps) {
 }
 
 const NEW = "/installs/new";
-const LINKS = [
-  { label: "Hangar", href: "/hangar", current: true },
-  { label: "New install", href: NEW },
-  { label: "Account", href: "/account" },
-];

@@ -1,44 +1,70 @@
 import { parseWithZod } from "@conform-to/zod/v4";
 import { data, redirect } from "react-router";
-import { AddMember } from "#app/components/crew/AddMember";
+import type { z } from "zod";
+import { Invitations } from "#app/components/crew/Invitations";
+import { Invite } from "#app/components/crew/Invite";
+import { Leave } from "#app/components/crew/Leave";
 import { MemberItem } from "#app/components/crew/MemberItem";
 import { ItemNut } from "#app/components/ui/ItemNut";
 import { StateRow } from "#app/components/ui/StateRow";
 import { TitlePipe } from "#app/components/ui/TitlePipe";
+import { db } from "#app/db/client.server";
+import { openInvitations } from "#app/db/queries/invitations.server";
 import { readForm } from "#app/lib/http/form.server";
+import { actsOf, formAct } from "#app/lib/http/form-acts.server";
 import { type InstallContext, installContext } from "#app/lib/http/install.server";
 import { newId } from "#app/lib/ids";
+import { giveRoleForm, invitationForm, inviteForm, leaveForm } from "#app/lib/schemas/account";
 import { replyOf } from "#app/lib/schemas/form-reply";
-import { addMemberForm, endRoleForm } from "#app/lib/schemas/set-up-forms";
-import { addMember, endRole } from "#app/lib/services/members.server";
+import { endRoleForm } from "#app/lib/schemas/set-up-forms";
+import { invite, sendInvitationAgain, withdrawInvitation } from "#app/lib/services/invitations.server";
+import { endRole, giveRole, leaveInstall } from "#app/lib/services/members.server";
 import { anchorOfMember, crewPageView } from "#app/lib/views/crew";
+import { anchorOfInvitation, invitationView } from "#app/lib/views/invitations";
 import { boardOf } from "#app/lib/views/places";
 import type { Route } from "./+types/_app.installs.$installId.crew";
 
 export const meta: Route.MetaFunction = () => [{ title: "Crew · Bladecount" }];
 
-export function loader({ context }: Route.LoaderArgs) {
-  const { e, me } = context.get(installContext);
-  return { view: crewPageView(e, me), formId: newId() };
+export async function loader({ context, url }: Route.LoaderArgs) {
+  const { e, me, installId, snapshot, now } = context.get(installContext);
+  const view = crewPageView(e, me);
+  // Addresses of people who are not members yet are for the leads alone.
+  const open = view.may.ok ? await openInvitations(db(), installId) : [];
+  return {
+    view,
+    invitations: open.map((row) => invitationView(row, now, snapshot.install.timeZone)),
+    written: view.may.ok && url.searchParams.has("invited"),
+    formId: newId(),
+  };
 }
 
 export async function action({ context, request }: Route.ActionArgs) {
   const install = context.get(installContext);
   const sent = await readForm(request);
-  return sent.get("intent") === "end-role" ? end(install, sent) : add(install, sent);
-}
-
-async function add({ installId, me }: InstallContext, sent: FormData) {
-  const submission = parseWithZod(sent, { schema: addMemberForm });
-  if (submission.status !== "success") return data(replyOf("add", sent, submission.reply().error), { status: 400 });
-  const { commandId, ...input } = submission.value;
-  const outcome = await addMember({ installId, actor: { userId: me.id }, commandId }, input);
-  if (outcome.ok) return redirect(`${boardOf(installId)}/crew#${anchorOfMember(outcome.value.member)}`, 303);
-  const errors: Record<string, string[]> =
-    outcome.code === "not-found"
-      ? { email: ["Nobody has an account here with that address. Check its spelling, or ask the administrator to open an account for it."] }
-      : { "": [outcome.message] };
-  return data(replyOf("add", sent, errors), { status: outcome.status });
+  const acts = actsOf(install);
+  const crew = `${boardOf(install.installId)}/crew`;
+  const intent = sent.get("intent");
+  if (intent === "leave") return leave(install, sent);
+  if (intent === "end-role") return end(install, sent);
+  if (intent === "invite") {
+    const serve = ({ commandId, ...input }: z.output<typeof inviteForm>) => invite(acts(commandId), input);
+    const acted = await formAct({ sent, form: "invite", schema: inviteForm, serve, anchor: (v) => anchorOfInvitation(v.invitation) });
+    return acted.done ? redirect(`${crew}?invited#${acted.anchor}`, 303) : data(acted.reply, { status: acted.status });
+  }
+  if (intent === "give-role") {
+    const form = anchorOfMember(String(sent.get("member") ?? ""));
+    const serve = ({ commandId, ...input }: z.output<typeof giveRoleForm>) => giveRole(acts(commandId), input);
+    const acted = await formAct({ sent, form, schema: giveRoleForm, serve, anchor: (v) => anchorOfMember(v.member) });
+    return acted.done ? redirect(`${crew}#${acted.anchor}`, 303) : data(acted.reply, { status: acted.status });
+  }
+  const again = intent === "send-again";
+  const form = anchorOfInvitation(String(sent.get("invitation") ?? ""));
+  const serve = ({ commandId, invitation }: z.output<typeof invitationForm>) =>
+    (again ? sendInvitationAgain : withdrawInvitation)(acts(commandId), { invitation });
+  const acted = await formAct({ sent, form, schema: invitationForm, serve, anchor: () => form });
+  if (acted.done) return redirect(again ? `${crew}?invited#${acted.anchor}` : `${crew}#invitations`, 303);
+  return data(acted.reply, { status: acted.status });
 }
 
 async function end({ installId, me }: InstallContext, sent: FormData) {
@@ -52,8 +78,14 @@ async function end({ installId, me }: InstallContext, sent: FormData) {
   return redirect(out ? "/hangar" : `${boardOf(installId)}/crew#${form}`, 303);
 }
 
+async function leave(install: InstallContext, sent: FormData) {
+  const serve = ({ commandId }: z.output<typeof leaveForm>) => leaveInstall(actsOf(install)(commandId));
+  const acted = await formAct({ sent, form: "leave", schema: leaveForm, serve, anchor: () => "" });
+  return acted.done ? redirect("/hangar", 303) : data(acted.reply, { status: acted.status });
+}
+
 export default function Crew({ loaderData, actionData }: Route.ComponentProps) {
-  const { view, formId } = loaderData;
+  const { view, invitations, written, formId } = loaderData;
   return (
     <main id="main">
       <TitlePipe title="Crew" state={view.state} fill={view.fill} />
@@ -105,16 +137,18 @@ export default function Crew({ loaderData, actionData }: Route.ComponentProps) {
           </p>
         )}
       </section>
-      <section id="add" aria-labelledby="add-title" className="px-4 py-6 tablet:px-6">
-        <h2 id="add-title" className="pb-3 text-h3">
-          Add somebody
+      {view.may.ok && <Invitations invitations={invitations} written={written} formId={formId} reply={actionData} />}
+      <section id="invite" aria-labelledby="invite-title" className="px-4 py-6 tablet:px-6">
+        <h2 id="invite-title" className="pb-3 text-h3">
+          Invite somebody
         </h2>
         {view.may.ok ? (
-          <AddMember key={view.members.flatMap((m) => m.roles).length} commandId={`${formId}-add`} reply={actionData} />
+          <Invite key={invitations.map((i) => i.sendings).join()} commandId={`${formId}-invite`} reply={actionData} />
         ) : (
           <p className="max-w-[62ch] text-lead">{view.may.why}</p>
         )}
       </section>
+      <Leave commandId={`${formId}-leave`} reply={actionData} place={view.members.find((m) => m.me)?.place ?? null} />
     </main>
   );
 }

@@ -5,13 +5,16 @@ import type { z } from "zod";
 import { ErrorSummary } from "#app/components/forms/ErrorSummary";
 import { PasswordInput } from "#app/components/forms/PasswordInput";
 import { TextInput } from "#app/components/forms/TextInput";
+import { Anchor } from "#app/components/ui/Anchor";
 import { Fitting } from "#app/components/ui/Fitting";
+import { Notice } from "#app/components/ui/Notice";
 import { authenticator, SignInRefused } from "#app/lib/auth/authenticator.server";
 import { readSession } from "#app/lib/auth/session.server";
 import { readForm } from "#app/lib/http/form.server";
 import { returnPath } from "#app/lib/http/return-path";
 import { themeCookie } from "#app/lib/http/theme.server";
 import { signInForm } from "#app/lib/schemas/sign-in";
+import { isEmpty } from "#app/lib/services/first-person.server";
 import type { Route } from "./+types/_auth.sign-in";
 
 export const meta: Route.MetaFunction = () => [{ title: "Sign in · Bladecount" }];
@@ -19,7 +22,7 @@ export const meta: Route.MetaFunction = () => [{ title: "Sign in · Bladecount" 
 export async function loader({ request, url }: Route.LoaderArgs) {
   const to = returnPath(url.searchParams.get("to"));
   if (await readSession(request)) throw redirect(to);
-  return { to };
+  return { to, wasReset: url.searchParams.has("reset"), empty: await isEmpty() };
 }
 
 export async function action({ request }: Route.ActionArgs) {
@@ -54,6 +57,16 @@ export default function SignIn({ loaderData, actionData }: Route.ComponentProps)
         <div className="h-full w-4 bg-flow tablet:w-6 wide:w-12" />
       </div>
       <p className="text-lead">Is it ready to run, and what stops it.</p>
+      {loaderData.wasReset && !actionData && (
+        <Notice kind="done" title="Your new password is set." role="status">
+          You were signed out everywhere. Sign in with it.
+        </Notice>
+      )}
+      {loaderData.empty && (
+        <Notice kind="plain" title="Nobody has an account here yet.">
+          The server printed a link when it started. Open it to make the first account.
+        </Notice>
+      )}
       <Form method="post" {...getFormProps(form)} aria-label="Sign in" className="mt-4 flex flex-col gap-4">
         <ErrorSummary errors={wrong} title="You are not signed in" />
         <input type="hidden" name="to" value={loaderData.to} />
@@ -80,9 +93,14 @@ export default function SignIn({ loaderData, actionData }: Route.ComponentProps)
           Sign in
         </Fitting>
       </Form>
-      <p className="mt-3 text-note text-ink-2">
-        Your signing PIN is asked for later, each time that you sign. This product never replaces the maker’s manual, your authority’s rules
-        or a licensed person’s judgement.
+      <p className="mt-2">
+        <Anchor href="/forgot" className="inline-block py-3 font-semibold text-fitting-ink">
+          Forgot the password?
+        </Anchor>
+      </p>
+      <p className="text-note text-ink-2">
+        You join an install by an invitation of its lead, which comes by mail. Your signing PIN is asked for later, each time that you sign.
+        This product never replaces the maker’s manual, your authority’s rules or a licensed person’s judgement.
       </p>
     </>
   );

@@ -6,7 +6,7 @@ import { notFound } from "#app/lib/services/outcome";
 import { boardAnswer, tagOf } from "#app/lib/views/board-answer";
 import type { Route } from "./+types/api.v1.installs.$installId.board";
 
-export const middleware: Route.MiddlewareFunction[] = [requireUserOfApi];
+export const middleware: Route.MiddlewareFunction[] = [requireUserOfApi("read")];
 
 export async function loader({ request, params, context }: Route.LoaderArgs) {
   const install = await loadInstall(params.installId, actorOf(context));

@@ -7,7 +7,7 @@ import { invalid } from "#app/lib/services/outcome";
 import { signGates } from "#app/lib/services/sign-gates.server";
 import type { Route } from "./+types/api.v1.installs.$installId.gates.$gateId.signatures";
 
-export const middleware: Route.MiddlewareFunction[] = [requireUserOfApi];
+export const middleware: Route.MiddlewareFunction[] = [requireUserOfApi("record")];
 
 export function loader() {
   return Response.json(

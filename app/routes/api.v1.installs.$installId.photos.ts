@@ -7,7 +7,7 @@ import { refusedJson } from "#app/lib/http/respond.server";
 import { invalid, notFound } from "#app/lib/services/outcome";
 import type { Route } from "./+types/api.v1.installs.$installId.photos";
 
-export const middleware: Route.MiddlewareFunction[] = [requireUserOfApi];
+export const middleware: Route.MiddlewareFunction[] = [requireUserOfApi("record")];
 
 export function loader() {
   return Response.json({ code: "method", message: "A photo is sent by POST." }, { status: 405, headers: { Allow: "POST" } });

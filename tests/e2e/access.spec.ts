@@ -9,6 +9,8 @@ const tansy = placeOf("N0719T");
 
 const inAMonth = new Date(Date.now() + 30 * 86_400_000).toISOString().slice(0, 10);
 
+const TIP = "units=si&rotation=2700&reduction=1&diameter=1829&forward=0&temperature=15&blades=metal&ceiling=";
+
 const NEW =
   "registration=N0834S&name=Sundew&zone=UTC&delivery=gravity&metering=carb&ignition=mag&computers=0&cooling=air&lubrication=wet&drive=direct&propeller=fixed&gear=nose&starter=estart&history=new";
 
@@ -48,6 +50,10 @@ const PAGES: [name: string, first: string, path: string][] = [
   ["loose ends", "Jonas", `${sorrel.board}/loose-ends`],
   ["record", "Henrik", `${teasel.board}/record`],
   ["record, checked", "Henrik", `${teasel.board}/record?check=1`],
+  ["bench", "Jonas", `${sorrel.board}/bench`],
+  ["bench, calculator not worked out", "Jonas", `${sorrel.board}/bench/restraint`],
+  ["bench, worked out", "Jonas", `${sorrel.board}/bench/tip-speed?${TIP}`],
+  ["bench, to be put right", "Jonas", `${sorrel.board}/bench/crank?units=si&bursts.seconds=10`],
   ["board as it will stand", "Jonas", `${sorrel.board}?date=${inAMonth}&time=09:00`],
 ];
 

@@ -36,7 +36,7 @@ async function inviteOf(by: Person, email: string, role: "lead" | "builder" | "i
 const rolesOf = async (userId: string) => (await memberOf(db(), w.installId, userId))?.roles ?? null;
 const lastOnPeople = async (most: number) =>
   (await db().select().from(events).where(eq(events.installId, w.installId)).orderBy(events.seq))
-    .map((row) => row.body)
+    .map((row) => JSON.parse(row.body) as { type: string; by: string; data: object })
     .filter((body) => body.type === "member-added" || body.type === "role-ended")
     .slice(-most);
 

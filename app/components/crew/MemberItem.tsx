@@ -2,6 +2,7 @@ import { Form } from "react-router";
 import { FormFaults } from "#app/components/forms/FormFaults";
 import { HiddenIds } from "#app/components/forms/HiddenIds";
 import { Fitting } from "#app/components/ui/Fitting";
+import type { Role } from "#app/lib/gates/snapshot";
 import { type FormReply, fieldsOf } from "#app/lib/schemas/form-reply";
 import type { MemberView } from "#app/lib/views/crew";
 
@@ -12,10 +13,15 @@ interface MemberItemProps {
   may: boolean;
 }
 
-/** A member with the roles held now; a lead ends one here. */
+const ROLES: Role[] = ["crew", "builder", "inspector", "lead"];
+
+/** A member with the roles held now; a lead gives a further one here, or ends one. */
 export function MemberItem({ member, commandId, reply, may }: MemberItemProps) {
   const { back, faults } = fieldsOf(member.anchor, reply);
   const last = member.roles.length === 1;
+  const held = member.roles.map((r) => r.role);
+  // Nobody makes themselves the inspector.
+  const further = ROLES.filter((role) => !held.includes(role) && !(member.me && role === "inspector"));
   return (
     <li
       id={member.anchor}
@@ -39,9 +45,19 @@ export function MemberItem({ member, commandId, reply, may }: MemberItemProps) {
         {may && (
           <details open={back}>
             <summary className="min-h-hit py-3 font-semibold text-fitting-ink">
-              End a role<span className="sr-only"> of {member.name}</span>
+              Give or end a role<span className="sr-only"> of {member.name}</span>
             </summary>
             <FormFaults faults={faults} />
+            {further.length > 0 && (
+              <div className="flex flex-wrap gap-3 pb-4">
+                {further.map((role) => (
+                  <Form key={role} method="post" preventScrollReset>
+                    <HiddenIds commandId={`${commandId}-give-${role}`} intent="give-role" also={{ member: member.id, role }} />
+                    <Fitting label={`Give ${member.name} the role ${role}`}>Make {role}</Fitting>
+                  </Form>
+                ))}
+              </div>
+            )}
             <p className="max-w-[62ch] pb-2 text-ink-2">
               What was done and signed in it stays. {last && `Without a role ${member.me ? "you are" : "they are"} no longer a member. `}
               {member.place && "A run that has no GO yet waits for the place to be filled; GO turns into HOLD."}

@@ -8,11 +8,22 @@ export function RunFoot({ view }: { view: RunPageView }) {
   if (state === "called" || state === "running")
     return (
       <Foot {...foot}>
+        <Fitting href={`${view.href}/live`} size="act" note={state === "running" ? "the engine runs" : "start list, clocks, steps"}>
+          Live card
+        </Fitting>
         {acts.hold.ok && (
           <Fitting href={`${view.href}/hold`} size="act" variant="stop" note="says why, tells the crew">
             HOLD
           </Fitting>
         )}
+      </Foot>
+    );
+  if (state === "ended" || state === "reviewed")
+    return (
+      <Foot {...foot}>
+        <Fitting href={`${view.href}/review`} size="act" note="outcome, log, exceedances">
+          Review
+        </Fitting>
       </Foot>
     );
   if (state !== "planned" && state !== "held") return <Foot {...foot} />;

@@ -32,7 +32,7 @@ interface StripProps {
   children?: ReactNode;
 }
 
-/** The top strip: the registration as painted on the side, then words. On a phone the words scroll sideways. */
+/** The top strip: the registration as painted on the side, then words. On a phone the words scroll sideways, and a sign stands for the name. */
 export function Strip(props: StripProps) {
   const { homeHref, registration, ship, navLabel, links, person, role, saved, network, children } = props;
   const words = useRef<HTMLElement>(null);
@@ -77,6 +77,11 @@ export function Strip(props: StripProps) {
         </ul>
       </nav>
       <div className="strip-who">
+        {person && (
+          <Anchor className="strip-account" href="/account" aria-label={`Account of ${person}`}>
+            <AccountSign />
+          </Anchor>
+        )}
         {(person || saved) && (
           <p>
             {person && (
@@ -92,6 +97,16 @@ export function Strip(props: StripProps) {
         {children}
       </div>
     </header>
+  );
+}
+
+/** A head and shoulders, for where there is no room for the name. */
+function AccountSign() {
+  return (
+    <svg viewBox="0 0 24 24" width="26" height="26" fill="none" stroke="currentColor" strokeWidth="2.4" aria-hidden="true">
+      <circle cx="12" cy="8" r="4.6" />
+      <path d="M2.6 22.4c.6-5.2 4.4-7.6 9.4-7.6s8.8 2.4 9.4 7.6" strokeLinecap="round" />
+    </svg>
   );
 }
 

@@ -3,6 +3,7 @@
 export * from "./account-links";
 export * from "./api-tokens";
 export * from "./attempts";
+export * from "./bench-inputs";
 export * from "./commands";
 export * from "./crib";
 export * from "./events";

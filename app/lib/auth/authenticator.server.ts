@@ -50,7 +50,7 @@ async function signIn(
   if (!person || !right) {
     log.warn({ user: person?.userId, trace: currentRequest()?.traceId }, "a sign-in was refused");
     throw new SignInRefused(
-      "This e-mail address and password do not belong together. Check both. If the password is lost, ask a lead of your install, or whoever administers this instance, for a new one.",
+      "This e-mail address and password do not belong together. Check both. If the password is lost, have a link sent to you: “Forgot the password?” below.",
       400,
     );
   }

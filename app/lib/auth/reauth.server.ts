@@ -17,7 +17,12 @@ export async function checkPassword(userId: string, password: string): Promise<P
   for (const [kind, value] of [["address", address] as const, ["account", person.email] as const]) {
     const attempt = await beginAttempt(kind, value);
     if (!attempt.ok)
-      return { ok: false, status: 429, code: "too-often", message: `Too many wrong tries. Wait ${waitInWords(attempt.until)}, then try again.` };
+      return {
+        ok: false,
+        status: 429,
+        code: "too-often",
+        message: `Too many wrong tries. Wait ${waitInWords(attempt.until)}, then try again.`,
+      };
   }
   if (!(await matches(password, person.passwordHash))) {
     log.warn({ user: userId }, "a wrong password for a change of the account");

@@ -39,7 +39,8 @@ export interface Air {
  * Range -1000 to 11 000 m; RangeError outside.
  */
 export function standardAir(h: number): Air {
-  if (!(h >= ALTITUDE_RANGE.min && h <= ALTITUDE_RANGE.max)) throw new RangeError(`altitude must be -1000 to 11000 m, got ${h}`);
+  if (!(atLeast(h, ALTITUDE_RANGE.min) && atMost(h, ALTITUDE_RANGE.max)))
+    throw new RangeError(`altitude must be -1000 to 11000 m, got ${h}`);
   const temperature = T0 - lapse * h;
   const pressure = P0 * (temperature / T0) ** EXPONENT;
   return { pressure, temperature, density: airDensity(pressure, temperature), soundSpeed: soundSpeed(temperature) };

@@ -6,6 +6,7 @@ import type { Outcome } from "#app/lib/bench/check";
 import type { SheetForm } from "#app/lib/bench/form";
 import type { SheetResult } from "#app/lib/bench/sheet-result";
 import type { SheetKey } from "#app/lib/template/types";
+import type { UnitSystem } from "#app/lib/units/display";
 
 export type BenchKey = SheetKey | "torque" | "crank" | "tip-speed" | "atmosphere" | "static-power" | "battery" | "wire-drop";
 
@@ -23,4 +24,10 @@ export interface BenchDef {
   compute: (inputs: unknown) => Outcome<BenchResult>;
   /** The flat form as inputs, and where a path in the inputs is on the form. */
   fromForm?: (flat: Record<string, unknown>) => { inputs: Record<string, unknown>; locate: (path: string) => string };
+}
+
+/** A form of the bench as it was typed, to be read again: texts by field name ("straps.wll"), one entry per row, in one person's units. */
+export interface TypedForm {
+  units: UnitSystem;
+  fields: Record<string, string[]>;
 }

@@ -2,6 +2,7 @@
 import { z } from "zod";
 import { AIR_DENSITY, ALTITUDE, FAST, pressureField, RUN_UP_ALTITUDE, temperatureField } from "#app/lib/bench/air-fields";
 import {
+  ALTITUDE_RANGE,
   airDensity,
   densityAltitude,
   pressureAltitude,
@@ -12,7 +13,7 @@ import {
 } from "#app/lib/bench/atmosphere";
 import type { BenchDef, BenchResult } from "#app/lib/bench/bench-def";
 import { amount, check, notChosen, type Outcome } from "#app/lib/bench/check";
-import { atMost } from "#app/lib/bench/compare";
+import { atLeast, atMost } from "#app/lib/bench/compare";
 import { amountField, choiceField, type SheetForm } from "#app/lib/bench/form";
 import { figure } from "#app/lib/bench/sheet-result";
 import { toSI } from "#app/lib/units/convert";
@@ -25,8 +26,8 @@ const FIELD = {
   known: choiceField(
     "known",
     "Pressure from",
-    { station: "a gauge here", setting: "altimeter setting and elevation" },
-    "The manifold gauge with the engine off shows the pressure here.",
+    { station: "a gauge here", setting: "QNH and elevation" },
+    "The manifold gauge with the engine off shows it; QNH is the altimeter setting.",
   ),
   pressure: pressureField("pressure", "Pressure at the field", "As it is here, not reduced to sea level.", { when: station }),
   setting: amountField("setting", "Altimeter setting", "pressure", [87_000, 108_500], "QNH, as the tower or a report gives it.", {
@@ -83,6 +84,12 @@ const moistures = z.discriminatedUnion(
 const schema = z
   .intersection(z.intersection(z.object({ temperature: amount(FIELD.temperature) }), pressures), moistures)
   .superRefine((inputs, at) => {
+    if (inputs.known === "setting" && !atLeast(pressureAltitude(inputs.setting) + inputs.elevation, ALTITUDE_RANGE.min))
+      at.addIssue({
+        code: "custom",
+        path: ["setting"],
+        message: "With this elevation the air would be denser than at 1000 m (3281 ft) below sea level: check setting and elevation.",
+      });
     if (inputs.moisture === "dew" && !atMost(inputs.dewPoint, inputs.temperature))
       at.addIssue({
         code: "custom",

@@ -91,8 +91,8 @@ const schema = z
     });
   });
 
-/** Bursts on a clock that begins at 0 ms with the first one; `now` is ms too. Inputs as `compute` has checked them. */
-export function burstsOf(inputs: { since?: number; bursts: { before?: number; seconds: number; pressureAfter?: number }[] }) {
+/** Bursts on a clock that begins at 0 ms with the first one; `now` is ms too. */
+function burstsOf(inputs: z.infer<typeof schema>) {
   let at = 0;
   const bursts = inputs.bursts.map(({ before = 0, seconds, pressureAfter }, index): Burst => {
     if (index > 0) at += before * 1000;
@@ -101,6 +101,12 @@ export function burstsOf(inputs: { since?: number; bursts: { before?: number; se
     return burst;
   });
   return { bursts, now: at + (inputs.since ?? 0) * 1000 };
+}
+
+/** The bursts of a sheet's inputs, for drawing them; null where the inputs do not compute. */
+export function burstsIn(inputs: unknown) {
+  const checked = check(schema, inputs);
+  return checked.ok ? burstsOf(checked.value) : null;
 }
 
 /** Each burst that began before its rest was over, or lasted longer than the rule. */

@@ -90,11 +90,30 @@ interface PumpResult {
   figures: SheetFigure[];
 }
 
-function judgePump({ name: typed, catches }: Inputs["pumps"][number], inputs: Inputs, takeoff: number): PumpResult {
+const volumeOf = (row: Inputs["pumps"][number]["catches"][number], density: number) => row.volume ?? weighedVolume(row.mass ?? 0, density);
+const flowsOf = (pump: Inputs["pumps"][number], density: number) =>
+  pump.catches.map((row) => catchFlow({ volume: volumeOf(row, density), seconds: row.seconds }));
+const takeoffOf = (inputs: Inputs) => inputs.takeoffFlow ?? consumption(inputs.power ?? 0, inputs.specific ?? 0, inputs.density);
+
+/** Flow asked for and flow of each catch (m³/s), `counted` = the newest that agree; null where the inputs do not compute. */
+export function flowsIn(inputs: unknown) {
+  const checked = check(schema, inputs);
+  if (!checked.ok) return null;
+  const { value } = checked;
+  return {
+    required: requiredFlow(value.supply, takeoffOf(value)),
+    pumps: value.pumps.map((pump) => {
+      const flows = flowsOf(pump, value.density);
+      return { name: pump.name, flows, counted: agreeing(flows).length };
+    }),
+  };
+}
+
+function judgePump(pump: Inputs["pumps"][number], inputs: Inputs, takeoff: number): PumpResult {
+  const { name: typed, catches } = pump;
   // It begins sentences and lines.
   const name = `${typed.charAt(0).toUpperCase()}${typed.slice(1)}`;
-  const volumeOf = (row: Inputs["pumps"][number]["catches"][number]) => row.volume ?? weighedVolume(row.mass ?? 0, inputs.density);
-  const flows = catches.map((row) => catchFlow({ volume: volumeOf(row), seconds: row.seconds }));
+  const flows = flowsOf(pump, inputs.density);
   const counted = agreeing(flows);
   const flow = mean(counted);
   const ratio = flow / takeoff;
@@ -106,7 +125,13 @@ function judgePump({ name: typed, catches }: Inputs["pumps"][number], inputs: In
     figure(`${name}: spread of all catches`, "fraction", spread(flows)),
     figure(`${name}: flow over take-off consumption`, "ratio", ratio),
     ...(last
-      ? [figure(`${name}: longest time for a catch as large as the last`, "time", longestCatch(volumeOf(last), factor * takeoff))]
+      ? [
+          figure(
+            `${name}: longest time for a catch as large as the last`,
+            "time",
+            longestCatch(volumeOf(last, inputs.density), factor * takeoff),
+          ),
+        ]
       : []),
   ];
   if (counted.length < 2) {
@@ -136,7 +161,7 @@ function compute(inputs: unknown): Outcome<SheetResult> {
   const checked = check(schema, inputs);
   if (!checked.ok) return checked;
   const { value } = checked;
-  const takeoff = value.takeoffFlow ?? consumption(value.power ?? 0, value.specific ?? 0, value.density);
+  const takeoff = takeoffOf(value);
   const pumps = value.pumps.map((pump) => judgePump(pump, value, takeoff));
   const failing = pumps.filter((pump) => !pump.passes);
   const weakest = Math.min(...pumps.map((pump) => pump.ratio));

@@ -10,12 +10,13 @@ import { RESTRAINT_FIELD as F, PRESSURE_ALTITUDE, RESTRAINT_FORM } from "#app/li
 import { type RestraintInputs, restraintSchema, toStrap } from "#app/lib/bench/restraint-input";
 import { figure, type SheetDef, type SheetFigure, type SheetResult, use } from "#app/lib/bench/sheet-result";
 import { inducedVelocity, powerAt, staticThrust, thrustAt } from "#app/lib/bench/thrust";
-import { fromSI } from "#app/lib/units/convert";
+import { fromSI, toSI } from "#app/lib/units/convert";
 
 const ENDED_BY: Record<Line["by"], string> = { strap: "strap", anchor: "anchor", pair: "the weaker side of its pair" };
 const inRpm = (rotation: number, round: (n: number) => number): string => `${round(fromSI(rotation, "rpm"))} rpm`;
-/** The cap is never shown higher than it is. */
-const capText = (rotation: number): string => inRpm(rotation, (n) => Math.floor(n + 1e-6));
+/** A cap is never shown higher than it is: whole turns below it. */
+const wholeRpm = (rotation: number): number => toSI(Math.floor(fromSI(rotation, "rpm") + 1e-6), "rpm");
+const capText = (rotation: number): string => inRpm(wholeRpm(rotation), Math.round);
 
 export interface RestraintNumbers {
   /** kg/m³ */
@@ -69,7 +70,7 @@ function compute(inputs: unknown): Outcome<SheetResult> {
     ? [
         figure("Moment that tips it on its nose, at the planned rpm", "torque", nose.tipping),
         figure("Moment that keeps the tail down", "torque", nose.righting),
-        figure("Cap by nosing over", "rotation", nose.cap),
+        figure("Cap by nosing over", "rotation", wholeRpm(nose.cap)),
       ]
     : [];
   return {
@@ -78,7 +79,7 @@ function compute(inputs: unknown): Outcome<SheetResult> {
       passes: cap >= planned,
       sentence: sentenceFor(cap, planned, nose !== null && nose.cap < n.lineCap),
       cap,
-      margin: figure("Engine speed left to the cap", "rotation", cap - planned),
+      margin: figure("Engine speed left to the cap", "rotation", wholeRpm(cap) - planned),
       figures: [
         figure("Air density", "density", n.density, AIR_DENSITY),
         figure("Thrust at the reference speed", "force", n.thrustReference),
@@ -90,8 +91,10 @@ function compute(inputs: unknown): Outcome<SheetResult> {
         ...(value.wheels === "credited" ? [figure("Brakes and chocks", "force", n.wheelForce)] : []),
         figure("Holding", "force", holding),
         // A shortfall is a figure of its own, so that no force is shown below zero.
-        holding >= demand ? figure("Margin", "force", holding - demand) : figure("Short by", "force", demand - holding),
-        figure("Cap by the lines", "rotation", n.lineCap),
+        holding >= demand
+          ? figure("Margin of the lines", "force", holding - demand)
+          : figure("The lines are short by", "force", demand - holding),
+        figure("Cap by the lines", "rotation", wholeRpm(n.lineCap)),
         ...noseFigures,
         figure("Propeller speed at the planned rpm", "rotation", planned / value.reduction),
         figure("Power the propeller takes at the planned rpm", "power", powerAt(planned, reference, power)),
@@ -113,7 +116,10 @@ function sentenceFor(cap: number, planned: number, byNose: boolean): string {
 
 /** The form asks for the pressure, which a gauge shows; reading it has kept it inside the range of the atmosphere. */
 function fromForm({ pressure, ...rest }: Record<string, unknown>) {
-  const inputs = typeof pressure === "number" ? { ...rest, pressureAltitude: pressureAltitude(pressure) } : rest;
+  const { min, max } = PRESSURE_ALTITUDE;
+  // At an end of the range the last binary digit may fall outside.
+  const inside = (h: number) => Math.min(max, Math.max(min, h));
+  const inputs = typeof pressure === "number" ? { ...rest, pressureAltitude: inside(pressureAltitude(pressure)) } : rest;
   return { inputs, locate: (path: string) => (path === PRESSURE_ALTITUDE.name ? F.pressure.name : path) };
 }
 

@@ -1,6 +1,7 @@
 /** The tip speed sheet: Mach number of the propeller's tip at a speed, and the speed at which it meets the ceiling. Formulas: tip-speed.ts. */
 import { z } from "zod";
 import { FAST, temperatureField } from "#app/lib/bench/air-fields";
+import { soundSpeed } from "#app/lib/bench/atmosphere";
 import type { BenchDef, BenchResult } from "#app/lib/bench/bench-def";
 import { amount, check, notChosen, type Outcome } from "#app/lib/bench/check";
 import { atMost } from "#app/lib/bench/compare";
@@ -66,11 +67,11 @@ function compute(inputs: unknown): Outcome<BenchResult> {
   const mach = machNumber(speed, temperature);
   const limit = ceiling ?? (blades === "composite" ? null : MACH_CEILING[blades]);
   const figures = [
-    figure("Propeller speed", "rotation", rotation / reduction),
-    figure("Tip speed, helical", "speed", speed, FAST),
-    figure("Tip speed from turning alone", "speed", tipSpeed(diameter, rotation / reduction), FAST),
-    figure("Speed of sound", "speed", speed / mach, FAST),
     figure("Mach number of the tip", "ratio", mach),
+    figure("Tip speed, helical", "speed", speed, FAST),
+    figure("Propeller speed", "rotation", rotation / reduction),
+    figure("Tip speed from turning alone", "speed", tipSpeed(diameter, rotation / reduction), FAST),
+    figure("Speed of sound", "speed", soundSpeed(temperature), FAST),
   ];
   const says = `The tip goes at Mach ${mach.toFixed(3)}`;
   if (limit === null) {

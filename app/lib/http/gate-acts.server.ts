@@ -157,7 +157,7 @@ function preview(acting: Acting, read: ReadEntry): GateActed {
   if (!sheet || errors.length) return back(acting, 400, errors);
   const units = acting.install.me.units;
   const figures = sheet.figures.map((f) => {
-    const { value, unit } = format(f.quantity, f.value, units);
+    const { value, unit } = format(f.quantity, f.value, units, f.as?.[units]);
     return { label: f.label, value, unit };
   });
   const { passes, sentence, caution } = sheet;

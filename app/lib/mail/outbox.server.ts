@@ -7,6 +7,9 @@ import { now } from "#app/lib/clock";
 import { env } from "#app/lib/env.server";
 import { newId } from "#app/lib/ids";
 
+/** Kinds of mails whose link is a secret. */
+export const LINK_MAILS = ["invitation", "reset", "new-address"];
+
 export type Mail = {
   /** What it is about, in one word for the Mail page: "go", "hold", "pin-locked" ... */
   kind: string;
@@ -53,12 +56,19 @@ export async function enqueue(tx: Tx, mail: Mail): Promise<{ id: string; message
   return row;
 }
 
-/** Gives a mail that was given up another full set of tries, now. False when it was not given up. */
-export async function tryAgain(tx: Tx, where: { id: string; installId: string }): Promise<boolean> {
+/** Gives a mail that was given up another full set of tries, now. False when it was not given up. `installId` null: any mail of the instance. */
+export async function tryAgain(tx: Tx, where: { id: string; installId: string | null }): Promise<boolean> {
   const revived = await tx
     .update(outbox)
     .set({ failedAt: null, tries: 0, nextTryAt: now(), leaseUntil: 0 })
-    .where(and(eq(outbox.id, where.id), eq(outbox.installId, where.installId), isNotNull(outbox.failedAt), isNull(outbox.sentAt)))
+    .where(
+      and(
+        eq(outbox.id, where.id),
+        where.installId === null ? undefined : eq(outbox.installId, where.installId),
+        isNotNull(outbox.failedAt),
+        isNull(outbox.sentAt),
+      ),
+    )
     .returning({ id: outbox.id });
   return revived.length > 0;
 }

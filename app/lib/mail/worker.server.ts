@@ -7,6 +7,7 @@ import { type OutboxRow, outbox } from "#app/db/schema/outbox";
 import { now } from "#app/lib/clock";
 import { newId } from "#app/lib/ids";
 import { log } from "#app/lib/log.server";
+import { LINK_MAILS } from "#app/lib/mail/outbox.server";
 import { MailRefused, type SendMail, smtpSender } from "#app/lib/mail/transport.server";
 
 const leaseMs = 120_000;
@@ -38,7 +39,7 @@ export function mailWorker(send: SendMail = smtpSender()): MailWorker {
       }
       try {
         await send(row);
-        await settle(store, row, me, { sentAt: now(), lastError: null });
+        await settle(store, row, me, { sentAt: now(), lastError: null, ...withoutLink(row) });
         tally.sent++;
       } catch (error) {
         const reason = error instanceof Error ? error.message : String(error);
@@ -94,6 +95,11 @@ export function startMailWorker(send?: SendMail): MailWorker {
       return worker.stop();
     },
   };
+}
+
+/** Of links only hashes are kept: what was sent with one does not stay behind in the outbox. */
+function withoutLink({ kind }: OutboxRow): Partial<OutboxRow> {
+  return LINK_MAILS.includes(kind) ? { text: "The link was taken out when this mail had been sent.", html: null } : {};
 }
 
 async function lease(store: Database, me: string): Promise<OutboxRow | undefined> {

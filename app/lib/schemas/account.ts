@@ -30,7 +30,7 @@ const addressSchema = (message: string) =>
     .max(254, "This address is too long.")
     .pipe(z.email("Enter an address such as name@field.example."))
     // One plain address: what the mail goes to, and nothing that could name a second one.
-    .refine((text) => /^[^\s,;:<>"()[\]\\@]+@[^\s,;:<>"()[\]\\@]+$/.test(text), "Enter an address such as name@field.example.");
+    .pipe(z.string().regex(/^[^\s,;:<>"()[\]\\@]+@[^\s,;:<>"()[\]\\@]+$/, "Enter an address such as name@field.example."));
 
 const nameSchema = textSchema("Enter your name, as it is to stand under what you sign.", 80, 2);
 /** Untouched: no trimming, no change of case. How long and how guessable is judged where it is set. */
@@ -58,9 +58,7 @@ export const giveRoleForm = z.object({ commandId: commandIdSchema, member: idSch
 export const leaveForm = z.object({ commandId: commandIdSchema });
 
 /** Whoever joins without an account makes one. */
-export const newPersonForm = z
-  .object({ name: nameSchema, newPassword: passwordSchema, ...pinFields })
-  .refine(samePin.test, samePin.fault);
+export const newPersonForm = z.object({ name: nameSchema, newPassword: passwordSchema, ...pinFields }).refine(samePin.test, samePin.fault);
 export const firstPersonForm = z
   .object({ name: nameSchema, email: addressSchema("Enter your mail address."), newPassword: passwordSchema, ...pinFields })
   .refine(samePin.test, samePin.fault);
@@ -83,7 +81,7 @@ export const sessionForm = z.object({ session: idSchema });
 export const tokenForm = z.object({
   commandId: commandIdSchema,
   name: textSchema("Say what it is for, such as the display in the hangar.", 60, 2),
-  scopes: z.array(z.enum(SCOPES)).min(1, "Choose what it may do."),
+  may: z.enum(SCOPES, "Choose what it may do."),
   days: z.enum(TOKEN_DAYS, "Choose how long it is good for."),
   password: presentPassword,
 });

@@ -27,16 +27,6 @@ export function valueForm(def: ValueDef & Value, units: UnitSystem) {
   });
 }
 
-const ADDRESS = "Enter the mail address with which they sign in.";
-export const addMemberForm = z.object({
-  commandId: commandIdSchema,
-  email: z
-    .string(ADDRESS)
-    .transform((text) => text.trim().toLowerCase())
-    .pipe(z.email(ADDRESS)),
-  role: z.enum(["lead", "builder", "inspector", "crew"], "Choose what they do here."),
-});
-
 export const endRoleForm = z.object({ commandId: commandIdSchema, member: idSchema, role: roleSchema });
 
 export const mailAgainForm = z.object({ commandId: commandIdSchema, mail: idSchema });

@@ -13,6 +13,7 @@ import type { Role, RunAct, Snapshot } from "#app/lib/gates/snapshot";
 import type { RunMailKind, RunMailModel } from "#app/lib/mail/compose/model";
 import { composeRunMail } from "#app/lib/mail/compose/run-mail";
 import { enqueue } from "#app/lib/mail/outbox.server";
+import type { MailChoice } from "#app/lib/schemas/account";
 
 export interface CrewNews {
   kind: RunMailKind;
@@ -49,10 +50,18 @@ export async function notifyCrew(tx: Tx, news: CrewNews): Promise<void> {
   // What runs out is for those who can do it again; everything else is for whoever may come, and for the leads.
   const ids =
     news.kind === "runs-out" ? holders("lead", "builder") : [...new Set([...model.crew.map((c) => c.member), ...holders("lead")])];
-  const readers = await tx
-    .select({ id: users.id, name: users.name, email: users.email, units: users.units })
+  const people = await tx
+    .select({
+      id: users.id,
+      name: users.name,
+      email: users.email,
+      units: users.units,
+      mailOff: users.mailOff,
+      disabledAt: users.disabledAt,
+    })
     .from(users)
     .where(inArray(users.id, ids));
+  const readers = people.filter((p) => model.crew.some((c) => c.member === p.id && news.kind !== "runs-out") || wants(p, news.kind));
   const go = run.acts
     .filter((a) => a.act === "go" && a.id !== news.actId)
     .sort((a, b) => a.seq - b.seq)
@@ -73,6 +82,10 @@ export async function notifyCrew(tx: Tx, news: CrewNews): Promise<void> {
     });
   }
 }
+
+/** Of mails about runs on which somebody holds no place. Whoever holds one is told, whatever they chose. */
+const wants = ({ mailOff, disabledAt }: { mailOff: MailChoice[]; disabledAt: number | null }, kind: RunMailKind): boolean =>
+  disabledAt === null && !mailOff.includes(kind === "runs-out" ? "runs-out" : "runs");
 
 /** Who was mailed just now that this run is held, with no GO since. */
 async function toldOfHold(tx: Tx, { actId, e }: CrewNews, acts: RunAct[]): Promise<(string | null)[]> {

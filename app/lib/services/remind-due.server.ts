@@ -1,6 +1,6 @@
 // The clock's part for the crib: leads and builders get one mail some days before a calibration, a look or a service runs out, and
 // another when few are left. Each is written once for its thing, date and lead time, however often this looks.
-import { and, eq, gt, inArray, lte } from "drizzle-orm";
+import { and, eq, gt, inArray, isNull, lte } from "drizzle-orm";
 import { db, type Tx, write } from "#app/db/client.server";
 import { snapshotNow } from "#app/db/queries/snapshot-cache.server";
 import { extinguisherChecks, toolChecks } from "#app/db/schema/crib";
@@ -57,12 +57,19 @@ function wantedOf(s: Snapshot, at: number): Wanted[] {
   );
 }
 
+/** Those that are not written yet and go to somebody who wants them. */
 async function unwritten(reader: Pick<Tx, "select">, wanted: Wanted[]): Promise<Wanted[]> {
   if (!wanted.length) return [];
   const keys = wanted.map((w) => w.key);
   const rows = await reader.select({ key: outbox.dedupeKey }).from(outbox).where(inArray(outbox.dedupeKey, keys));
   const there = new Set(rows.map((r) => r.key));
-  return wanted.filter((w) => !there.has(w.key));
+  const members = [...new Set(wanted.map((w) => w.member))];
+  const people = await reader
+    .select({ id: users.id, mailOff: users.mailOff })
+    .from(users)
+    .where(and(inArray(users.id, members), isNull(users.disabledAt)));
+  const willing = new Set(people.filter((p) => !p.mailOff.includes("due")).map((p) => p.id));
+  return wanted.filter((w) => !there.has(w.key) && willing.has(w.member));
 }
 
 /** Judged again where it is written: somebody may have entered a check in between. */

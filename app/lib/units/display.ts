@@ -146,6 +146,9 @@ const PLAUSIBLE: Record<Quantity, readonly [number, number]> = {
   fraction: [-1, 100],
 };
 
+/** The same for units in which whole fields and airfields are measured, not parts. */
+const PLAUSIBLE_IN: Partial<Record<Unit, readonly [number, number]>> = { m: [-1000, 20_000], ft: [-1000, 20_000] };
+
 const refuse = (sentence: string): Entry => ({ ok: false, sentence });
 const SPACES = /[\s\u00a0\u2007\u2009\u202f]/g;
 const GROUPED = /^[+-]?\d{1,3}( \d{3})+(?=$|[.,])/;
@@ -188,7 +191,7 @@ export function parseEntry(text: string, quantity: Quantity, system: UnitSystem,
 
   const value = Number(joined.replace(",", "."));
   const si = toSI(value, key);
-  const [least, most] = PLAUSIBLE[quantity];
+  const [least, most] = PLAUSIBLE_IN[key] ?? PLAUSIBLE[quantity];
   if (!Number.isFinite(si) || si < least || si > most) {
     const low = format(quantity, least, system, key).value;
     return refuse(

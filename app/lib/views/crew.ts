@@ -36,13 +36,6 @@ export interface CrewPageView {
   may: { ok: boolean; why: string };
 }
 
-export const ROLE_DOES: Record<Role, string> = {
-  lead: "plans runs, calls GO, brings people in",
-  builder: "does the work, signs for it",
-  inspector: "checks the work of others, countersigns",
-  crew: "stands at a run, answers the roll call",
-};
-
 export const anchorOfMember = (id: string): string => `member-${id}`;
 
 export function crewPageView(e: Evaluation, me: Viewer): CrewPageView {

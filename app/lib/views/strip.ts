@@ -8,6 +8,17 @@ export interface StripView {
   asOf: string;
 }
 
+/** Above the pages that belong to no install. */
+export function everywhereLinks(current: string, isAdmin: boolean): (StripView["links"][number] & { current: boolean })[] {
+  const links = [
+    { label: "Hangar", href: "/hangar" },
+    { label: "New install", href: "/installs/new" },
+    { label: "Account", href: "/account" },
+    ...(isAdmin ? [{ label: "Instance", href: "/admin" }] : []),
+  ];
+  return links.map((link) => ({ ...link, current: link.href === current }));
+}
+
 export function stripOf(e: Evaluation, now: Instant): StripView {
   const home = boardOf(e.snapshot.install.id);
   const loose = e.snapshot.looseEnds.filter((l) => !l.confirmed).length;
@@ -20,6 +31,7 @@ export function stripOf(e: Evaluation, now: Instant): StripView {
       { label: "Crew", href: `${home}/crew` },
       { label: "Crib", href: `${home}/crib` },
       { label: "Set-up", href: `${home}/set-up` },
+      { label: "Bench", href: `${home}/bench` },
       { label: "Mail", href: `${home}/mail` },
       { label: "Record", href: `${home}/record` },
     ],
