@@ -12,6 +12,7 @@ import { expectedRotation } from "#app/lib/bench/static-power";
 import { machNumber, rotationAtMach, tipSpeed } from "#app/lib/bench/tip-speed";
 import { AIRCRAFT_WIRE, voltageDrop, warmed, wireResistance } from "#app/lib/bench/wire";
 import { toSI } from "#app/lib/units/convert";
+import { format, parseEntry } from "#app/lib/units/display";
 import { runsOf } from "./support/property-runs";
 
 const between = (min: number, max: number) => fc.double({ min, max, noNaN: true });
@@ -288,7 +289,7 @@ describe("every calculator of the bench", () => {
           if (margin && done.result.passes !== null)
             expect([key, done.result.passes || margin.value <= 0 || otherReason(key)]).toEqual([key, true]);
         }),
-        { numRuns: 12000 },
+        runsOf(800),
       );
       // The generator reaches results, not refusals alone; a rig of random straps is hardly ever symmetric and has its own properties above.
       if (key !== "restraint") expect(computed[key] ?? 0).toBeGreaterThan(0);
@@ -305,6 +306,24 @@ describe("every calculator of the bench", () => {
       expect(field.min).toBeLessThan(field.max);
       if (field.preset !== null) expect(field.preset >= field.min && field.preset <= field.max).toBe(true);
     }
+  });
+});
+
+describe("ranges", () => {
+  const amounts = BENCH_KEYS.flatMap((key) => {
+    const { fields, groups } = BENCH[key].form;
+    return [...fields, ...groups.flatMap((g) => g.fields)].flatMap((f) =>
+      f.kind === "quantity" ? [[`${key} ${f.name}`, f] as const] : [],
+    );
+  });
+
+  it.each(amounts)("both ends of %s can be typed, in both systems", (_name, field) => {
+    for (const units of ["si", "us"] as const)
+      for (const end of [field.min, field.max]) {
+        const as = field.as?.[units];
+        const entry = parseEntry(format(field.quantity, end, units, as).value, field.quantity, units, as);
+        expect(entry.ok || entry.sentence).toBe(true);
+      }
   });
 });
 

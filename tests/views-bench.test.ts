@@ -6,7 +6,8 @@ import { evaluate } from "#app/lib/gates/evaluate";
 import type { ValueKey } from "#app/lib/template/types";
 import { valueDefs } from "#app/lib/template/values";
 import { toSI } from "#app/lib/units/convert";
-import { benchCards, benchView, typedForm, workOut, worthKeeping } from "#app/lib/views/bench";
+import { benchCards, benchView } from "#app/lib/views/bench";
+import { typedForm, workOut, worthKeeping } from "#app/lib/views/bench-work";
 import { SAMPLES } from "./support/sample-traits";
 import { makeBoard } from "./support/snapshots";
 

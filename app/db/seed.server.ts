@@ -45,7 +45,16 @@ export async function seedDemo(): Promise<SignIn[]> {
 /** Accounts of the demo's people, by their keys. One password and one PIN for all: they are printed on the console anyway. */
 async function letPeopleIn(createdAt: number): Promise<Map<string, string>> {
   const [passwordHash, pinHash] = [await hash(PASSWORD), await hashPin(PIN)];
-  const rows = PEOPLE.map(({ key, name, email }) => ({ key, id: newId(), name, email, passwordHash, pinHash, createdAt }));
+  const rows = PEOPLE.map(({ key, name, email, admin }) => ({
+    key,
+    id: newId(),
+    name,
+    email,
+    passwordHash,
+    pinHash,
+    isAdmin: admin,
+    createdAt,
+  }));
   await write((tx) => tx.insert(users).values(rows.map(({ key: _, ...row }) => row)));
   return new Map(rows.map((r) => [r.key, r.id]));
 }

@@ -7,7 +7,8 @@ import type { BenchKey } from "#app/lib/bench/bench-def";
 import { readForm } from "#app/lib/http/form.server";
 import { installContext } from "#app/lib/http/install.server";
 import { keepBenchInputs } from "#app/lib/services/keep-bench-inputs.server";
-import { benchView, typedForm, workOut, worthKeeping } from "#app/lib/views/bench";
+import { benchView } from "#app/lib/views/bench";
+import { typedForm, workOut, worthKeeping } from "#app/lib/views/bench-work";
 import { boardOf } from "#app/lib/views/places";
 import type { Route } from "./+types/_app.installs.$installId.bench_.$sheet";
 

@@ -34,8 +34,12 @@ interface RouteFacts {
   acts: boolean;
 }
 
-/** Addresses that anybody may ask: the front door, signing in and out, the theme, the server's pulse, and what leads nowhere. */
-const PUBLIC = ["/", "/sign-in", "/sign-out", "/theme", "/health", "/ready", "/*"];
+/**
+ * Addresses that anybody may ask: the front door, signing in and out, the theme, the server's pulse, what leads nowhere, and what is
+ * opened by the link of a mail or of the server's start.
+ */
+const BY_LINK = ["/invitation/:token", "/reset/:token", "/confirm-address/:token", "/start/:token"];
+const PUBLIC = ["/", "/sign-in", "/sign-out", "/forgot", "/theme", "/health", "/ready", "/*", ...BY_LINK];
 
 const PASSWORD = "four loose words of a test";
 const PIN = "271828";
@@ -176,5 +180,80 @@ describe.each(ofInstall)("$path", ({ path, page, loads, acts }) => {
     }
     if (page) expect((await ask(`${path}.data`, { cookie: outsider })).status).toBe(404);
     if (acts) expect((await ask(path, { method: "POST", cookie: outsider })).status).toBe(404);
+  });
+});
+
+describe.each(BY_LINK)("%s", (path) => {
+  it("leads nowhere with a token that nobody was sent, whoever has it", async () => {
+    for (const cookie of ["", cookies.member]) {
+      for (const token of ["x", "A".repeat(43)]) {
+        const at = path.replace(":token", token);
+        expect((await ask(at, { cookie })).status).toBe(404);
+        const name = "Somebody New";
+        const form = { name, email: "new@n0.example", newPassword: PASSWORD, pin: "314159", pinAgain: "314159" };
+        const body = new URLSearchParams(form);
+        const sent = await fetch(`${address}${at}`, {
+          method: "POST",
+          body,
+          headers: { Cookie: cookie, Origin: address },
+          redirect: "manual",
+        });
+        expect(sent.status).toBe(409);
+        expect(sent.headers.getSetCookie().filter((c) => c.startsWith("bladecount="))).toEqual([]);
+      }
+    }
+  });
+});
+
+describe.each(guarded.filter((p) => p.path.startsWith("/admin")))("$path", ({ path, page, acts }) => {
+  it("is not there for whoever does not administer the instance", async () => {
+    const { member } = cookies;
+    expect((await ask(path, { cookie: member })).status).toBe(404);
+    if (page) expect((await ask(`${path}.data`, { cookie: member })).status).toBe(404);
+    if (acts) expect((await ask(path, { method: "POST", cookie: member })).status).toBe(404);
+  });
+});
+
+describe("a token of the API", () => {
+  const board = "/api/v1/installs/:installId/board";
+  const signatures = "/api/v1/installs/:installId/gates/:gateId/signatures";
+  const as = (token: string, path: string, method = "GET") =>
+    fetch(`${address}${addressOf(path)}`, {
+      method,
+      body: method === "GET" ? undefined : JSON.stringify({ commandId: newId(), as: "inspector", pin: PIN, covers: [] }),
+      headers: { Authorization: `Bearer ${token}`, "Content-Type": "application/json" },
+      redirect: "manual",
+    });
+  async function made(may: string, cookie: string | undefined): Promise<string> {
+    const form = { commandId: newId(), name: "a display", may, days: "30", password: PASSWORD };
+    const answer = await fetch(`${address}/account/tokens`, {
+      method: "POST",
+      body: new URLSearchParams(form),
+      headers: { Cookie: cookie ?? "", Origin: address },
+    });
+    return /bladecount_[0-9A-Za-z]{43}/.exec(await answer.text())?.[0] ?? "";
+  }
+
+  it("reads what its owner may read, and records only with that scope; no page opens with it", async () => {
+    const [reads, records] = [await made("read", cookies.member), await made("record", cookies.member)];
+    expect((await as(reads, board)).status).toBe(200);
+    const refused = await as(reads, signatures, "POST");
+    expect([refused.status, await refused.json()]).toEqual([403, expect.objectContaining({ code: "token-scope" })]);
+    // As far as the rules of signing: the gate's items are not done.
+    const judged = await as(records, signatures, "POST");
+    expect([judged.status, await judged.json()]).toEqual([403, expect.objectContaining({ code: "not-your-role" })]);
+    const page = await as(records, "/installs/:installId");
+    expect([page.status, page.headers.get("Location")]).toEqual([302, expect.stringContaining("/sign-in")]);
+  });
+
+  it("of another install's member finds nothing, and an unknown one nobody", async () => {
+    expect((await as(await made("read", cookies.outsider), board)).status).toBe(404);
+    const unknown = await as(`bladecount_${"A".repeat(43)}`, board);
+    expect([unknown.status, unknown.headers.get("WWW-Authenticate")]).toEqual([401, 'Bearer realm="bladecount"']);
+    // Beside a good session too: the token alone is judged.
+    const both = await fetch(`${address}${addressOf(board)}`, {
+      headers: { Authorization: "Bearer nothing", Cookie: cookies.member ?? "" },
+    });
+    expect(both.status).toBe(401);
   });
 });

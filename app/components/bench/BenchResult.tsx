@@ -20,7 +20,9 @@ export function BenchResult({ view, result, keep }: { view: BenchView; result: R
       <p className="bench-says" role="status">
         {result.sentence}
       </p>
-      <p className="bench-criterion">{view.criterion}</p>
+      <p className="bench-criterion">
+        <b>Criterion:</b> {view.criterion}
+      </p>
       {lead.map(({ label, value, unit }) => (
         <p key={label} className="bench-lead">
           {label} <Figure value={value} unit={unit} />

@@ -34,10 +34,16 @@ export function LiveCard({ view, commandId, board, now: drawn, reply }: LiveCard
   useBoardWatch(board, "");
   const { faults } = fieldsOf("live", reply);
   const all = state.answered.length >= view.card.begin.length;
-  const act = (intent: string, words: string, note: string, options: { stop?: boolean; reason?: string } = {}) => (
-    <Form method="post" className="grow">
+  const act = (intent: string, words: string, note: string, options: { stop?: boolean; small?: boolean; reason?: string } = {}) => (
+    <Form method="post">
       <HiddenIds commandId={`${commandId}-${intent.replace(" ", "")}`} intent={intent} />
-      <Fitting size="act" variant={options.stop ? "stop" : "filled"} note={note} reason={options.reason} busy={busy} className="w-full">
+      <Fitting
+        size={options.small ? "normal" : "act"}
+        variant={options.stop ? "stop" : options.small ? "outline" : "filled"}
+        note={note}
+        reason={options.reason}
+        busy={busy}
+      >
         {words}
       </Fitting>
     </Form>
@@ -110,12 +116,20 @@ export function LiveCard({ view, commandId, board, now: drawn, reply }: LiveCard
               {view.state === "running" ? "When the propeller stands" : "The run has ended"}
             </h2>
             <p className="max-w-[72ch]">{view.card.end.join("; ")}.</p>
-            {view.state === "ended" && (
-              <p className="mt-3 flex flex-wrap gap-3">
-                {view.post && <Fitting href={view.post.href}>{view.post.label}</Fitting>}
-                <Fitting href={view.review}>Review the run</Fitting>
-              </p>
-            )}
+            <div className="mt-3 flex flex-wrap gap-3">
+              {view.state === "running" &&
+                state.oil.above === null &&
+                state.step === 0 &&
+                view.may.takeBack.ok &&
+                act("take-back", "It never fired", "takes the start back", { small: true })}
+              {view.state === "ended" && view.outcome === null && view.may.outcome.ok && (
+                <>
+                  {act("completed", "Completed", "every step of the card was run", { small: true })}
+                  {act("cut short", "Cut short", "the rung stays to be done", { small: true })}
+                </>
+              )}
+              {view.state === "ended" && view.post && <Fitting href={view.post.href}>{view.post.label}</Fitting>}
+            </div>
           </section>
         )}
       </main>
@@ -135,17 +149,11 @@ export function LiveCard({ view, commandId, board, now: drawn, reply }: LiveCard
           act("start", "Engine starts", "uses the GO up", {
             reason: !view.may.start.ok ? view.may.start.why : all ? undefined : "answer the start list first",
           })}
-        {view.state === "running" && (
-          <>
-            {view.may.takeBack.ok && act("take-back", "It never fired", "takes the start back")}
-            {view.may.end.ok && act("ended", "Propeller stands", "reports the run ended", { stop: true })}
-          </>
-        )}
-        {view.state === "ended" && view.outcome === null && view.may.outcome.ok && (
-          <>
-            {act("completed", "Completed", "every step of the card was run")}
-            {act("cut short", "Cut short", "the rung stays to be done")}
-          </>
+        {view.state === "running" && view.may.end.ok && act("ended", "Propeller stands", "reports the run ended", { stop: true })}
+        {view.state === "ended" && (
+          <Fitting href={view.review} size="act" note="log, exceedances, what is left">
+            Review the run
+          </Fitting>
         )}
         {view.state === "other" && (
           <Fitting href={view.back} size="act">

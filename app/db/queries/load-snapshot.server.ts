@@ -1,6 +1,7 @@
 // Everything of one install that bears on readiness, for the gate evaluator: a fixed number of queries, whatever its size.
 import { eq } from "drizzle-orm";
 import type { Reader } from "#app/db/client.server";
+import { waitingEdits } from "#app/db/queries/edits.server";
 import { loadBoard } from "#app/db/queries/snapshot-board.server";
 import { loadHappenings } from "#app/db/queries/snapshot-happenings.server";
 import { loadRecords } from "#app/db/queries/snapshot-records.server";
@@ -22,11 +23,13 @@ export async function loadSnapshot(reader: Reader, installId: string): Promise<S
     .where(eq(installs.id, installId));
   if (!install) return null;
   const { traits, settings, ...named } = install;
-  const [board, records, happenings, buildUp] = await Promise.all([
+  const [board, records, happenings, buildUp, waiting] = await Promise.all([
     loadBoard(reader, installId),
     loadRecords(reader, installId),
     loadHappenings(reader, installId),
     loadRuns(reader, installId),
+    waitingEdits(reader, installId),
   ]);
-  return { install: { id: installId, ...named }, settings, traits, ...board, ...records, ...happenings, ...buildUp, editsWaiting: [] };
+  const editsWaiting = waiting.map(({ id, seq, recorded, by, as, subject, words }) => ({ id, seq, recorded, by, as, subject, words }));
+  return { install: { id: installId, ...named }, settings, traits, ...board, ...records, ...happenings, ...buildUp, editsWaiting };
 }

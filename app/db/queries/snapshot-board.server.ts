@@ -1,5 +1,5 @@
 // The snapshot's board: people, values, gates and items as they are defined now. One query a table.
-import { asc, eq } from "drizzle-orm";
+import { and, asc, eq } from "drizzle-orm";
 import type { Reader } from "#app/db/client.server";
 import { gates } from "#app/db/schema/gates";
 import { items } from "#app/db/schema/items";
@@ -17,7 +17,11 @@ export async function loadBoard(reader: Reader, installId: string): Promise<Pick
       .where(eq(members.installId, installId))
       .orderBy(asc(members.addedAt), asc(members.userId)),
     reader.select().from(memberRoles).where(eq(memberRoles.installId, installId)).orderBy(asc(memberRoles.from)),
-    reader.select().from(values).where(eq(values.installId, installId)).orderBy(asc(values.position)),
+    reader
+      .select()
+      .from(values)
+      .where(and(eq(values.installId, installId), eq(values.hidden, false)))
+      .orderBy(asc(values.position)),
     reader.select().from(gates).where(eq(gates.installId, installId)).orderBy(asc(gates.position), asc(gates.key)),
     reader.select().from(items).where(eq(items.installId, installId)).orderBy(asc(items.gateId), asc(items.position)),
   ]);

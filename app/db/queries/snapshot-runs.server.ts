@@ -1,5 +1,5 @@
 // The snapshot's build-up: rungs and runs with everything recorded about each. One query a table.
-import { asc, eq } from "drizzle-orm";
+import { and, asc, eq } from "drizzle-orm";
 import type { Reader } from "#app/db/client.server";
 import { groupBy } from "#app/db/queries/group-by";
 import { recorded } from "#app/db/queries/snapshot-records.server";
@@ -10,7 +10,11 @@ import type { RunAct, Snapshot } from "#app/lib/gates/snapshot";
 
 export async function loadRuns(reader: Reader, installId: string): Promise<Pick<Snapshot, "rungs" | "runs">> {
   const [rungRows, rungEventRows, runRows, plans, acked, answered, blew, acts, over, overAnswers] = await Promise.all([
-    reader.select().from(rungs).where(eq(rungs.installId, installId)).orderBy(asc(rungs.position)),
+    reader
+      .select()
+      .from(rungs)
+      .where(and(eq(rungs.installId, installId), eq(rungs.hidden, false)))
+      .orderBy(asc(rungs.position)),
     reader.select().from(rungEvents).where(eq(rungEvents.installId, installId)).orderBy(asc(rungEvents.seq)),
     reader.select().from(runs).where(eq(runs.installId, installId)).orderBy(asc(runs.label)),
     reader.select().from(planVersions).where(eq(planVersions.installId, installId)).orderBy(asc(planVersions.seq)),

@@ -15,6 +15,8 @@ export const rungs = sqliteTable(
     share: real("share").notNull(),
     card: text("card", { mode: "json" }).$type<RunCard>().notNull(),
     crew: text("crew", { mode: "json" }).$type<CrewRule>().notNull(),
+    /** The answers about the install ask for it no more, and no run of it was planned. */
+    hidden: integer("hidden", { mode: "boolean" }).notNull().default(false),
   },
   (t) => [primaryKey({ columns: [t.installId, t.key] })],
 );

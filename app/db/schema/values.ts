@@ -14,6 +14,8 @@ export const values = sqliteTable(
     value: real("value"),
     /** Where it was read; null = not confirmed. */
     source: text("source"),
+    /** The answers about the install ask for it no more. */
+    hidden: integer("hidden", { mode: "boolean" }).notNull().default(false),
   },
   (t) => [primaryKey({ columns: [t.installId, t.key] })],
 );

@@ -100,7 +100,11 @@ export function mayCrank(rule: CrankRule, bursts: readonly Burst[], at: number):
   if (last && used >= rule.tries) {
     const free = endOf(last) + rule.longRest * 1000;
     if (at < free)
-      return wait("long-rest", free, `The set of ${rule.tries} bursts is used up: let the starter cool for ${minutes(rule.longRest)}.`);
+      return wait(
+        "long-rest",
+        free,
+        `The set of ${rule.tries === 1 ? "one burst" : `${rule.tries} bursts`} is used up: let the starter cool for ${minutes(rule.longRest)}.`,
+      );
   } else if (last) {
     const free = endOf(last) + rests(rule, last);
     if (at < free) return wait("rest", free, "The starter rests between bursts: wait until the clock says so.");

@@ -146,7 +146,7 @@ function compute(inputs: unknown): Outcome<BenchResult> {
 
 export const ATMOSPHERE: BenchDef = {
   answers: "How thin is the air today: pressure altitude, density altitude, density?",
-  criterion: "None: the figures are for the other sheets and for the makers' charts.",
+  criterion: "Nothing to judge by: the figures are for the other sheets and for the makers' charts.",
   source: "U.S. Standard Atmosphere 1976 up to 11 km; water vapour by the Magnus formula (WMO guide to instruments, from memory).",
   form,
   compute,

@@ -117,12 +117,13 @@ function breaches(rule: CrankRule, bursts: Burst[]): string[] {
       return [
         may.at === null
           ? `Burst ${index + 1} came after the give-up total`
-          : `Burst ${index + 1} came ${secondsText((may.at - burst.at) / 1000)} s too soon`,
+          : `Burst ${index + 1} came ${restText((may.at - burst.at) / 1000)} too soon`,
       ];
     return burst.seconds > may.seconds + 1e-9 ? [`Burst ${index + 1} lasted ${secondsText(burst.seconds - may.seconds)} s too long`] : [];
   });
 }
 
+const restText = (seconds: number): string => (seconds >= 120 ? `${Math.ceil(seconds / 60)} min` : `${secondsText(seconds)} s`);
 const secondsText = (seconds: number): string => String(Math.round(seconds * 10) / 10);
 
 function compute(inputs: unknown): Outcome<BenchResult> {
@@ -139,7 +140,7 @@ function compute(inputs: unknown): Outcome<BenchResult> {
     ? `You may crank for at most ${secondsText(state.seconds)} s; ${state.left} left in this set, this burst included.`
     : state.at === null
       ? state.sentence
-      : `Not yet: ${secondsText((state.at - now) / 1000)} s of rest are left. ${state.sentence}`;
+      : `Not yet: ${restText((state.at - now) / 1000)} of rest are left. ${state.sentence}`;
   return {
     ok: true,
     result: {

@@ -107,14 +107,15 @@ function cautionChange(was: string | null, is: string | null): Change {
   return is === null ? less(`Without the caution “${was}”`) : words(`Caution “${is}” in place of “${was}”`);
 }
 
-/** A limit of null never ends; null hours after a run = not renewed by running, which is the narrower. */
+/** Hours of null never end. Whether a run renews a proof or cuts it short depends on when it ran, so a change of that kind counts as wider. */
 function validityChanges(was: Validity | null, is: Validity | null): Change[] {
   const [a, b] = [was ?? NEVER, is ?? NEVER];
-  const wider = (b.hours ?? Infinity) > (a.hours ?? Infinity) || (b.afterRunHours ?? 0) > (a.afterRunHours ?? 0);
-  // Without a figure from the proof a run's end would first make it run out.
-  const renewed = a.hours === null && a.afterRunHours !== null && b.afterRunHours === null && b.hours === null;
+  const wider =
+    (b.hours ?? Infinity) > (a.hours ?? Infinity) ||
+    (a.afterRunHours === null) !== (b.afterRunHours === null) ||
+    (b.afterRunHours ?? 0) > (a.afterRunHours ?? 0);
   const says = `Holds ${validityWords(is)}, was ${validityWords(was)}`;
-  return [wider || renewed ? less(says) : more(says)];
+  return [wider ? less(says) : more(says)];
 }
 const NEVER: Validity = { hours: null, afterRunHours: null };
 

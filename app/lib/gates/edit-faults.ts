@@ -17,7 +17,8 @@ export function editFault(s: Snapshot, edit: Edit): EditFault | null {
     case "add-gate":
       return s.gates.some((g) => g.id === edit.id || g.key === edit.key)
         ? { code: "stale", sentence: "A gate with that key stands here already. Load the page again." }
-        : (edgeFault(s, edit.id, edit.to.needs, edit.to.after) ?? circleFault(withGate(s, edit.id, edit.to)));
+        : (unsignedFault(edit.to.policy) ??
+            edgeFault(s, edit.id, edit.to.needs, edit.to.after) ?? circleFault(withGate(s, edit.id, edit.to)));
     case "add-item":
       return (
         subjectFault(s, { kind: "gate", id: edit.gate }) ??
@@ -30,7 +31,7 @@ export function editFault(s: Snapshot, edit: Edit): EditFault | null {
         subjectFault(s, { kind: "gate", id: edit.id }) ??
         staleFault(s, edit) ??
         edgeFault(s, edit.id, edit.to.needs ?? [], edit.to.after ?? []) ??
-        (edit.to.policy?.length === 0 ? order("A gate that nobody signs would stand by itself. Name who signs.") : null) ??
+        (edit.to.policy ? unsignedFault(edit.to.policy) : null) ??
         circleFault(withGate(s, edit.id, edit.to))
       );
     case "change-item":
@@ -71,6 +72,9 @@ function subjectFault(s: Snapshot, subject: EditSubject, hidden = false): EditFa
 
 const staleFault = (s: Snapshot, edit: Edit): EditFault | null =>
   isStale(s, edit) ? { code: "stale", sentence: "What this changes has been changed by somebody since." } : null;
+
+const unsignedFault = (policy: Gate["policy"]): EditFault | null =>
+  policy.length ? null : order("A gate that nobody signs would stand by itself. Name who signs.");
 
 function edgeFault(s: Snapshot, id: string, needs: string[], after: string[]): EditFault | null {
   const known = new Map(s.gates.map((g) => [g.id, g]));

@@ -70,7 +70,8 @@ function gatesNow(s: Snapshot, before: GeneratedBoard, after: GeneratedBoard, id
     if (!old || !def) return gate;
     const [a, b] = [fromDef(old), fromDef(def)];
     const next = {
-      ...carryOver({ ...a, needs: [], after: [] }, { ...b, needs: [], after: [] }, gate),
+      ...gate,
+      ...carryOver({ ...a, needs: [], after: [] }, { ...b, needs: [], after: [] }, { ...defOfGate(gate), needs: [], after: [] }),
       needs: mergeSet(a.needs, b.needs, gate.needs),
       after: mergeSet(a.after, b.after, gate.after),
     };
@@ -87,6 +88,12 @@ function gatesNow(s: Snapshot, before: GeneratedBoard, after: GeneratedBoard, id
   }
   return list;
 }
+
+const defOfGate = ({ id: _, revision: __, hidden: ___, lookBack, ...def }: Gate) => ({
+  ...def,
+  lookBack: lookBack?.kind === "rung" ? lookBack : null,
+});
+const defOfItem = ({ id: _, gate: __, revision: ___, hidden: ____, ...def }: Item) => def;
 
 interface ItemContext {
   gateIds: Ids;
@@ -117,7 +124,12 @@ function itemsNow(s: Snapshot, before: GeneratedBoard, after: GeneratedBoard, { 
     if (!old || !def) return item;
     const [a, b] = [fromDef(old), fromDef(def)];
     const next = {
-      ...carryOver({ ...a, follows: [], systems: [] }, { ...b, follows: [], systems: [] }, item),
+      ...item,
+      ...carryOver(
+        { ...a, follows: [], systems: [] },
+        { ...b, follows: [], systems: [] },
+        { ...defOfItem(item), follows: [], systems: [] },
+      ),
       follows: mergeSet(a.follows, b.follows, item.follows),
       systems: mergeSet(a.systems, b.systems, item.systems),
     };

@@ -25,5 +25,8 @@ export const boardEvents = [
   event("signature-withdrawn", { signature: id, reason: words }),
   event("release-signed", { covers: z.strictObject({ items: z.array(cover), signatures: z.array(id) }), ...signed }),
   event("release-signature-withdrawn", { signature: id, reason: words }),
+  event("board-edited", { edit: json, says: z.array(words), reason: words, proposal: id.nullable(), wordsOnly: z.boolean(), now: json }),
+  event("edit-proposed", { edit: json, subject: words, says: z.array(words), reason: words }),
+  event("edit-answered", { edit: id, answer: z.enum(["accepted", "accepted as words only", "rejected", "taken back"]), reason: words }),
   event("file-stored", { hash: sha256, mime: z.string(), size: z.number().int(), name: words }),
 ] as const; // biome-ignore format: a list of shapes

@@ -12,8 +12,8 @@ export interface Known {
   seq: number;
   /** Gate that it belongs to. */
   gate: string | null;
-  /** An item's parts, for its evidence in words. */
-  parts: Part[];
+  /** An item's parts since each of its revisions, oldest first, for its evidence in words. */
+  parts: { since: number; parts: Part[] }[];
   /** Quantity and label of a value of the install, under "value:<key>". */
   proofOf: string | null;
 }
@@ -26,7 +26,20 @@ export interface Names {
   name: string;
 }
 
-type Made = { id?: unknown; key?: unknown; words?: unknown; name?: unknown; gate?: unknown; parts?: unknown };
+type Made = {
+  id?: unknown;
+  key?: unknown;
+  words?: unknown;
+  name?: unknown;
+  gate?: unknown;
+  gateId?: unknown;
+  parts?: unknown;
+  revision?: unknown;
+};
+
+/** What the item asked for at that revision. */
+export const partsAt = (known: Known | undefined, revision: number): Part[] =>
+  (known?.parts.findLast((p) => p.since <= revision) ?? known?.parts[0])?.parts ?? [];
 
 const text = (x: unknown): string => (typeof x === "string" ? x : "");
 
@@ -39,11 +52,14 @@ export function namesIn(events: Iterable<RecordEvent>): Names {
   const names = { of, timeZone: "UTC", registration: "", name: "" };
   const put = (id: string, seq: number, words: string, more: Partial<Known> = {}) =>
     of.set(id, { words, seq, gate: null, parts: [], proofOf: null, ...more });
-  const gate = (made: Made, seq: number) => put(text(made.id), seq, text(made.name), { gate: text(made.id) });
+  const gate = (made: Made, seq: number) => put(text(made.id), of.get(text(made.id))?.seq ?? seq, text(made.name), { gate: text(made.id) });
   const item = (made: Made, seq: number) =>
-    put(text(made.id), seq, `${text(made.key)} ${text(made.words)}`.trim(), {
-      gate: text(made.gate) || null,
-      parts: Array.isArray(made.parts) ? (made.parts as Part[]) : [],
+    put(text(made.id), of.get(text(made.id))?.seq ?? seq, `${text(made.key)} ${text(made.words)}`.trim(), {
+      gate: text(made.gateId) || text(made.gate) || null,
+      parts: [
+        ...(of.get(text(made.id))?.parts ?? []),
+        { since: Number(made.revision ?? 1), parts: Array.isArray(made.parts) ? (made.parts as Part[]) : [] },
+      ],
     });
   const list = (x: unknown): Made[] => (Array.isArray(x) ? (x as Made[]) : []);
 
@@ -79,6 +95,17 @@ export function namesIn(events: Iterable<RecordEvent>): Names {
         for (const one of list(made?.items)) item(one, seq);
         break;
       }
+      case "board-edited": {
+        const now = event.data.now as { gates?: Made[]; items?: Made[] } | null;
+        for (const one of list(now?.gates)) gate(one, seq);
+        for (const one of list(now?.items)) item(one, seq);
+        const [about] = [...list(now?.items), ...list(now?.gates)];
+        put(id, seq, event.data.says[0] ?? "", { gate: of.get(text(about?.id))?.gate ?? null });
+        break;
+      }
+      case "edit-proposed":
+        put(id, seq, event.data.says[0] ?? event.data.subject);
+        break;
       case "opened":
         put(id, seq, event.data.reason);
         break;

@@ -29,6 +29,10 @@ export function pointsTo(event: RecordEvent): string | null {
       return event.data.tool;
     case "extinguisher-checked":
       return event.data.extinguisher;
+    case "board-edited":
+      return event.data.proposal;
+    case "edit-answered":
+      return event.data.edit;
     case "exceedance-answered":
       return event.data.exceedance;
     default:

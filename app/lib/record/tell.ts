@@ -7,7 +7,7 @@ import { when } from "#app/lib/gates/when";
 import { inSentence } from "#app/lib/gates/who";
 import type { EventType, RecordEvent } from "#app/lib/record/events";
 import { evidenceWords } from "#app/lib/record/evidence-words";
-import type { Names } from "#app/lib/record/names";
+import { type Names, partsAt } from "#app/lib/record/names";
 import { pointsTo } from "#app/lib/record/points-to";
 import { SYSTEM_NAMES } from "#app/lib/template/systems";
 import type { SystemKey } from "#app/lib/template/types";
@@ -24,6 +24,9 @@ const KIND_OF: Record<EventType, Kind> = {
   "role-ended": "set-up and people",
   "number-entered": "set-up and people",
   "value-confirmed": "set-up and people",
+  "board-edited": "set-up and people",
+  "edit-proposed": "set-up and people",
+  "edit-answered": "set-up and people",
   proof: "work",
   "proof-withdrawn": "work",
   "proof-confirmed": "work",
@@ -166,6 +169,17 @@ function sentence(event: RecordEvent, names: Names, units: UnitSystem): string[]
       return [`signed the release for taxi tests as ${event.as}`, event.data.meaning];
     case "release-signature-withdrawn":
       return ["withdrew the signature of the release", event.data.reason];
+    case "board-edited":
+      return [
+        event.data.proposal === null ? "changed the board" : "let the change of the board count",
+        ...event.data.says,
+        event.data.reason,
+        event.data.wordsOnly ? "Words only: what was proved before still speaks for it" : "",
+      ];
+    case "edit-proposed":
+      return ["asked for a change of the board, which waits for an inspector", event.data.subject, ...event.data.says, event.data.reason];
+    case "edit-answered":
+      return [`${ANSWERED[event.data.answer]} ${quote(name(event.data.edit))}`, event.data.reason];
     case "file-stored":
       return [
         `stored the photo ${event.data.name || "without a name"}`,
@@ -295,7 +309,7 @@ function proofSentence(event: Extract<RecordEvent, { type: "proof" }>, names: Na
   const words = quote(item?.words ?? data.key);
   const verb = { done: "proved", failed: "found not right:", na: "marked not applicable:" }[data.state];
   const details = data.evidence.flatMap((given, n) => {
-    const part = item?.parts[n];
+    const part = partsAt(item, data.revision)[n];
     return part ? [evidenceWords(part, given, units, names.timeZone)] : [];
   });
   const doer = data.did === event.by ? "" : `Done by ${names.of.get(data.did)?.words ?? "somebody else"}`;
@@ -304,6 +318,12 @@ function proofSentence(event: Extract<RecordEvent, { type: "proof" }>, names: Na
   return [`${verb} ${words}`, details.filter((d) => d !== "done").join("; "), doer, late, tools, data.note];
 }
 
+const ANSWERED = {
+  accepted: "accepted the change of the board",
+  "accepted as words only": "accepted as words only the change of the board",
+  rejected: "rejected the change of the board",
+  "taken back": "took back the change of the board",
+} as const;
 const photosWords = (n: number): string => (n === 0 ? "" : n === 1 ? "With a photo" : `With ${n} photos`);
 const capWords = (cap: number | null): string => (cap === null ? "" : `Not above ${rpmText(cap)}`);
 function valueShown(key: string, value: number | null, units: UnitSystem): string {
@@ -316,7 +336,7 @@ function valueShown(key: string, value: number | null, units: UnitSystem): strin
 function enteredWords({ data }: Extract<RecordEvent, { type: "number-entered" }>, names: Names, units: UnitSystem): string {
   if (typeof data.entered === "string") return data.entered;
   const band = data.entered as { min: number | null; max: number | null } | null;
-  const part = names.of.get(data.item)?.parts[data.part];
+  const part = partsAt(names.of.get(data.item), data.revision)[data.part];
   return band && part && "criterion" in part ? `${part.label}: ${formatBand(part.criterion.quantity, band, units)}` : "";
 }
 

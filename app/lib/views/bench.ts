@@ -1,18 +1,18 @@
 /**
- * A calculator's page: reads what the address or the kept inputs hold, computes it anew, and says it in the reader's units.
+ * A calculator's page: what stands in its form, what comes out, in the reader's units; and the list of all of them.
  * Pure: evaluation, form and instant in, plain view out.
  */
-import { BENCH, BENCH_KEYS, computeBench, readBenchForm } from "#app/lib/bench/bench";
+import { BENCH, BENCH_KEYS } from "#app/lib/bench/bench";
 import type { BenchKey, BenchResult, TypedForm } from "#app/lib/bench/bench-def";
-import { type FieldError, MOST_ROWS } from "#app/lib/bench/check";
 import type { SheetFigure } from "#app/lib/bench/sheet-result";
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import type { Instant } from "#app/lib/gates/snapshot";
 import { when } from "#app/lib/gates/when";
 import { fromSI } from "#app/lib/units/convert";
-import { displayUnit, format, formatBand, parseEntry, type UnitSystem } from "#app/lib/units/display";
+import { displayUnit, format, formatBand, type UnitSystem } from "#app/lib/units/display";
 import { type Drawing, drawingOf } from "#app/lib/views/bench-drawing";
-import { type BenchField, type BenchGroup, benchFields, benchGroups, prefill, type Standing } from "#app/lib/views/bench-form";
+import { type BenchField, type BenchGroup, benchFields, benchGroups, type Standing } from "#app/lib/views/bench-form";
+import { completed, workOut } from "#app/lib/views/bench-work";
 import { boardOf } from "#app/lib/views/places";
 
 export interface FigureView {
@@ -60,62 +60,6 @@ export interface Kept {
   inputs: TypedForm;
   by: string;
   recorded: Instant;
-}
-
-/** What an address or a form holds of a calculator's fields; null = it holds none. Unknown names and overlong texts are left out. */
-export function typedForm(key: BenchKey, sent: Iterable<readonly [string, unknown]>): TypedForm | null {
-  const { fields, groups } = BENCH[key].form;
-  const plain = new Set(fields.map((f) => f.name));
-  const repeated = new Set(groups.flatMap((g) => g.fields.map((f) => `${g.name}.${f.name}`)));
-  const form: Record<string, string[]> = {};
-  let units: UnitSystem | null = null;
-  for (const [name, value] of sent) {
-    if (typeof value !== "string") continue;
-    if (name === "units" && (value === "si" || value === "us")) units = value;
-    else if (plain.has(name) || repeated.has(name)) {
-      const there = form[name] ?? [];
-      if (there.length < (plain.has(name) ? 1 : MOST_ROWS)) form[name] = [...there, value.trim().slice(0, 80)];
-    }
-  }
-  return units && { units, fields: form };
-}
-
-/** What is worth keeping: without what the install itself fills in, so that this follows the install. */
-export function worthKeeping(e: Evaluation, key: BenchKey, form: TypedForm): TypedForm {
-  const fields = { ...form.fields };
-  for (const field of BENCH[key].form.fields) {
-    const own = prefill(e, key, field, form.units);
-    if (own && own.origin !== "default" && fields[field.name]?.[0] === own.text) delete fields[field.name];
-  }
-  return { units: form.units, fields };
-}
-
-/** The form with the install's values where a kept one leaves them out, in its own units. */
-function completed(e: Evaluation, key: BenchKey, { form, complete }: Standing): TypedForm {
-  if (complete) return form;
-  const fields = { ...form.fields };
-  for (const field of BENCH[key].form.fields) {
-    const filled = prefill(e, key, field, form.units);
-    if (filled && fields[field.name] === undefined) fields[field.name] = [filled.text];
-  }
-  return { units: form.units, fields };
-}
-
-type Worked = { ok: true; inputs: Record<string, unknown>; result: BenchResult } | { ok: false; errors: FieldError[] };
-
-/** @returns inputs in SI with their result, or what is wrong at which field. */
-export function workOut(e: Evaluation, key: BenchKey, form: TypedForm): Worked {
-  const { units, fields } = form;
-  const read = readBenchForm(key, new Map(Object.entries(fields)), (text, quantity, as) => parseEntry(text, quantity, units, as?.[units]));
-  if (!read.ok) return read;
-  // A value of the install that stands in its field as it was filled in is that value, not its rounded text.
-  for (const field of BENCH[key].form.fields) {
-    const own = prefill(e, key, field, units);
-    if (own?.si != null && typeof read.inputs[field.name] === "number" && fields[field.name]?.[0] === own.text)
-      read.inputs[field.name] = own.si;
-  }
-  const done = computeBench(key, read.inputs);
-  return done.ok ? { ok: true, inputs: read.inputs, result: done.result } : done;
 }
 
 export interface BenchParts {
@@ -184,7 +128,7 @@ export function resultView(key: BenchKey, inputs: Record<string, unknown>, resul
     word: passes === null ? "Worked out" : passes ? "Within the criterion" : "Outside the criterion",
     sentence,
     lead: margin ? [shown(margin)] : figures.slice(0, LEAD).map(shown),
-    figures: figures.map(shown),
+    figures: figures.slice(margin ? 0 : LEAD).map(shown),
     rule: rule
       ? {
           min: inUnit(rule.min),
