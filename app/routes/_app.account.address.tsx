@@ -43,14 +43,7 @@ export default function Address({ loaderData, actionData }: Route.ComponentProps
           also belong to another account here.
         </Notice>
       )}
-      <AccountForm
-        form="address"
-        label="Mail address"
-        reply={actionData}
-        commandId={formId}
-        act="Send the link"
-        note="the old address is told"
-      >
+      <AccountForm form="address" reply={actionData} commandId={formId} act="Send the link" note="the old address is told">
         <TextInput
           {...field("email")}
           type="email"

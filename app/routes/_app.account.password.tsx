@@ -30,14 +30,7 @@ export default function Password({ loaderData, actionData }: Route.ComponentProp
   const { field } = fieldsOf("password", actionData);
   return (
     <AccountPage title="Password" state="signs you out everywhere else">
-      <AccountForm
-        form="password"
-        label="Password"
-        reply={actionData}
-        commandId={loaderData.formId}
-        act="Change the password"
-        note="a mail tells you of it"
-      >
+      <AccountForm form="password" reply={actionData} commandId={loaderData.formId} act="Change the password" note="a mail tells you of it">
         <PresentPassword field={field} />
         <NewPassword field={field} />
       </AccountForm>

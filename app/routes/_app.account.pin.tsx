@@ -42,7 +42,6 @@ export default function Pin({ loaderData, actionData }: Route.ComponentProps) {
     <AccountPage title="Signing PIN" state={hasPin ? "set" : "not set: you cannot sign"}>
       <AccountForm
         form="pin"
-        label="Signing PIN"
         reply={actionData}
         commandId={formId}
         act={hasPin ? "Change the PIN" : "Set the PIN"}

@@ -88,15 +88,7 @@ export default function Tokens({ loaderData, actionData }: Route.ComponentProps)
         <h2 id="new" className="pb-3 text-h3">
           A new token
         </h2>
-        <AccountForm
-          key={tokens.length}
-          form="token"
-          label="A new token"
-          reply={reply}
-          commandId={formId}
-          act="Make the token"
-          note="it is shown once"
-        >
+        <AccountForm key={tokens.length} form="token" reply={reply} commandId={formId} act="Make the token" note="it is shown once">
           <TextInput {...field("name")} label="What it is for" hint="Such as the display in the hangar." maxLength={60} required />
           <ChoiceGroup
             {...field("may", "read")}

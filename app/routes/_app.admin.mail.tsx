@@ -53,7 +53,8 @@ export default function InstanceMail({ loaderData: { groups }, actionData }: Rou
         fill={all ? of("sent") / all : 1}
       />
       <p className="max-w-[62ch] px-4 pt-4 text-ink-2 tablet:px-6">
-        What is in a mail is not shown here, and of an install’s mails not the subject either. A GO that is over is not sent again.
+        What is in a mail is not shown here, and of an install’s mails not the subject either. A GO mail is sent again by a lead of its
+        install, while the GO is in force.
       </p>
       {groups.map(({ state, count, mails }) => (
         <section key={state} aria-labelledby={`mails-${NUT[state]}`}>
@@ -63,13 +64,13 @@ export default function InstanceMail({ loaderData: { groups }, actionData }: Rou
           </h2>
           {mails.length === 0 && <p className="px-4 py-3 text-ink-2 tablet:px-6">{NONE[state]}</p>}
           <ul>
-            {mails.map(({ id, anchor, to, what, says, error }) => (
+            {mails.map(({ id, anchor, to, what, says, error, again }) => (
               <StateRow key={id} id={anchor} nut={NUT[state]} word={state}>
                 <h3 className="text-lead break-words">{what}</h3>
                 <p className="break-words">{to}</p>
                 <p className="text-ink-2">{says}</p>
                 {error && <p className="text-note text-ink-2">{error}</p>}
-                {state === "given up" && (
+                {again && (
                   <Form method="post" className="flex flex-col items-start gap-2 pt-2" preventScrollReset>
                     <input type="hidden" name="mail" value={id} />
                     <FormFaults faults={fieldsOf(anchor, actionData).faults} />

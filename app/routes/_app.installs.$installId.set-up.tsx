@@ -27,6 +27,7 @@ export async function loader({ context }: Route.LoaderArgs) {
     leftOut: await leftOutOf(db(), installId),
     home: boardOf(installId),
     formId: newId(),
+    waiting: e.snapshot.editsWaiting.length,
   };
 }
 
@@ -45,7 +46,7 @@ export async function action({ context, request }: Route.ActionArgs) {
 }
 
 export default function SetUp({ loaderData, actionData }: Route.ComponentProps) {
-  const { view, leftOut, home, formId } = loaderData;
+  const { view, leftOut, home, formId, waiting } = loaderData;
   return (
     <>
       <main id="main">
@@ -55,6 +56,7 @@ export default function SetUp({ loaderData, actionData }: Route.ComponentProps) 
           fill={view.fill}
           aside={
             <>
+              <Fitting href={`${home}/set-up/board`}>Board editor{waiting > 0 && `, ${waiting} wait`}</Fitting>
               <Fitting href={`${home}/crew`}>Crew</Fitting>
               <Fitting href={`${home}/crib`}>Crib</Fitting>
             </>

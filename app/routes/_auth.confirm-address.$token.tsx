@@ -34,7 +34,7 @@ export default function ConfirmAddress({ loaderData: { waiting }, actionData }: 
       >
         Is this your address?
       </AuthTitle>
-      <AccountForm form="confirm" label="Confirm" reply={actionData} act={`Use ${waiting.address}`} note="the old address is told" />
+      <AccountForm form="confirm" reply={actionData} act={`Use ${waiting.address}`} note="the old address is told" />
     </>
   ) : (
     <>

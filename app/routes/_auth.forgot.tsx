@@ -44,7 +44,7 @@ export default function Forgot({ loaderData, actionData }: Route.ComponentProps)
       <AuthTitle says={<p>You get a mail with a link, with which you choose a new password. The signing PIN is another one and stays.</p>}>
         Forgot the password
       </AuthTitle>
-      <AccountForm form="forgot" label="Ask for a link" reply={actionData} act="Send me the link">
+      <AccountForm form="forgot" reply={actionData} act="Send me the link">
         <TextInput {...field("email")} type="email" label="E-mail" autoComplete="username" required />
       </AccountForm>
       <p className="mt-4">

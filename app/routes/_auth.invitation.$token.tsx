@@ -91,9 +91,7 @@ export default function Invitation({ loaderData, actionData, params }: Route.Com
       >
         Join {registration}
       </AuthTitle>
-      {reader === "invited" && (
-        <AccountForm form="accept" label={joins} reply={actionData} act={joins} note="its lead sees that you joined" />
-      )}
+      {reader === "invited" && <AccountForm form="accept" reply={actionData} act={joins} note="its lead sees that you joined" />}
       {reader === "signed out" && (
         <>
           <p className="mb-4">There is an account with this address. Sign in with it, then accept here.</p>
@@ -113,7 +111,7 @@ export default function Invitation({ loaderData, actionData, params }: Route.Com
         </Form>
       )}
       {reader === "new" && (
-        <AccountForm form="join" label={joins} reply={actionData} act={joins} note="and sign in on this browser">
+        <AccountForm form="join" reply={actionData} act={joins} note="and sign in on this browser">
           <TextInput {...field("name")} label="Your name" hint="As it is to stand under what you sign." autoComplete="name" required />
           {/* For the browser's list of passwords. */}
           <input type="hidden" name="username" autoComplete="username" defaultValue={email} />

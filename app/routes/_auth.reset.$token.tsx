@@ -29,7 +29,7 @@ export default function Reset({ loaderData, actionData }: Route.ComponentProps) 
       <AuthTitle says={<p>It signs you out on every device, and ends your API tokens. You sign in with it afterwards.</p>}>
         Choose a new password
       </AuthTitle>
-      <AccountForm form="reset" label="New password" reply={actionData} act="Use this password">
+      <AccountForm form="reset" reply={actionData} act="Use this password">
         <NewPassword field={fieldsOf("reset", actionData).field} />
       </AccountForm>
     </>

@@ -42,7 +42,7 @@ export default function Start({ loaderData, actionData }: Route.ComponentProps) 
       >
         The first account
       </AuthTitle>
-      <AccountForm form="start" label="First account" reply={actionData} act="Open the account" note="the link is over then">
+      <AccountForm form="start" reply={actionData} act="Open the account" note="the link is over then">
         <TextInput {...field("name")} label="Your name" hint="As it is to stand under what you sign." autoComplete="name" required />
         <TextInput {...field("email")} type="email" label="E-mail" hint="You sign in with it." autoComplete="username" required />
         <NewPassword field={field} />

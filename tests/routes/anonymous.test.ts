@@ -125,6 +125,7 @@ beforeAll(async () => {
   const plan = { run: null, rung: "1", plannedStart: null, place: "apron", rpm: rpm / 2, positions: [], windLimit: 5, gustLimit: 8 };
   ids.runId = value(await planRun(act(), plan)).run;
   ids.installId = made.install;
+  ids.sheet = "restraint";
   ids.gateId = (await db().select({ id: gates.id, key: gates.key, at: gates.installId }).from(gates)).find(
     (g) => g.key === "OP" && g.at === made.install,
   )?.id as string;

@@ -391,6 +391,13 @@ describe("an administrator", () => {
     expect(shown).not.toContain(tokenIn(mail?.text));
   });
 
+  it("does not send a GO mail again", async () => {
+    const row = { id: "g", kind: "go", toAddress: "ada@n0100.example", subject: "GO", text: "", messageId: "<g>", dedupeKey: "go:a:ada" };
+    await write((tx) => tx.insert(outbox).values({ ...row, createdAt: 0, nextTryAt: 0, failedAt: 1 }));
+    expect(await tryMailAgain(adm, "g")).toMatchObject(refused(409, "go-over"));
+    expect(await tryMailAgain(adm, "nothing")).toMatchObject(refused(404, "not-found"));
+  });
+
   it("sees what became of the mail, and has what was given up tried again", async () => {
     value(await sendReset(adm, "ada"));
     const fail = mailWorker(async () => {

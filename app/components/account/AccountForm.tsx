@@ -8,7 +8,6 @@ import type { FormReply } from "#app/lib/schemas/form-reply";
 interface AccountFormProps {
   /** Id of the form on its page. */
   form: string;
-  label: string;
   reply: FormReply | undefined;
   commandId?: string;
   intent?: string;
@@ -19,14 +18,14 @@ interface AccountFormProps {
 }
 
 /** One form about an account: what is wrong above it, the fields, the act. It cannot be sent twice while it is on its way. */
-export function AccountForm({ form, label, reply, commandId, intent, also, act, note, children }: AccountFormProps) {
+export function AccountForm({ form, reply, commandId, intent, also, act, note, children }: AccountFormProps) {
   const busy = useNavigation().state !== "idle";
   const mine = reply?.form === form ? reply : null;
   const wrong = Object.entries(mine?.errors ?? {}).flatMap(([field, list]) =>
     list.map((message) => ({ field: field ? `${form}-${field}` : null, message })),
   );
   return (
-    <Form method="post" aria-label={label} className="flex max-w-[640px] flex-col gap-5">
+    <Form method="post" aria-label={act} className="flex max-w-[640px] flex-col gap-5">
       <ErrorSummary errors={wrong} title="Not taken" />
       {commandId && <HiddenIds commandId={commandId} />}
       {intent && <input type="hidden" name="intent" value={intent} />}

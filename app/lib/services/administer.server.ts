@@ -2,6 +2,7 @@
 // They never choose a password, and nothing here reaches into an install.
 import { and, eq, isNotNull, isNull } from "drizzle-orm";
 import { db, type Tx, write } from "#app/db/client.server";
+import { outbox } from "#app/db/schema/outbox";
 import { type User, users } from "#app/db/schema/users";
 import { endAllSessions } from "#app/lib/auth/session.server";
 import { askedTooOften } from "#app/lib/auth/throttle.server";
@@ -102,10 +103,13 @@ export async function sendReset(by: By, person: string): Promise<Outcome<{ perso
   });
 }
 
-/** Another full set of tries. A GO mail goes out only while its GO is in force: the worker asks before it sends. */
+/** Another full set of tries. Whether a GO is still in force is for its leads to know, so its mail is theirs to send again. */
 export function tryMailAgain(by: By, mail: string): Promise<Outcome<{ mail: string }>> {
   return write(async (tx) => {
     if (!(await administrator(tx, by))) return notAdmin;
+    const [row] = await tx.select({ kind: outbox.kind }).from(outbox).where(eq(outbox.id, mail));
+    if (!row) return refuse(404, "not-found", "That mail is not here.");
+    if (row.kind === "go") return refuse(409, "go-over", "A GO mail is sent again by a lead of its install, while the GO is in force.");
     return (await tryAgain(tx, { id: mail, installId: null }))
       ? done({ mail })
       : refuse(409, "already", "This mail is not given up: it went out, or it waits for its next try. Nothing is left to do.");

@@ -49,6 +49,8 @@ export interface InstanceMailView {
   what: string;
   says: string;
   error: string | null;
+  /** Whether it can be tried again from here. */
+  again: boolean;
 }
 
 interface MailRow {
@@ -93,5 +95,6 @@ export function instanceMailView(row: MailRow): InstanceMailView {
     what,
     says: `written ${when(createdAt, "UTC")}, ${end}${often}`,
     error: state === "sent" ? null : lastError,
+    again: state === "given up" && kind !== "go",
   };
 }
