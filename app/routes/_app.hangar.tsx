@@ -10,6 +10,7 @@ import { hangarOf } from "#app/db/queries/hangar.server";
 import { actorOf } from "#app/lib/auth/actor.server";
 import { now } from "#app/lib/clock";
 import { hangarRow, hangarView } from "#app/lib/views/hangar";
+import { TEMPLATES } from "#app/lib/views/own-templates";
 import { everywhereLinks } from "#app/lib/views/strip";
 import type { Route } from "./+types/_app.hangar";
 
@@ -39,6 +40,11 @@ export default function Hangar({ loaderData }: Route.ComponentProps) {
       <main id="main">
         <TitlePipe title={view.title} state={view.state} fill={none ? 0 : 1} valve={view.waits ? "shut" : undefined} />
         {none ? <NoInstalls /> : <HangarTable key={search} rows={view.rows} search={search} newHref={NEW} />}
+        <p className="px-4 py-5 tablet:px-6">
+          <Fitting href={TEMPLATES} className="w-fit" note="boards that you keep to start from">
+            Own templates
+          </Fitting>
+        </p>
       </main>
       {none && (
         <Foot says="Start with the aircraft" note="Registration, engine, a page of questions. The board comes from the answers.">

@@ -56,7 +56,10 @@ export default function SetUp({ loaderData, actionData }: Route.ComponentProps) 
           fill={view.fill}
           aside={
             <>
-              <Fitting href={`${home}/set-up/board`}>Board editor{waiting > 0 && `, ${waiting} wait`}</Fitting>
+              <Fitting href={`${home}/set-up/board`}>
+                Board editor{waiting > 0 && `, ${waiting} ${waiting === 1 ? "waits" : "wait"}`}
+              </Fitting>
+              <Fitting href={`${home}/set-up/answers`}>Answers</Fitting>
               <Fitting href={`${home}/crew`}>Crew</Fitting>
               <Fitting href={`${home}/crib`}>Crib</Fitting>
             </>

@@ -34,7 +34,7 @@ export default function EditGate({ loaderData, actionData }: Route.ComponentProp
   return (
     <EditorPage
       title={view.title}
-      state={view.hidden ? "hidden gate" : "gate of the board"}
+      state={view.key ? `gate ${view.key}${view.hidden ? ", hidden" : ""}` : "not on the board yet"}
       back={back}
       reply={actionData}
       commandId={formId}

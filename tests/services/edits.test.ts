@@ -122,17 +122,13 @@ describe("after the first proof", () => {
   it("what asks for more counts at once and makes proof and signatures lapse", async () => {
     const item = await plainItem("MF");
     expect((await w.gate("MF")).stands).toBe(true);
-    expect(
-      value(
-        await edit(
-          "lio",
-          await ofItem(item.key, { secondEyes: !item.secondEyes, ...(item.secondEyes ? { caution: "Mind it." } : {}) }),
-          "",
-        ),
-      ).class,
-    ).toBe(item.secondEyes ? "waits" : "at once");
+    const photo = { kind: "photo", of: "the place", optional: false } as const;
+    expect(value(await edit("lio", await ofItem(item.key, { parts: [...item.parts, photo] }), ""))).toEqual({
+      class: "at once",
+      waiting: null,
+    });
     const e = await w.board();
-    expect(e.result.items[item.id]?.state).toBe("lapsed");
+    expect(e.result.items[item.id]?.stands).toBe(false);
     expect((await w.gate("MF")).state).toBe("lapsed");
   });
 

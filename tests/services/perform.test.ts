@@ -147,7 +147,9 @@ describe("the database itself", () => {
   };
   const appendOnly = `events proofs confirmations acceptances keeps proof_withdrawals signatures signature_withdrawals release_signatures
     release_signature_withdrawals openings opening_closings opening_mistakes opening_undisturbed loose_ends loose_end_events findings finding_events tool_checks
-    extinguisher_checks rung_events plan_versions acks answers winds run_acts exceedances exceedance_answers edits edit_answers files`.split(/\s+/);
+    extinguisher_checks rung_events plan_versions acks answers winds run_acts exceedances exceedance_answers edits edit_answers files`.split(
+    /\s+/,
+  );
 
   it.each(appendOnly)("holds %s append-only", async (table) => {
     const triggers = await raw(`SELECT name FROM sqlite_master WHERE type = 'trigger' AND tbl_name = '${table}'`);

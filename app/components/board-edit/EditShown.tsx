@@ -22,8 +22,8 @@ export function EditShown({ shown, commandId, reply }: EditShownProps) {
   const { field, faults } = fieldsOf("make", reply);
   const { json } = shown;
   useEffect(() => {
-    if (json) heading.current?.focus();
-  }, [json]);
+    if (json && reply) heading.current?.focus();
+  }, [json, reply]);
   const waits = shown.class === "waits";
   return (
     <section aria-labelledby="what-it-changes" className="border-t-2 border-ink bg-plate px-4 py-5 tablet:px-6">

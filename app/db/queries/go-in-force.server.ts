@@ -6,7 +6,7 @@ import { runActs } from "#app/db/schema/runs";
 /** @param act id of the GO. True while its window is open and nothing came after it: no HOLD, SCRUB or start. */
 export async function goStands(reader: Reader, act: string, at: number): Promise<boolean> {
   const [go] = await reader.select().from(runActs).where(eq(runActs.id, act));
-  if (!go || go.act !== "go" || (go.detail as { ends: number }).ends <= at) return false;
+  if (go?.act !== "go" || (go.detail as { ends: number }).ends <= at) return false;
   const after = await reader
     .select({ id: runActs.id })
     .from(runActs)

@@ -184,7 +184,7 @@ export function releaseOpenings(facts: Facts): Lack[] {
         disturbs(o) &&
         o.mistake?.as !== "inspector" &&
         o.systems.some((s) => RELEASE_SYSTEMS.includes(s)) &&
-        (o.closed === null || o.closed > since),
+        (o.closed === null || o.closed >= since),
     )
     .map(
       (o): Lack => ({

@@ -18,13 +18,14 @@ export function editFault(s: Snapshot, edit: Edit): EditFault | null {
       return s.gates.some((g) => g.id === edit.id || g.key === edit.key)
         ? { code: "stale", sentence: "A gate with that key stands here already. Load the page again." }
         : (unsignedFault(edit.to.policy) ??
-            edgeFault(s, edit.id, edit.to.needs, edit.to.after) ?? circleFault(withGate(s, edit.id, edit.to)));
+            edgeFault(s, edit.id, edit.to.needs, edit.to.after) ??
+            circleFault(withGate(s, edit.id, edit.to)));
     case "add-item":
       return (
         subjectFault(s, { kind: "gate", id: edit.gate }) ??
         (s.items.some((i) => i.id === edit.id || (i.gate === edit.gate && i.key === edit.key))
           ? { code: "stale", sentence: "An item with that key stands here already. Load the page again." }
-          : (systemsFault(edit.to.systems) ?? partsFault(edit.to.parts) ?? followsFault(s, edit.id, edit.gate, edit.to.follows)))
+          : (partsFault(edit.to.parts) ?? followsFault(s, edit.id, edit.gate, edit.to.follows)))
       );
     case "change-gate":
       return (
@@ -137,15 +138,9 @@ function itemFault(s: Snapshot, edit: Extract<Edit, { kind: "change-item" }>): E
   const { to } = edit;
   if (to.killer === false) return order("This item guards a life: that mark stays. Say why it does not apply on the item itself instead.");
   if (to.parts && isComputed(item)) return order("The board works this item out by itself: its evidence cannot be changed.");
-  return (
-    (to.systems ? systemsFault(to.systems) : null) ??
-    (to.parts ? partsFault(to.parts) : null) ??
-    (to.follows ? followsFault(s, item.id, item.gate, to.follows) : null)
-  );
+  return (to.parts ? partsFault(to.parts) : null) ?? (to.follows ? followsFault(s, item.id, item.gate, to.follows) : null);
 }
 
-const systemsFault = (systems: string[]): EditFault | null =>
-  systems.length ? null : order("An item of no system would never lapse when something is opened. Choose one at least.");
 const partsFault = (parts: unknown[]): EditFault | null =>
   parts.length ? null : order("An item that asks for no evidence would stand by nobody's word. Ask for a tick at least.");
 

@@ -1,5 +1,8 @@
 // The acts of the board editor's pages. An edit is shown with what it makes lapse before it is made; no page needs a script for that.
 
+import { db } from "#app/db/client.server";
+import { templateBaseOf } from "#app/db/queries/own-templates.server";
+import { templateOf } from "#app/lib/gates/board-template";
 import type { Edit } from "#app/lib/gates/edits";
 import { gateEdit, itemEdit, subjectOf } from "#app/lib/gates/edits";
 import { actsOf, formAct } from "#app/lib/http/form-acts.server";
@@ -9,8 +12,10 @@ import { commandIdSchema } from "#app/lib/schemas/act";
 import { readEdit } from "#app/lib/schemas/edit";
 import { answerForm, type Errors, readGateForm, readItemForm, sentBy } from "#app/lib/schemas/edit-forms";
 import { type FormReply, replyOf } from "#app/lib/schemas/form-reply";
+import { templateNameSchema } from "#app/lib/schemas/own-template";
 import { acceptEdit } from "#app/lib/services/accept-edit.server";
 import { editBoard } from "#app/lib/services/edit-board.server";
+import { keepTemplate } from "#app/lib/services/keep-template.server";
 import { rejectEdit } from "#app/lib/services/reject-edit.server";
 import { anchorOfSubject, keyForGate, keyForItem } from "#app/lib/views/board-edit";
 import { anchorOfEdit, type ShownEdit, shownEdit } from "#app/lib/views/edit-shown";
@@ -38,6 +43,8 @@ export async function actOnEdits(install: InstallContext, sent: FormData): Promi
       return look(install, sent, readEdit(sent.get("what")));
     case "make":
       return make(install, sent);
+    case "keep":
+      return keep(install, sent);
     case "accept":
     case "accept-words":
       return formAct({
@@ -59,6 +66,17 @@ export async function actOnEdits(install: InstallContext, sent: FormData): Promi
     default:
       return null;
   }
+}
+
+/** The board as a template of one's own; nothing on the install changes. */
+async function keep({ snapshot, installId, me }: InstallContext, sent: FormData): Promise<EditActed> {
+  const command = commandIdSchema.safeParse(sent.get("commandId"));
+  const name = templateNameSchema.safeParse(sent.get("name") ?? "");
+  if (!command.success || !name.success)
+    return refusedWith("keep", sent, name.success ? { "": [NO_EDIT] } : { name: name.error.issues.map((i) => i.message) }, 400);
+  const body = templateOf(snapshot, name.data, await templateBaseOf(db(), installId));
+  const outcome = await keepTemplate({ actor: { userId: me.id }, commandId: command.data }, body);
+  return outcome.ok ? { done: true, anchor: "kept" } : refusedWith("keep", sent, { "": [outcome.message] }, outcome.status);
 }
 
 const NO_EDIT = "The form does not say what to change. Load the page again; nothing was changed.";

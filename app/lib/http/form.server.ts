@@ -26,6 +26,8 @@ export interface Uploads {
   most: number;
   bytes: number;
   take: (file: FileUpload) => Promise<void>;
+  /** What they are called in a refusal; photos where nothing else is said. */
+  what?: { one: string; many: string };
 }
 
 /**
@@ -46,16 +48,21 @@ export async function readForm(request: Request, uploads?: Uploads): Promise<For
 
 const tooManyFields = () => data(`The form has more than ${MOST_FIELDS} fields. Nothing was changed; send less at once.`, { status: 413 });
 
-async function parsed(request: Request, { most, bytes, take }: Uploads = { most: 0, bytes: 0, take: async () => {} }): Promise<FormData> {
+const PHOTOS = { one: "photo", many: "photos" };
+
+async function parsed(
+  request: Request,
+  { most, bytes, take, what = PHOTOS }: Uploads = { most: 0, bytes: 0, take: async () => {} },
+): Promise<FormData> {
   try {
     return await parseFormData(request, { maxFiles: most, maxFileSize: bytes, maxParts: MOST_FIELDS }, take);
   } catch (error) {
     if (request.signal.aborted) throw error;
     if (error instanceof MaxPartsExceededError) throw tooManyFields();
     if (error instanceof MaxFilesExceededError)
-      throw data(`At most ${most} photos at once. Nothing was recorded; send fewer.`, { status: 413 });
+      throw data(`At most ${most} ${what.many} at once. Nothing was recorded; send fewer.`, { status: 413 });
     if (error instanceof MaxFileSizeExceededError)
-      throw data(`A photo may have at most ${bytes / 1_000_000} MB. Nothing was recorded; send a smaller one.`, { status: 413 });
+      throw data(`A ${what.one} may have at most ${bytes / 1_000_000} MB. Nothing was recorded; send a smaller one.`, { status: 413 });
     if (error instanceof MaxTotalSizeExceededError)
       throw data("That is more than is taken at once. Nothing was recorded; send less.", { status: 413 });
     if (error instanceof FormDataParseError || error instanceof MultipartParseError)

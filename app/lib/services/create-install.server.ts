@@ -1,5 +1,5 @@
-// Sets an install up: its board is generated from the answers about the engine and the values known so far.
-// Whoever sets it up is its lead.
+// Sets an install up: its board is generated from the answers about the engine and the values known so far, or made from a template of
+// one's own. Whoever sets it up is its lead.
 
 import { and, eq, gt } from "drizzle-orm";
 import { write } from "#app/db/client.server";
@@ -21,6 +21,7 @@ import { remember, replayOf } from "#app/lib/services/commands.server";
 import { done, notFound, type Outcome, refuse } from "#app/lib/services/outcome";
 import { recordWriter } from "#app/lib/services/record-writer.server";
 import { generate } from "#app/lib/template/generate";
+import { boardFrom, type OwnTemplate } from "#app/lib/template/own-template";
 import type { GeneratedBoard, ValueKey } from "#app/lib/template/types";
 
 const DAY = 24 * 60 * 60_000;
@@ -33,15 +34,23 @@ export interface NewInstall {
   leftOut: GeneratedBoard["leftOut"];
 }
 
+/** @param template its answers stand in for those of `input`, which must be the same. */
 export function createInstall(
   { actor, commandId }: { actor: { userId: string }; commandId: string },
   input: CreateInstall,
+  template: OwnTemplate | null = null,
 ): Promise<Outcome<NewInstall>> {
-  const command = { id: commandId, userId: actor.userId, installId: "", kind: "create-install", input };
+  const command = {
+    id: commandId,
+    userId: actor.userId,
+    installId: "",
+    kind: "create-install",
+    input: template ? { ...input, template } : input,
+  };
   const known: Partial<Record<ValueKey, number>> = Object.fromEntries(
     Object.entries(input.values).flatMap(([key, v]) => (v.value === null ? [] : [[key, v.value]])),
   );
-  const board = generate(input.traits, known);
+  const board = template ? boardFrom(template, known) : generate(input.traits, known);
   return write(async (tx) => {
     const first = await replayOf<NewInstall>(tx, command);
     if (first) return first;

@@ -12,6 +12,7 @@ type Option = { value: string; label: string };
 
 export interface GateFormView {
   title: string;
+  key: string;
   name: string;
   short: string;
   caution: string;
@@ -48,6 +49,7 @@ export function gateFormView(e: Evaluation, me: Viewer, gate: Gate | null): Gate
   const signers = [...new Set([...SIGN_PLACES, ...policy.map(placeCode)])];
   return {
     title: gate?.name ?? "New gate",
+    key: gate?.key ?? "",
     name: gate?.name ?? "",
     short: gate?.short ?? "",
     caution: gate?.caution ?? "",
