@@ -446,6 +446,25 @@ describe("preview and release", () => {
   });
 });
 
+describe("what was opened since the engine last ran", () => {
+  test.each([
+    ["at the very end of the run", 0, "not yet"],
+    ["after it", 1, "not yet"],
+    ["before it", -1, "ready"],
+  ])("an opening closed %s", (_, off, state) => {
+    const { board, run } = briefed();
+    board.completeRun(run);
+    const end =
+      evaluateBoard(board.s, board.now).runs.find((r) => r.id === run.id) &&
+      board.s.runs.flatMap((r) => r.acts).find((a) => a.act === "ended");
+    if (end?.act !== "ended") throw new Error("It has not ended");
+    const opening = board.open(["drive"]);
+    opening.opened = end.at + off;
+    opening.closed = end.at + off;
+    expect(evaluateBoard(board.s, board.now).release.state).toBe(state);
+  });
+});
+
 describe("what stops a run is never lost on the way", () => {
   test("a required gate that waits for one the run does not require still stops it", () => {
     const board = makeBoard({ X: { requiredBy: { kind: "release" }, items: { x: {} } }, W: { needs: ["X"], items: { w: {} } } });
