@@ -110,6 +110,19 @@ describe("an edit of the board", () => {
     expect(judged(ofItem(cap, { words: "Cap on.", secondEyes: true }))).toMatchObject({ wordsOnly: false, class: "waits" });
   });
 
+  it("leaves the template's keys to the template", () => {
+    const { b, first, cap } = worked();
+    const gateOf = (key: string): Edit => ({ kind: "add-gate", id: "new", key, before: null, to: { ...gateFields(first), needs: [] } });
+    const itemOf = (key: string): Edit => ({ kind: "add-item", id: "new", key, gate: first.id, to: itemFields(cap) });
+    expect([gateOf("QZ"), gateOf("TD"), itemOf("FS51"), itemOf("FS9"), itemOf("FP51")].map((e) => classOf(b.s, e).slice(0, 4))).toEqual([
+      "free",
+      "no: ",
+      "free",
+      "no: ",
+      "no: ",
+    ]);
+  });
+
   it("never hides what guards a life, its gate, or takes the mark away, not even before the first proof", () => {
     const { b, second, strap, purge } = worked();
     for (const edit of [

@@ -30,12 +30,13 @@ export function loader({ context, url }: Route.LoaderArgs) {
     records: recordPlaces(snapshot),
     view: boardView(e, me),
     whole: url.searchParams.has("whole"),
+    edits: snapshot.editsWaiting.length,
     watch: { address: `/api/v1/installs/${installId}/board`, tag: tagOf(boardAnswer(now, head)) },
   };
 }
 
 export default function Board({ loaderData }: Route.ComponentProps) {
-  const { view, home, whole, watch, records, later } = loaderData;
+  const { view, home, whole, watch, records, later, edits } = loaderData;
   useBoardWatch(watch.address, watch.tag);
   const { answer, stops, line, acts, clearance, crew } = view;
   const short = crew !== null && !whole;
@@ -65,6 +66,12 @@ export default function Board({ loaderData }: Route.ComponentProps) {
           <Line {...line} />
           {!later.when && (
             <Now acts={acts} nothing="Nothing waits for you here. What others do shows above as it happens." records={records} />
+          )}
+          {edits > 0 && (
+            <p className="border-t border-line px-4 py-4 tablet:px-6">
+              {edits === 1 ? "1 edit of the board waits" : `${edits} edits of the board wait`} for an inspector. Until then the old rule
+              holds. <Link to={`${home}/set-up/board#waiting`}>Board editor</Link>
+            </p>
           )}
           {clearance && (
             <section className="board-clearance" aria-labelledby="clearance-title">

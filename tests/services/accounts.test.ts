@@ -1,4 +1,4 @@
-import { eq } from "drizzle-orm";
+import { eq, sql } from "drizzle-orm";
 import { afterEach, beforeEach, describe, expect, it, vi } from "vitest";
 import { db, write } from "#app/db/client.server";
 import { instanceMail, mailCounts } from "#app/db/queries/instance-mail.server";
@@ -67,7 +67,7 @@ const me = async (id = "ada") => {
   if (!row) throw new Error("Nobody");
   return row;
 };
-const mails = (kind: string) => db().select().from(outbox).where(eq(outbox.kind, kind)).orderBy(outbox.createdAt, outbox.id);
+const mails = (kind: string) => db().select().from(outbox).where(eq(outbox.kind, kind)).orderBy(sql`rowid`);
 const tokenIn = (text: string | undefined) => /\/([0-9A-Za-z]{43})\n/.exec(text ?? "")?.[1] ?? "";
 const session = (userId: string) => write((tx) => startSession(tx, userId, "Firefox/1 (Android)"));
 const act = (id = "ada", sessionId = "", commandId = newId()) => ({ actor: { userId: id, sessionId }, commandId });

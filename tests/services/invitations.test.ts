@@ -1,4 +1,4 @@
-import { and, eq } from "drizzle-orm";
+import { and, eq, sql } from "drizzle-orm";
 import { afterEach, beforeEach, describe, expect, it } from "vitest";
 import { db, write } from "#app/db/client.server";
 import { openInvitations } from "#app/db/queries/invitations.server";
@@ -25,7 +25,7 @@ const STRANGER = "rhea@n0200.example";
 const NEW = { name: "Rhea Bellcrank", newPassword: "five odd rivets in a jar", pin: "314159" };
 const refused = (status: number, code: string) => ({ ok: false, status, code });
 
-const mails = (kind: string) => db().select().from(outbox).where(eq(outbox.kind, kind)).orderBy(outbox.createdAt, outbox.id);
+const mails = (kind: string) => db().select().from(outbox).where(eq(outbox.kind, kind)).orderBy(sql`rowid`);
 const tokenIn = (text: string | undefined) => /\/invitation\/([0-9A-Za-z]{43})\n/.exec(text ?? "")?.[1] ?? "";
 async function inviteOf(by: Person, email: string, role: "lead" | "builder" | "inspector" | "crew") {
   const before = new Set((await mails("invitation")).map((m) => m.id));

@@ -13,7 +13,7 @@ export function AccountRow({ title, children, acts }: AccountRowProps) {
     <li className="grid grid-cols-[minmax(0,1fr)_auto] items-center gap-x-4 border-b border-line py-3 tablet:gap-x-6">
       <div className="min-w-0">
         <h3 className="text-lead break-words">{title}</h3>
-        {children && <div className="text-ink-2">{children}</div>}
+        {children && <div className="text-ink-2 [overflow-wrap:anywhere]">{children}</div>}
       </div>
       {acts && <div className="flex flex-wrap gap-3">{acts}</div>}
     </li>

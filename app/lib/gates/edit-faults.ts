@@ -1,9 +1,10 @@
 /** Why an edit cannot be made at all: what it is about is not there, has moved on, guards a life, or would wait for itself. */
 import { siblings } from "#app/lib/gates/apply-edit";
 import { nameOfSubject } from "#app/lib/gates/edit-changes";
-import { type Edit, type EditSubject, isStale } from "#app/lib/gates/edits";
+import { type Edit, type EditSubject, isStale, OWN_ITEMS_AFTER } from "#app/lib/gates/edits";
 import type { Gate, Item, Snapshot } from "#app/lib/gates/snapshot";
 import { isComputed } from "#app/lib/gates/work-facts";
+import { TEMPLATE } from "#app/lib/template/template";
 
 export interface EditFault {
   code: "order" | "stale" | "not-found";
@@ -17,7 +18,8 @@ export function editFault(s: Snapshot, edit: Edit): EditFault | null {
     case "add-gate":
       return s.gates.some((g) => g.id === edit.id || g.key === edit.key)
         ? { code: "stale", sentence: "A gate with that key stands here already. Load the page again." }
-        : (unsignedFault(edit.to.policy) ??
+        : (gateKeyFault(edit.key) ??
+            unsignedFault(edit.to.policy) ??
             edgeFault(s, edit.id, edit.to.needs, edit.to.after) ??
             circleFault(withGate(s, edit.id, edit.to)));
     case "add-item":
@@ -25,7 +27,7 @@ export function editFault(s: Snapshot, edit: Edit): EditFault | null {
         subjectFault(s, { kind: "gate", id: edit.gate }) ??
         (s.items.some((i) => i.id === edit.id || (i.gate === edit.gate && i.key === edit.key))
           ? { code: "stale", sentence: "An item with that key stands here already. Load the page again." }
-          : (partsFault(edit.to.parts) ?? followsFault(s, edit.id, edit.gate, edit.to.follows)))
+          : (itemKeyFault(s, edit.gate, edit.key) ?? partsFault(edit.to.parts) ?? followsFault(s, edit.id, edit.gate, edit.to.follows)))
       );
     case "change-gate":
       return (
@@ -51,6 +53,18 @@ export function editFault(s: Snapshot, edit: Edit): EditFault | null {
     case "traits":
       return staleFault(s, edit);
   }
+}
+
+/** Keys of the template are the template's: other answers about the install may bring what has them. */
+const gateKeyFault = (key: string): EditFault | null =>
+  [...TEMPLATE.gates, TEMPLATE.postRunGate].some((g) => g.key === key)
+    ? order(`${key} is a gate of the template. Take another key.`)
+    : null;
+function itemKeyFault(s: Snapshot, gate: string, key: string): EditFault | null {
+  const own = s.gates.find((g) => g.id === gate)?.key ?? "";
+  return key.startsWith(own) && Number(key.slice(own.length)) > OWN_ITEMS_AFTER
+    ? null
+    : order(`Own items of ${own} are numbered from ${OWN_ITEMS_AFTER + 1} on.`);
 }
 
 const GONE: EditFault = { code: "not-found", sentence: "What this changes is not on the board. Load the page again." };

@@ -97,3 +97,6 @@ export function subjectOf(edit: Edit): EditSubject | null {
 
 /** Killer items of the gates of the run day are printed on the run card. */
 export const isOnCard = (killer: boolean, gateKey: string): boolean => killer && CARD_GATES.includes(gateKey);
+
+/** Items that people add are numbered above this; the template's numbers stay far below. */
+export const OWN_ITEMS_AFTER = 50;

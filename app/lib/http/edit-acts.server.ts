@@ -13,6 +13,7 @@ import { readEdit } from "#app/lib/schemas/edit";
 import { answerForm, type Errors, readGateForm, readItemForm, sentBy } from "#app/lib/schemas/edit-forms";
 import { type FormReply, replyOf } from "#app/lib/schemas/form-reply";
 import { templateNameSchema } from "#app/lib/schemas/own-template";
+import { isPlainText, NOT_PLAIN } from "#app/lib/schemas/plain-text";
 import { acceptEdit } from "#app/lib/services/accept-edit.server";
 import { editBoard } from "#app/lib/services/edit-board.server";
 import { keepTemplate } from "#app/lib/services/keep-template.server";
@@ -94,6 +95,7 @@ async function make(install: InstallContext, sent: FormData): Promise<EditActed>
   const command = commandIdSchema.safeParse(sent.get("commandId"));
   if (!edit || !command.success) return refusedWith(MAKE, sent, { "": [NO_EDIT] }, 400);
   const reason = String(sent.get("reason") ?? "").trim();
+  if (!isPlainText(reason)) return refusedWith(MAKE, sent, { "": [NOT_PLAIN] }, 400);
   const outcome = await editBoard(actsOf(install)(command.data), { edit, reason: reason.slice(0, 1000) });
   if (outcome.ok) {
     const subject = subjectOf(edit);

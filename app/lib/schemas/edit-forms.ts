@@ -38,11 +38,12 @@ function validity(sent: Sent, errors: Errors): Validity | null {
   return first === null && second === null ? null : { hours: first, afterRunHours: second };
 }
 
-/** Errors of a schema under the fields of the form; those of a part under its label. */
-function fieldErrors(issues: z.core.$ZodIssue[]): Errors {
+/** Errors of a schema under the fields of the form. @param prefixes of the parts' fields, in the order of the parts. */
+function fieldErrors(issues: z.core.$ZodIssue[], prefixes: string[] = []): Errors {
   const errors: Errors = {};
   for (const { path, message } of issues) {
-    const name = path[0] === "parts" ? (path[1] === undefined ? "" : `p${String(path[1])}.label`) : String(path[0] ?? "");
+    const part = path[0] === "parts" && typeof path[1] === "number" ? prefixes[path[1]] : undefined;
+    const name = part === undefined ? String(path[0] ?? "") : `${part}.${path.includes("band") ? "min" : "label"}`;
     errors[name] = [...(errors[name] ?? []), message];
   }
   return errors;
@@ -52,21 +53,26 @@ function fieldErrors(issues: z.core.$ZodIssue[]): Errors {
 export function readItemForm(sent: Sent, item: Item | null, peers: string[], units: UnitSystem): Read<ItemFields> {
   const errors: Errors = {};
   const kept = (item?.follows ?? []).filter((id) => !peers.includes(id));
-  const parts = (item?.parts ?? []).flatMap((part, n) => readPart(sent, part, n, units, errors) ?? []);
+  const parts = (item?.parts ?? []).flatMap((part, n) => {
+    const read = readPart(sent, part, n, units, errors);
+    return read ? [{ read, prefix: `p${n}` }] : [];
+  });
   const added = readNewPart(sent, units, errors);
+  if (added) parts.push({ read: added, prefix: "new" });
   const draft = {
     words: sent("words"),
     killer: sent("killer") !== "",
     secondEyes: sent("secondEyes") !== "",
     guarded: sent("guarded") !== "",
     systems: SYSTEMS.filter((key) => sent(`sys.${key}`) !== ""),
-    parts: added ? [...parts, added] : parts,
+    parts: parts.map((p) => p.read),
     follows: [...kept, ...peers.filter((id) => sent(`follow.${id}`) !== "")],
     validity: validity(sent, errors),
     caution: sent("caution") || null,
   };
   const read = itemFieldsSchema.safeParse(draft);
-  const all = { ...(read.success ? {} : fieldErrors(read.error.issues)), ...errors };
+  const prefixes = parts.map((p) => p.prefix);
+  const all = { ...(read.success ? {} : fieldErrors(read.error.issues, prefixes)), ...errors };
   return Object.keys(all).length || !read.success ? { ok: false, errors: all } : { ok: true, value: read.data };
 }
 

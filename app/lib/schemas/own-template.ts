@@ -4,6 +4,7 @@
  */
 import { z } from "zod";
 import { circle } from "#app/lib/gates/edit-faults";
+import { count } from "#app/lib/gates/who";
 import { textSchema } from "#app/lib/schemas/act";
 import { partSchema, policySchema, requiredBySchema, validitySchema } from "#app/lib/schemas/board-parts";
 import { isPlain, NOT_PLAIN } from "#app/lib/schemas/plain-text";
@@ -91,12 +92,21 @@ export function readTemplate(text: string): ReadTemplate {
   if (!isPlain(sent)) return no(NOT_PLAIN);
   const read = bodySchema.safeParse(sent);
   if (!read.success) {
-    const all = read.error.issues.map((issue) => `${placeOf(sent, issue.path)}: ${issue.message}`);
-    return no(...all.slice(0, MOST), ...(all.length > MOST ? [`And ${all.length - MOST} more faults.`] : []));
+    const all = read.error.issues.map(
+      (issue) => `${placeOf(sent, issue.path)}: ${/^(Invalid|Unrecognized|Too)/.test(issue.message) ? plainly(issue) : issue.message}`,
+    );
+    return no(...all.slice(0, MOST), ...(all.length > MOST ? [`And ${count(all.length - MOST, "more fault")}.`] : []));
   }
   const template = read.data as OwnTemplate;
   const faults = crossFaults(template);
   return faults.length ? no(...faults.slice(0, MOST)) : { ok: true, template };
+}
+
+/** The schema's own messages are written for programmers. */
+function plainly(issue: z.core.$ZodIssue): string {
+  if (issue.code === "unrecognized_keys") return `has fields that no template has (${issue.keys.join(", ").slice(0, 80)}). Take them out.`;
+  if (issue.code === "too_big" || issue.code === "too_small") return "is longer or shorter, or larger or smaller, than a template takes.";
+  return "is missing, or of another kind than a template has there.";
 }
 
 /** "Item FP3, words" rather than a path of numbers. */

@@ -11,6 +11,7 @@ import { count } from "#app/lib/gates/who";
 import { isComputed } from "#app/lib/gates/work-facts";
 import type { Viewer } from "#app/lib/views/board";
 import { crewActs } from "#app/lib/views/board-crew";
+import { editorOf } from "#app/lib/views/board-edit";
 import { openSystems } from "#app/lib/views/gate-first";
 import { itemsWords } from "#app/lib/views/items-words";
 import { boardOf, gateOf, runOf } from "#app/lib/views/places";
@@ -24,13 +25,20 @@ export interface ActView {
 const SIGNING: SigningRole[] = ["inspector", "builder", "lead"];
 
 export function actsOf(e: Evaluation, me: Viewer): ActView[] {
-  return [...crewActs(e, me.id), ...signActs(e, me), ...secondPersonActs(e, me), ...leadActs(e, me), ...workActs(e, me)];
+  return [
+    ...crewActs(e, me.id),
+    ...signActs(e, me),
+    ...secondPersonActs(e, me),
+    ...editActs(e, me),
+    ...leadActs(e, me),
+    ...workActs(e, me),
+  ];
 }
 
 /** What others wait for this person to do: card and roll call, signatures, second eyes, and GO where the run is clear. */
 export function waitingFor(e: Evaluation, me: Viewer): ActView[] {
   const calls = e.result.next?.clear ? leadActs(e, me) : [];
-  return [...crewActs(e, me.id), ...signActs(e, me), ...secondPersonActs(e, me), ...calls];
+  return [...crewActs(e, me.id), ...signActs(e, me), ...secondPersonActs(e, me), ...editActs(e, me), ...calls];
 }
 
 /** Gates that this person may sign now, with the role. */
@@ -59,6 +67,20 @@ function signActs(e: Evaluation, me: Viewer): ActView[] {
     note: `as ${as}, ${itemsWords(e, gate.id)}`,
     href: `${gateOf(install, gate.id)}/sign`,
   }));
+}
+
+/** Edits of the board that this inspector, who did not make them, may answer. */
+function editActs(e: Evaluation, me: Viewer): ActView[] {
+  const waiting = me.roles.includes("inspector") ? e.snapshot.editsWaiting.filter((w) => w.by !== me.id) : [];
+  if (!waiting.length) return [];
+  const subjects = waiting.map((w) => w.subject);
+  return [
+    {
+      label: `Answer ${count(waiting.length, "edit")} of the board`,
+      note: subjects.length > 2 ? `${subjects[0]} and ${subjects.length - 1} more` : subjects.join(", "),
+      href: `${editorOf(e.snapshot.install.id)}#waiting`,
+    },
+  ];
 }
 
 function secondPersonActs(e: Evaluation, me: Viewer): ActView[] {

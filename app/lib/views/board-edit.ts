@@ -1,13 +1,13 @@
 /** The board as its editor lists it: gates and their items in order, what is hidden, and what may be done with each. Pure. */
 import { mayEditBoard } from "#app/lib/gates/edit-verdicts";
-import type { Edit, EditSubject } from "#app/lib/gates/edits";
+import { type Edit, type EditSubject, OWN_ITEMS_AFTER } from "#app/lib/gates/edits";
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import type { Gate, Item } from "#app/lib/gates/snapshot";
 import { count } from "#app/lib/gates/who";
 import { TEMPLATE } from "#app/lib/template/template";
 import type { Viewer } from "#app/lib/views/board";
 import { type May, mayOf } from "#app/lib/views/may";
-import { boardOf, nameIn } from "#app/lib/views/places";
+import { boardOf } from "#app/lib/views/places";
 
 export const editorOf = (installId: string): string => `${boardOf(installId)}/set-up/board`;
 export const editGateOf = (installId: string, gate: string): string => `${editorOf(installId)}/gates/${gate}`;
@@ -127,9 +127,5 @@ export function keyForGate(e: Evaluation, name: string): string {
 /** Own items are counted from 51 on, so that no item of the template ever has their key. */
 export function keyForItem(e: Evaluation, gate: Gate): string {
   const numbers = e.snapshot.items.filter((i) => i.gate === gate.id).map((i) => Number(/\d+$/.exec(i.key)?.[0] ?? 0));
-  return `${gate.key}${Math.max(50, ...numbers) + 1}`;
+  return `${gate.key}${Math.max(OWN_ITEMS_AFTER, ...numbers) + 1}`;
 }
-
-/** "Waits for an inspector since 3 Dec 14:10", for the board and the gate. */
-export const waitingWords = (e: Evaluation): string[] =>
-  e.snapshot.editsWaiting.map((w) => `${w.subject}: ${w.words} (${nameIn(e.snapshot, w.by)}, ${e.facts.when(w.recorded)})`);

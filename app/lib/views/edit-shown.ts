@@ -11,7 +11,7 @@ import { nameIn } from "#app/lib/views/places";
 import { type WhatLapses, whatLapses } from "#app/lib/views/what-lapses";
 
 export interface ShownChange {
-  /** "asks for more", "asks for less", "other words", "order". */
+  /** "asks for more", "less or otherwise", "other words", "order only". */
   word: string;
   says: string;
 }
@@ -27,7 +27,12 @@ export interface ShownEdit {
   lapses: WhatLapses | null;
 }
 
-const WORDS: Record<Change["weight"], string> = { more: "asks for more", less: "asks for less", words: "other words", order: "order only" };
+const WORDS: Record<Change["weight"], string> = {
+  more: "asks for more",
+  less: "less or otherwise",
+  words: "other words",
+  order: "order only",
+};
 const WHEN: Record<EditClass, string> = {
   free: "Nothing has been proved on this board yet, so it counts at once.",
   "at once": "It asks for more, so it counts at once.",
