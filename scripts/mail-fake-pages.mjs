@@ -20,7 +20,7 @@ export function inboxPage(messages) {
     .reverse()
     .map(
       (m) =>
-        `<tr><td>${esc(m.date)}</td><td>${esc(m.to.join(", "))}</td><td><a href="/messages/${esc(m.id)}">${esc(m.subject || "(no subject)")}</a></td><td>${m.attachments.length || ""}</td></tr>`,
+        `<tr><td style="white-space:nowrap">${esc(m.date.replace("T", " ").slice(0, 16))}</td><td>${esc(m.to.join(", "))}</td><td><a href="/messages/${esc(m.id)}">${esc(m.subject || "(no subject)")}</a></td><td>${m.attachments.length || ""}</td></tr>`,
     );
   const list = rows.length
     ? `<table><thead><tr><th>Time (UTC)</th><th>To</th><th>Subject</th><th>Files</th></tr></thead><tbody>${rows.join("")}</tbody></table>`

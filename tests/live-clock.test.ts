@@ -1,5 +1,5 @@
 import { describe, expect, it } from "vitest";
-import { holdFace, oilFace } from "#app/lib/gates/live-clock";
+import { holdFace, oilFace } from "#app/lib/bench/live-clock";
 
 const t0 = 1_800_000_000_000;
 const at = (s: number) => t0 + s * 1000;

@@ -82,9 +82,9 @@ export default function Record({ loaderData }: Route.ComponentProps) {
         ))}
       </ol>
       {view.older && (
-        <p className="border-t border-line px-4 py-5 tablet:px-6">
+        <div className="flex border-t border-line px-4 py-5 tablet:px-6">
           <Fitting href={view.older}>Older lines</Fitting>
-        </p>
+        </div>
       )}
     </main>
   );

@@ -8,6 +8,7 @@ import { liveForm } from "#app/lib/schemas/live-forms";
 import type { Outcome } from "#app/lib/services/outcome";
 import { endRun, stateOutcome } from "#app/lib/services/report-run.server";
 import { startRun, takeBackStart } from "#app/lib/services/start-run.server";
+import { boardAnswer, tagOf } from "#app/lib/views/board-answer";
 import { liveView } from "#app/lib/views/live";
 import { runOf } from "#app/lib/views/places";
 import type { Route } from "./+types/_app.installs.$installId.runs.$runId_.live";
@@ -15,10 +16,11 @@ import type { Route } from "./+types/_app.installs.$installId.runs.$runId_.live"
 export const meta: Route.MetaFunction = ({ loaderData }) => [{ title: `${loaderData?.view.title ?? "Run"}, live card · Bladecount` }];
 
 export function loader({ context, params }: Route.LoaderArgs) {
-  const { e, me, installId } = context.get(installContext);
+  const { e, me, head, installId } = context.get(installContext);
   const view = liveView(e, params.runId, me.id);
   if (!view) throw new Response("Not found", { status: 404 });
-  return { view, commandId: newId(), board: `/api/v1/installs/${installId}/board`, now: e.at };
+  const watch = { address: `/api/v1/installs/${installId}/board`, tag: tagOf(boardAnswer(e, head)) };
+  return { view, commandId: newId(), watch, now: e.at };
 }
 
 export async function action({ context, params, request }: Route.ActionArgs) {

@@ -81,14 +81,13 @@ export default function OwnTemplates({ loaderData, actionData }: Route.Component
           <Form method="post" encType="multipart/form-data" className="flex flex-col items-start gap-3 pt-2">
             <FormFaults faults={read.faults} />
             <HiddenIds commandId={`${formId}-read`} intent="read" />
-            <div className="field max-w-full">
+            <div className="field photo-field">
               <label htmlFor="template-file">File of a template, JSON</label>
               <input
                 id="template-file"
                 type="file"
                 name="file"
                 accept="application/json,.json"
-                className="min-h-hit max-w-full py-2"
                 aria-describedby={errors ? "template-file-errors" : undefined}
                 aria-invalid={errors ? true : undefined}
               />

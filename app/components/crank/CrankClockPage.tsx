@@ -33,6 +33,7 @@ export function CrankClockPage({ view }: { view: CrankView }) {
     keepClock(view.item, next.clock);
   }
   const { rule } = view;
+  const figure = figureOf(face, rule.on);
   return (
     <main id="main" className="crank">
       <TitlePipe
@@ -41,7 +42,7 @@ export function CrankClockPage({ view }: { view: CrankView }) {
         fill={face.tone === "seen" ? 1 : Math.min(1, face.total / rule.giveUpAfter)}
         then={`${rule.on} s on at most, ${rule.rest} s of rest, ${rule.tries} bursts, then ${Math.round(rule.longRest / 60)} min; ${view.from}.`}
       />
-      <CautionSlab title="The propeller turns.">{view.caution}</CautionSlab>
+      <CautionSlab title="Cranking.">{view.caution}</CautionSlab>
       {!live && (
         <p className="px-4 py-6 text-lead tablet:px-6">
           The clock needs scripts. Without them, time the bursts by a watch and enter them at the item.
@@ -49,16 +50,18 @@ export function CrankClockPage({ view }: { view: CrankView }) {
       )}
       {live && (
         <>
-          <section className={`crank-face crank-${face.tone}`} aria-label="Clock">
-            <p className="crank-word" role="status">
+          <section className={`face face-${face.tone}`} aria-label="Clock">
+            <p className="face-word" role="status">
               {face.word}
             </p>
-            <p className="crank-figure" aria-hidden="true">
-              <Figure {...figureOf(face)} />
-            </p>
-            <p className="crank-says">{face.sentence}</p>
+            {figure && (
+              <p className="face-figure" aria-hidden="true">
+                <Figure {...figure} />
+              </p>
+            )}
+            <p className="face-says">{face.sentence}</p>
           </section>
-          <div className="crank-acts">
+          <div className="face-acts">
             {clock.running ? (
               <Fitting size="act" variant="stop" type="button" onClick={() => press("off")} centred>
                 Starter off
@@ -124,8 +127,9 @@ export function CrankClockPage({ view }: { view: CrankView }) {
   );
 }
 
-function figureOf({ figure, tone }: CrankFace): { value: string; unit?: string } {
-  if (figure === null) return { value: "–" };
+/** Ready, it shows how long one may crank; while it rests, how long still; null where there is nothing to count. */
+function figureOf({ figure, tone }: CrankFace, most: number): { value: string; unit: string } | null {
+  if (figure === null) return tone === "ready" ? { value: String(most), unit: "s" } : null;
   if (tone !== "rest") return { value: figure.toFixed(1), unit: "s" };
   return figure >= 120 ? { value: String(Math.ceil(figure / 60)), unit: "min" } : { value: String(figure), unit: "s" };
 }

@@ -1,16 +1,16 @@
-import { Form, useNavigation } from "react-router";
 import { useBoardWatch } from "#app/components/board/useBoardWatch";
 import { FormFaults } from "#app/components/forms/FormFaults";
-import { HiddenIds } from "#app/components/forms/HiddenIds";
+import { LiveAct } from "#app/components/live/LiveAct";
+import { LiveFoot } from "#app/components/live/LiveFoot";
 import { LiveSteps } from "#app/components/live/LiveSteps";
 import { OilClock } from "#app/components/live/OilClock";
 import { StartList } from "#app/components/live/StartList";
 import { useLiveState, useNow } from "#app/components/live/useLiveState";
 import { AbortWords } from "#app/components/run/AbortWords";
+import { RunCardView } from "#app/components/run/RunCardView";
 import { CautionSlab } from "#app/components/ui/CautionSlab";
 import { Figure } from "#app/components/ui/Figure";
 import { Fitting } from "#app/components/ui/Fitting";
-import { Foot } from "#app/components/ui/Foot";
 import { Notice } from "#app/components/ui/Notice";
 import { TitlePipe } from "#app/components/ui/TitlePipe";
 import { type FormReply, fieldsOf } from "#app/lib/schemas/form-reply";
@@ -19,48 +19,32 @@ import type { LiveView } from "#app/lib/views/live";
 interface LiveCardProps {
   view: LiveView;
   commandId: string;
-  /** Address of the board's answer: others follow by it. */
-  board: string;
+  /** The board's answer, by which others follow: its address, and the tag of the one that the page was drawn from. */
+  watch: { address: string; tag: string };
   /** The server's time when the page was drawn. */
   now: number;
   reply: FormReply | undefined;
 }
 
-/** Held by the run lead at the aircraft: the start by challenge and answer, oil pressure, each step with its clock, the end. */
-export function LiveCard({ view, commandId, board, now: drawn, reply }: LiveCardProps) {
+/**
+ * Held by the run lead at the aircraft: the start by challenge and answer, oil pressure, each step with its clock, the end.
+ * Its clocks belong to the device that holds the card: any other one shows the card and the time, and never a clock that nobody there
+ * has pressed.
+ */
+export function LiveCard({ view, commandId, watch, now: drawn, reply }: LiveCardProps) {
   const [state, change] = useLiveState(view.run);
   const now = useNow(view.state === "running", drawn);
-  const busy = useNavigation().state !== "idle";
-  useBoardWatch(board, "");
-  const { faults } = fieldsOf("live", reply);
-  const all = state.answered.length >= view.card.begin.length;
-  const act = (intent: string, words: string, note: string, options: { stop?: boolean; small?: boolean; reason?: string } = {}) => (
-    <Form method="post">
-      <HiddenIds commandId={`${commandId}-${intent.replace(" ", "")}`} intent={intent} />
-      <Fitting
-        size={options.small ? "normal" : "act"}
-        variant={options.stop ? "stop" : options.small ? "outline" : "filled"}
-        note={note}
-        reason={options.reason}
-        busy={busy}
-      >
-        {words}
-      </Fitting>
-    </Form>
-  );
+  useBoardWatch(watch.address, watch.tag);
+  const answered = state.answered.length >= view.card.begin.length;
+  const holds = view.leads && (answered || state.takenOver);
+  const { running, ended } = { running: view.state === "running", ended: view.state === "ended" };
   return (
     <>
       <main id="main">
         <TitlePipe
           title={view.title}
-          state={
-            view.state === "running"
-              ? `running since ${view.started}`
-              : view.state === "called"
-                ? "GO stands"
-                : (view.outcome ?? "live card")
-          }
-          fill={view.state === "running" ? 1 : 0.9}
+          state={view.says}
+          fill={running ? 1 : 0.9}
           then={
             <>
               Cleared to <Figure value={view.cleared} unit="rpm" className="font-bold" />, never above.
@@ -70,97 +54,93 @@ export function LiveCard({ view, commandId, board, now: drawn, reply }: LiveCard
         <CautionSlab title="A propeller is live, always.">
           Anybody may shout STOP, or cross the arms overhead. The maker’s manual and the run lead’s word come before this card.
         </CautionSlab>
-        <div className="px-4 pt-4 tablet:px-6">
-          <FormFaults faults={faults} />
+        <div className="px-4 pt-4 empty:hidden tablet:px-6">
+          <FormFaults faults={fieldsOf("live", reply).faults} />
         </div>
-        {view.follows && (
-          <Notice kind="plain" title="You follow this run." band>
-            The run lead holds the card. Whatever you see wrong: shout STOP first.
-          </Notice>
-        )}
         {view.state === "called" && (
           <>
             <StartList
               items={view.card.begin}
               answered={state.answered}
-              onAnswer={(n) => change({ answered: [...new Set([...state.answered, n])] })}
+              onAnswer={view.leads ? (n) => change({ answered: [...new Set([...state.answered, n])] }) : null}
             />
-            {view.stops.length > 0 && (
-              <section className="px-4 py-4 tablet:px-6" aria-labelledby="stops">
-                <h2 id="stops" className="text-h3">
-                  What stops the start
-                </h2>
-                <ul className="mt-2 border-t border-line">
-                  {view.stops.map((s) => (
-                    <li key={s.title} className="border-b border-line py-2">
-                      <b>{s.title}.</b> {s.sentence}
-                    </li>
-                  ))}
-                </ul>
-              </section>
-            )}
+            <Stops stops={view.stops} />
           </>
         )}
-        {view.state === "running" && view.startedAt !== null && (
+        {view.state === "other" && (
+          <Notice kind="plain" title="There is no GO." band>
+            The lead calls GO on the page of the run; the start list is read out here then.
+          </Notice>
+        )}
+        {running && !holds && (
+          <Notice
+            kind="plain"
+            title={view.leads ? "Another device holds the card." : "You follow this run."}
+            band
+            action={
+              view.leads && (
+                <Fitting type="button" onClick={() => change({ takenOver: true })}>
+                  Hold it here
+                </Fitting>
+              )
+            }
+          >
+            {view.leads ? "Its clocks run there." : "The run lead holds the card."} Whatever you see wrong: shout STOP first.
+          </Notice>
+        )}
+        {running && holds && view.startedAt !== null && (
           <>
-            {view.oil && <OilClock fired={view.startedAt} marks={state.oil} now={now} onMark={(oil) => change({ oil })} />}
+            {view.oil && !state.takenOver && (
+              <OilClock fired={view.startedAt} marks={state.oil} now={now} onMark={(oil) => change({ oil })} />
+            )}
             <LiveSteps steps={view.steps} state={state} now={now} started={view.startedAt} onChange={change} />
           </>
         )}
-        <div className="px-4 py-4 tablet:px-6">
-          <AbortWords parts={view.card.abort} />
-        </div>
-        {(view.state === "ended" || view.state === "running") && (
-          <section className="border-t-2 border-ink px-4 py-4 tablet:px-6" aria-labelledby="end">
+        {(running || ended) && (
+          <section className="border-b-2 border-ink px-4 py-4 tablet:px-6" aria-labelledby="end">
             <h2 id="end" className="text-h3">
-              {view.state === "running" ? "When the propeller stands" : "The run has ended"}
+              {running ? "When the propeller stands" : "The run has ended"}
             </h2>
             <p className="max-w-[72ch]">{view.card.end.join("; ")}.</p>
-            <div className="mt-3 flex flex-wrap gap-3">
-              {view.state === "running" &&
-                state.oil.above === null &&
-                state.step === 0 &&
-                view.may.takeBack.ok &&
-                act("take-back", "It never fired", "takes the start back", { small: true })}
-              {view.state === "ended" && view.outcome === null && view.may.outcome.ok && (
+            <div className="mt-3 flex flex-wrap gap-3 empty:hidden">
+              {running && state.oil.above === null && state.step === 0 && view.may.takeBack.ok && (
+                <LiveAct intent="take-back" commandId={commandId} words="It never fired" note="takes the start back" small />
+              )}
+              {ended && view.outcome === null && view.may.outcome.ok && (
                 <>
-                  {act("completed", "Completed", "every step of the card was run", { small: true })}
-                  {act("cut short", "Cut short", "the rung stays to be done", { small: true })}
+                  <LiveAct intent="completed" commandId={commandId} words="Completed" note="every step of the card was run" small />
+                  <LiveAct intent="cut short" commandId={commandId} words="Cut short" note="the rung stays to be done" small />
                 </>
               )}
-              {view.state === "ended" && view.post && <Fitting href={view.post.href}>{view.post.label}</Fitting>}
+              {ended && view.post && <Fitting href={view.post.href}>{view.post.label}</Fitting>}
             </div>
           </section>
         )}
+        {!ended && (
+          <div className="flex flex-col gap-6 px-4 py-4 tablet:px-6">
+            {holds && running ? <AbortWords parts={view.card.abort} /> : <RunCardView {...view.card} />}
+          </div>
+        )}
       </main>
-      <Foot
-        says={
-          view.state === "running"
-            ? "The engine runs"
-            : view.state === "called"
-              ? "GO stands"
-              : view.state === "ended"
-                ? "Ended"
-                : "Not called"
-        }
-        note={view.state === "running" ? "STOP never ends the run here: report it ended when the propeller stands." : ""}
-      >
-        {view.state === "called" &&
-          act("start", "Engine starts", "uses the GO up", {
-            reason: !view.may.start.ok ? view.may.start.why : all ? undefined : "answer the start list first",
-          })}
-        {view.state === "running" && view.may.end.ok && act("ended", "Propeller stands", "reports the run ended", { stop: true })}
-        {view.state === "ended" && (
-          <Fitting href={view.review} size="act" note="log, exceedances, what is left">
-            Review the run
-          </Fitting>
-        )}
-        {view.state === "other" && (
-          <Fitting href={view.back} size="act">
-            Back to the run
-          </Fitting>
-        )}
-      </Foot>
+      <LiveFoot view={view} commandId={commandId} answered={answered} />
     </>
+  );
+}
+
+function Stops({ stops }: { stops: LiveView["stops"] }) {
+  if (!stops.length) return null;
+  return (
+    <section className="px-4 py-4 tablet:px-6" aria-labelledby="stops">
+      <h2 id="stops" className="text-h3">
+        What stops the start
+      </h2>
+      <ul className="mt-2 border-t border-line">
+        {stops.map((s) => (
+          <li key={s.title} className="border-b border-line py-2">
+            <b>{s.title}.</b> {s.sentence}
+          </li>
+        ))}
+      </ul>
+    </section>
   );
 }

@@ -1,7 +1,7 @@
 import type { LiveState } from "#app/components/live/useLiveState";
 import { Figure } from "#app/components/ui/Figure";
 import { Fitting } from "#app/components/ui/Fitting";
-import { holdFace } from "#app/lib/gates/live-clock";
+import { holdFace } from "#app/lib/bench/live-clock";
 import type { LiveStep } from "#app/lib/views/live";
 
 interface LiveStepsProps {

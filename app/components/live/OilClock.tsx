@@ -1,5 +1,5 @@
 import { Fitting } from "#app/components/ui/Fitting";
-import { type OilMarks, oilFace } from "#app/lib/gates/live-clock";
+import { type OilMarks, oilFace } from "#app/lib/bench/live-clock";
 
 interface OilClockProps {
   fired: number;
@@ -16,8 +16,8 @@ export function OilClock({ fired, marks, now, onMark }: OilClockProps) {
   const face = oilFace(fired, marks, now);
   const waits = face.word === "shows" || face.word === "above";
   return (
-    <section className={`crank-face crank-${TONE[face.word]}`} aria-label="Oil pressure">
-      <p className="crank-word" role={face.word === "stop" ? "alert" : "status"}>
+    <section className={`face face-${TONE[face.word]}`} aria-label="Oil pressure">
+      <p className="face-word" role={face.word === "stop" ? "alert" : "status"}>
         {WORD[face.word]}
       </p>
       {waits && (
@@ -25,7 +25,7 @@ export function OilClock({ fired, marks, now, onMark }: OilClockProps) {
           {face.left}
         </p>
       )}
-      <p className="crank-says">{face.sentence}</p>
+      <p className="face-says">{face.sentence}</p>
       {waits && (
         <p className="mt-3 flex flex-wrap justify-center gap-3">
           {marks.shows === null && (

@@ -23,9 +23,11 @@ export function ReviewPage({ view, commandId, reply }: ReviewPageProps) {
     return (
       <main id="main">
         <TitlePipe title={view.title} state={view.state} fill={0.3} then="There is nothing to review before it has run." />
-        <p className="px-4 py-6 tablet:px-6">
-          <Fitting href={view.back}>Back to the run</Fitting>
-        </p>
+        <div className="flex px-4 py-6 tablet:px-6">
+          <Fitting href={view.back} size="act">
+            Back to the run
+          </Fitting>
+        </div>
       </main>
     );
   return (
@@ -46,7 +48,7 @@ export function ReviewPage({ view, commandId, reply }: ReviewPageProps) {
           <h2 id="left" className="text-h3">
             What is left
           </h2>
-          <StopList stops={view.left} here={`${view.back}/review`} />
+          <StopList stops={view.left} here={view.back} />
         </section>
       )}
       <Outcome view={view} commandId={commandId} reply={reply} />

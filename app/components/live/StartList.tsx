@@ -4,7 +4,8 @@ import { ItemNut } from "#app/components/ui/ItemNut";
 interface StartListProps {
   items: string[];
   answered: number[];
-  onAnswer: (n: number) => void;
+  /** Null for whoever only listens. */
+  onAnswer: ((n: number) => void) | null;
 }
 
 /** By challenge and answer: each is read out, answered by the one whose it is, and only then pressed. In order. */
@@ -21,7 +22,7 @@ export function StartList({ items, answered, onAnswer }: StartListProps) {
           <li key={words} className="grid grid-cols-[52px_minmax(0,1fr)_auto] items-center gap-x-4 border-b border-line py-3">
             <ItemNut state={answered.includes(n) ? "done" : "todo"} size={44} />
             <p className="text-lead">{words}</p>
-            {n === next && (
+            {n === next && onAnswer && (
               <Fitting type="button" onClick={() => onAnswer(n)}>
                 Answered
               </Fitting>

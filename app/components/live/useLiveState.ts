@@ -9,9 +9,11 @@ export interface LiveState {
   step: number;
   since: number | null;
   marks: { at: number; words: string }[];
+  /** The card came to this device while the engine ran: what was pressed elsewhere before is not known here. */
+  takenOver: boolean;
 }
 
-const EMPTY: LiveState = { answered: [], oil: { shows: null, above: null }, step: 0, since: null, marks: [] };
+const EMPTY: LiveState = { answered: [], oil: { shows: null, above: null }, step: 0, since: null, marks: [], takenOver: false };
 
 export function useLiveState(run: string): [LiveState, (to: Partial<LiveState>) => void] {
   const key = `live-card-${run}`;

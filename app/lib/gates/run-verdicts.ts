@@ -176,6 +176,12 @@ function leadsRun(e: Evaluation, run: RunFacts, member: string, act: string): Ve
   });
 }
 
+/** Whether the member may hold the card of this run: lead, run lead or recorder. */
+export function mayLead(e: Evaluation, a: { run: string; member: string }): boolean {
+  const run = e.facts.runs.get(a.run);
+  return run !== undefined && leadsRun(e, run, a.member, "lead the run") === null;
+}
+
 export function mayStart(e: Evaluation, a: { run: string; member: string }): Verdict {
   const f = find(e, a.run);
   if (f.verdict) return f.verdict;

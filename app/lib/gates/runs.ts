@@ -42,7 +42,8 @@ export function evaluateRun(board: Board, rung: Rung, run: RunFacts | null): Run
       title: `Run ${run.run.label} is ${over}`,
       sentence: over === "running" ? "Report it ended first." : "Plan another run of this rung.",
       owner: ownerOf(facts, ["lead"]),
-      page: "build-up",
+      page: over === "running" ? "run" : "build-up",
+      id: over === "running" ? run.run.id : null,
     });
     return {
       ...base,

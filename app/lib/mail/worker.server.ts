@@ -2,7 +2,7 @@
 // share the work; a worker that dies leaves a lease that runs out. At least once, always with the same Message-ID.
 import { and, asc, eq, isNull, lte } from "drizzle-orm";
 import { type Database, database } from "#app/db/client.server";
-import { goStands } from "#app/db/queries/go-in-force.server";
+import { boardNow } from "#app/db/queries/board-now.server";
 import { type OutboxRow, outbox } from "#app/db/schema/outbox";
 import { now } from "#app/lib/clock";
 import { newId } from "#app/lib/ids";
@@ -32,7 +32,7 @@ export function mailWorker(send: SendMail = smtpSender()): MailWorker {
     while (!stopping) {
       const row = await lease(store, me);
       if (!row) return;
-      if (row.kind === "go" && !(await goStands(store.db, row.dedupeKey.split(":")[1] ?? "", now()))) {
+      if (row.kind === "go" && !(await goStands(store, row))) {
         await settle(store, row, me, { failedAt: now(), lastError: "The GO was over before its mail could go out, so it was not sent." });
         tally.givenUp++;
         continue;
@@ -100,6 +100,12 @@ export function startMailWorker(send?: SendMail): MailWorker {
 /** Of links only hashes are kept: what was sent with one does not stay behind in the outbox. */
 function withoutLink({ kind }: OutboxRow): Partial<OutboxRow> {
   return LINK_MAILS.includes(kind) ? { text: "The link was taken out when this mail had been sent.", html: null } : {};
+}
+
+/** Whether the GO that a mail tells of is in force. Crew mails are kept apart by "kind:act:reader". */
+async function goStands(store: Database, { installId, dedupeKey }: OutboxRow): Promise<boolean> {
+  const board = installId === null ? null : await boardNow(store.db, installId, now());
+  return board?.e.result.runs.some((r) => r.go?.id === dedupeKey.split(":")[1]) ?? false;
 }
 
 async function lease(store: Database, me: string): Promise<OutboxRow | undefined> {

@@ -1,7 +1,6 @@
 // Files of the record, each under the SHA-256 of its bytes: the same bytes are kept once, and a name can never be chosen by whoever
 // sends them. Small copies of pictures lie beside them; they can be made again at any time.
 import { createHash } from "node:crypto";
-import { join } from "node:path";
 import { env } from "#app/lib/env.server";
 import { localStore } from "#app/lib/storage/local.server";
 import { thumbnailOf } from "#app/lib/storage/picture.server";
@@ -25,7 +24,7 @@ export const hashOfBytes = (bytes: Uint8Array): string => createHash("sha256").u
 
 function keyOf(prefix: string, hash: string, ending = ""): string {
   if (!/^[0-9a-f]{64}$/.test(hash)) throw new Error("Not a file's hash");
-  return join(prefix, hash.slice(0, 2), `${hash}${ending}`).replaceAll("\\", "/");
+  return `${prefix}${hash.slice(0, 2)}/${hash}${ending}`;
 }
 
 /** Keeps the bytes and returns their SHA-256, hex. On return they are safe. */

@@ -80,6 +80,25 @@ function sourced(e: Evaluation, source: Prefill): { si: number; origin: string }
 const textOf = (field: AmountField, si: number, units: UnitSystem): string =>
   format(field.quantity, si, units, field.as?.[units]).value.replace("−", "-");
 
+/**
+ * A field that still holds what it was filled with holds that value, not its rounded text: `inputs` (SI) are put right in place.
+ * @param sources exact values with which a field may have been filled, SI.
+ */
+export function exactly(
+  fields: FormField[],
+  units: UnitSystem,
+  typed: (name: string) => string | undefined,
+  inputs: Record<string, unknown>,
+  sources: (field: AmountField) => number[],
+): void {
+  for (const field of fields) {
+    const text = typed(field.name)?.trim();
+    if (field.kind !== "quantity" || text === undefined || typeof inputs[field.name] !== "number") continue;
+    const own = sources(field).find((si) => textOf(field, si, units) === text);
+    if (own !== undefined) inputs[field.name] = own;
+  }
+}
+
 /** A text that was typed in one person's units as another reads it; what is no number stays as it is. */
 export function converted(field: FormField, text: string, from: UnitSystem, to: UnitSystem): string {
   if (field.kind !== "quantity" || from === to || text === "") return text;

@@ -7,7 +7,7 @@ import type { BenchKey, BenchResult, TypedForm } from "#app/lib/bench/bench-def"
 import { type FieldError, MOST_ROWS } from "#app/lib/bench/check";
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import { parseEntry, type UnitSystem } from "#app/lib/units/display";
-import { prefill, type Standing } from "#app/lib/views/bench-form";
+import { exactly, prefill, type Standing } from "#app/lib/views/bench-form";
 
 /** What an address or a form holds of a calculator's fields; null = it holds none. Unknown names and overlong texts are left out. */
 export function typedForm(key: BenchKey, sent: Iterable<readonly [string, unknown]>): TypedForm | null {
@@ -55,12 +55,13 @@ export function workOut(e: Evaluation, key: BenchKey, form: TypedForm): Worked {
   const { units, fields } = form;
   const read = readBenchForm(key, new Map(Object.entries(fields)), (text, quantity, as) => parseEntry(text, quantity, units, as?.[units]));
   if (!read.ok) return read;
-  // A value of the install that stands in its field as it was filled in is that value, not its rounded text.
-  for (const field of BENCH[key].form.fields) {
-    const own = prefill(e, key, field, units);
-    if (own?.si != null && typeof read.inputs[field.name] === "number" && fields[field.name]?.[0] === own.text)
-      read.inputs[field.name] = own.si;
-  }
+  exactly(
+    BENCH[key].form.fields,
+    units,
+    (name) => fields[name]?.[0],
+    read.inputs,
+    (field) => [prefill(e, key, field, units)?.si ?? []].flat(),
+  );
   const done = computeBench(key, read.inputs);
   return done.ok ? { ok: true, inputs: read.inputs, result: done.result } : done;
 }

@@ -3,6 +3,7 @@
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import { allItems, currentProof, itemsIn } from "#app/lib/gates/facts";
 import type { GateResult } from "#app/lib/gates/result";
+import { mayLead } from "#app/lib/gates/run-verdicts";
 import { maySign } from "#app/lib/gates/signing-verdicts";
 import type { Item, SigningRole } from "#app/lib/gates/snapshot";
 import { stepsToRedoFirst } from "#app/lib/gates/steps";
@@ -26,6 +27,7 @@ const SIGNING: SigningRole[] = ["inspector", "builder", "lead"];
 
 export function actsOf(e: Evaluation, me: Viewer): ActView[] {
   return [
+    ...runActs(e, me),
     ...crewActs(e, me.id),
     ...signActs(e, me),
     ...secondPersonActs(e, me),
@@ -95,6 +97,23 @@ function secondPersonActs(e: Evaluation, me: Viewer): ActView[] {
     return confirm ? [{ item, verb: "Look and confirm" }] : accept ? [{ item, verb: "Accept or not" }] : [];
   });
   return waiting.map(({ item, verb }) => ({ label: `${verb}: ${item.key}`, note: item.words, href: gateOf(install, item.gate, item.id) }));
+}
+
+/** A run with GO, or on, is held or followed on its live card; one that has ended is reviewed. */
+function runActs(e: Evaluation, me: Viewer): ActView[] {
+  const install = e.snapshot.install.id;
+  const reviews = me.roles.some((r) => r !== "crew");
+  return e.result.runs.flatMap((run) => {
+    if (run.id === null) return [];
+    const leads = mayLead(e, { run: run.id, member: me.id });
+    const live = `${runOf(install, run.id)}/live`;
+    if (run.state === "running")
+      return [{ label: `${leads ? "Live card of" : "Follow"} run ${run.label}`, note: "the engine runs", href: live }];
+    if (run.state === "called" && leads) return [{ label: `Live card of run ${run.label}`, note: "start list, clocks, steps", href: live }];
+    return run.state === "ended" && reviews
+      ? [{ label: `Review run ${run.label}`, note: "outcome, log, exceedances", href: `${runOf(install, run.id)}/review` }]
+      : [];
+  });
 }
 
 function leadActs(e: Evaluation, me: Viewer): ActView[] {

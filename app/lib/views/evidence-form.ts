@@ -8,9 +8,10 @@ import { wrenchSetting } from "#app/lib/bench/torque";
 import { bandInForce } from "#app/lib/gates/evidence";
 import { instantOfLocal, localOf } from "#app/lib/gates/local-time";
 import type { Evidence, Item, Snapshot } from "#app/lib/gates/snapshot";
-import type { Criterion, Part, SheetKey, ValueKey } from "#app/lib/template/types";
+import type { Criterion, Part, ValueKey } from "#app/lib/template/types";
 import { format, formatBand, parseEntry, type UnitSystem } from "#app/lib/units/display";
 import type { Quantity } from "#app/lib/units/quantity";
+import { exactly } from "#app/lib/views/bench-form";
 
 export interface EntryError {
   /** Name of the field and, where it is sent once per row, its row: "p0.value.1". */
@@ -217,7 +218,14 @@ function readSheet(r: Reader, part: PartOf<"sheet">, n: number): Evidence | null
     for (const { field, sentence } of read.errors) r.errors.push({ field: `${prefix}${rowLast(field)}`, message: sentence });
     return null;
   }
-  asInstalled(r, part.sheet, fields, read.inputs);
+  const known = (key: ValueKey) => r.at.snapshot.values.find((v) => v.key === key)?.value ?? [];
+  exactly(
+    SHEET_FORMS[part.sheet].fields,
+    units,
+    (name) => fields.get(name)?.[0],
+    read.inputs,
+    (field) => field.prefill.flatMap((source) => (source.kind === "value" ? known(source.key) : [])),
+  );
   const done = computeSheet(part.sheet, read.inputs);
   if (done.ok) r.sheets[n] = done.result;
   const took: Partial<Record<ValueKey, number>> = {};
@@ -226,19 +234,6 @@ function readSheet(r: Reader, part: PartOf<"sheet">, n: number): Evidence | null
     if (value != null) took[key] = value;
   }
   return { kind: "sheet", sheet: part.sheet, version: SHEET_VERSIONS[part.sheet], inputs: read.inputs, took };
-}
-
-/** A value of the install that stands in its field as it was filled in is that value, not its rounded text. */
-function asInstalled(r: Reader, sheet: SheetKey, fields: Map<string, string[]>, inputs: Record<string, unknown>): void {
-  for (const field of SHEET_FORMS[sheet].fields) {
-    const [typed] = fields.get(field.name) ?? [];
-    if (field.kind !== "quantity" || typed === undefined || typeof inputs[field.name] !== "number") continue;
-    for (const source of field.prefill) {
-      const value = source.kind === "value" ? r.at.snapshot.values.find((v) => v.key === source.key)?.value : null;
-      if (value != null && format(field.quantity, value, r.at.units, field.as?.[r.at.units]).value === typed.trim())
-        inputs[field.name] = value;
-    }
-  }
 }
 
 /** "straps.1.wll" as the row names it: "straps.wll.1". */

@@ -3,7 +3,7 @@
  * Pure: the item's criteria in, plain fields for the form out.
  */
 
-import type { AmountField, FormField, Prefill } from "#app/lib/bench/form";
+import type { FormField } from "#app/lib/bench/form";
 import { SHEET_FORMS, traitInputs } from "#app/lib/bench/sheet";
 import type { Evaluation } from "#app/lib/gates/evaluate";
 import { bandInForce, numberMissing } from "#app/lib/gates/evidence";
@@ -13,6 +13,7 @@ import type { Criterion, Part, SheetKey, ValueKey } from "#app/lib/template/type
 import { symbolOf } from "#app/lib/units/convert";
 import { displayUnit, format, formatBand, type UnitSystem } from "#app/lib/units/display";
 import type { Band, Quantity } from "#app/lib/units/quantity";
+import { prefill } from "#app/lib/views/bench-form";
 
 /** A number that judges: where it is from, and whether somebody has confirmed it. */
 export interface CriterionView {
@@ -189,18 +190,18 @@ function sheetView(e: Evaluation, sheet: SheetKey, units: UnitSystem): SheetView
     title: form.title,
     formula: form.formula,
     caution: form.caution,
-    fields: form.fields.map((f) => fieldView(e, f, units, decided[f.name])),
+    fields: form.fields.map((f) => fieldView(e, sheet, f, units, decided[f.name])),
     groups: form.groups.map((g) => ({
       name: g.name,
       label: g.label,
       row: g.row,
       rows: rowsOf(g.rowsFrom, g.rows),
-      fields: g.fields.map((f) => fieldView(e, f, units)),
+      fields: g.fields.map((f) => fieldView(e, sheet, f, units)),
     })),
   };
 }
 
-function fieldView(e: Evaluation, field: FormField, units: UnitSystem, decided?: string): FieldView {
+function fieldView(e: Evaluation, sheet: SheetKey, field: FormField, units: UnitSystem, decided?: string): FieldView {
   const { kind, name, label, help, optional, when } = field;
   const unit = field.kind === "quantity" ? symbolOf(field.as?.[units] ?? displayUnit(field.quantity, units)) : "";
   const options = field.kind === "choice" ? field.options : [];
@@ -213,24 +214,7 @@ function fieldView(e: Evaluation, field: FormField, units: UnitSystem, decided?:
     when,
     unit,
     options,
-    value: decided ?? prefilled(e, field, units),
+    value: decided ?? prefill(e, sheet, field, units)?.text ?? "",
     fixed: decided !== undefined,
   };
 }
-
-function prefilled(e: Evaluation, field: FormField, units: UnitSystem): string {
-  if (field.kind !== "quantity") return field.preset ?? "";
-  const found = field.prefill.map((p) => sourced(e, p)).find((v) => v !== null) ?? field.preset;
-  return found === null ? "" : typedAmount(field, found, units);
-}
-
-function sourced(e: Evaluation, prefill: Prefill): number | null {
-  if (prefill.kind === "value") return e.facts.values.get(prefill.key)?.value ?? null;
-  if (prefill.kind === "trait") return null;
-  const next = e.result.next;
-  const plan = next?.id ? e.facts.runs.get(next.id)?.plan : null;
-  return plan?.rpm ?? e.facts.nextRung?.rpm ?? null;
-}
-
-const typedAmount = (field: AmountField, si: number, units: UnitSystem): string =>
-  format(field.quantity, si, units, field.as?.[units]).value;

@@ -1,6 +1,6 @@
 /** The live card of a run: who holds it, what may be pressed now, and the card's steps with their figures. Pure. */
 import type { Evaluation } from "#app/lib/gates/evaluate";
-import { mayHold, mayReport, mayStart } from "#app/lib/gates/run-verdicts";
+import { mayHold, mayLead, mayReport, mayStart } from "#app/lib/gates/run-verdicts";
 import { type May, mayOf } from "#app/lib/views/may";
 import { gateOf, runOf } from "#app/lib/views/places";
 import { type CardView, cardView, dayWhen, holdText, lowerFirst, rpmFigure, stepSpeed } from "#app/lib/views/run-words";
@@ -21,8 +21,6 @@ export interface LiveView {
   label: string;
   title: string;
   state: "called" | "running" | "ended" | "other";
-  /** "12 Dec 09:41 CET"; null before the start. */
-  started: string | null;
   startedAt: number | null;
   /** Words of what keeps it from being started, soonest first. */
   stops: { title: string; sentence: string }[];
@@ -32,8 +30,10 @@ export interface LiveView {
   /** Whether the engine has an oil pressure to wait for. */
   oil: boolean;
   may: { start: May; takeBack: May; end: May; outcome: May; hold: May };
-  /** Said to whoever follows and may press nothing. */
-  follows: boolean;
+  /** Lead, run lead or recorder: whoever may hold the card. */
+  leads: boolean;
+  /** Below the title: "running since 12 Dec 09:41 CET". */
+  says: string;
   back: string;
   review: string;
   post: { href: string; label: string } | null;
@@ -58,7 +58,6 @@ export function liveView(e: Evaluation, runId: string, member: string): LiveView
     label: run.run.label,
     title: `Run ${run.run.label}, ${lowerFirst(rung.name)}`,
     state,
-    started: run.start ? dayWhen(run.start.recorded, zone) : null,
     startedAt: run.start?.recorded ?? null,
     stops: start.ok || run.start ? [] : start.blockers.map(({ title, sentence }) => ({ title, sentence })),
     cleared: rpmFigure(judged.clearance.rpm),
@@ -80,10 +79,17 @@ export function liveView(e: Evaluation, runId: string, member: string): LiveView
       outcome: reports("outcome"),
       hold: mayOf(mayHold(e, ask)),
     },
-    follows: run.start !== null && !reports("ended").ok && run.endedAt === null,
+    leads: mayLead(e, ask),
+    says: saysOf(state, run.start ? dayWhen(run.start.recorded, zone) : "", run.outcome),
     back: runOf(install, runId),
     review: `${runOf(install, runId)}/review`,
     post: post ? { href: gateOf(install, post.id), label: post.name } : null,
     outcome: run.outcome,
   };
+}
+
+function saysOf(state: LiveView["state"], started: string, outcome: string | null): string {
+  if (state === "running") return `running since ${started}`;
+  if (state === "called") return "GO stands";
+  return state === "ended" ? `ended, ${outcome ?? "outcome not stated"}` : "not called";
 }

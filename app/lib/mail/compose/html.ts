@@ -23,6 +23,10 @@ const DARK = `@media (prefers-color-scheme:dark){
 /** For mails of another make. */
 export const PAINT = { ink, ink2, ground, line, read, dark: DARK };
 
+/** The one thing to press in a mail: a fitting, as on the screen. */
+export const mailButton = ({ label, href }: { label: string; href: string }): string =>
+  `<a class="f" href="${escapeHtml(href)}" style="display:block;background:#173f9f;border:0 solid #0f2d76;border-width:0 14px;color:#fff;font:700 20px/1.3 ${read};text-decoration:none;padding:20px">${escapeHtml(label)}</a>`;
+
 /** Text as HTML text or as a double-quoted attribute. */
 export const escapeHtml = (text: string): string =>
   text.replace(/[&<>"']/g, (c) => ({ "&": "&amp;", "<": "&lt;", ">": "&gt;", '"': "&quot;", "'": "&#39;" })[c] ?? c);
@@ -48,7 +52,7 @@ export function toHtml(page: MailPage): string {
 <tr><td style="padding:6px 20px 12px">${page.lead.map((l, n) => big(l, n === 0)).join("")}</td></tr>
 ${box(page)}${stops(page)}${page.sections.map(section).join("\n")}
 ${abortOf(page)}
-<tr><td style="padding:24px 20px 10px"><a class="f" href="${e(page.button.href)}" style="display:block;background:#173f9f;border:0 solid #0f2d76;border-width:0 14px;color:#fff;font:700 20px/1.3 ${read};text-decoration:none;padding:20px">${e(page.button.label)}</a></td></tr>
+<tr><td style="padding:24px 20px 10px">${mailButton(page.button)}</td></tr>
 <tr><td style="padding:8px 20px 30px">${page.small.map(smallPrint).join("")}${record(page)}</td></tr>
 </table></td></tr></table></body></html>
 `;

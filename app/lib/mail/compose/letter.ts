@@ -1,5 +1,5 @@
 /** A mail about an account or an invitation: a few sentences, one link, small print. Text and HTML say the same. Pure. */
-import { escapeHtml as e, PAINT } from "#app/lib/mail/compose/html";
+import { escapeHtml as e, mailButton, PAINT } from "#app/lib/mail/compose/html";
 import { wrap } from "#app/lib/mail/compose/text";
 import { cut, oneLine } from "#app/lib/mail/compose/words";
 
@@ -62,7 +62,7 @@ function htmlOf({ subject, reader, lead, rows = [], button, small }: Letter): st
 <table role="presentation" width="100%" cellpadding="0" cellspacing="0" style="max-width:600px;text-align:left;table-layout:fixed;word-wrap:break-word;overflow-wrap:anywhere">
 <tr><td style="padding:24px 20px 4px"><p class="u" style="margin:0 0 14px;font:400 17px/1.4 ${read};color:${ink2}">${e(reader)},</p>${lead.map(says).join("")}</td></tr>
 ${rows.length ? `<tr><td style="padding:8px 20px"><table width="100%" cellpadding="0" cellspacing="0">${rows.map(row).join("")}</table></td></tr>` : ""}
-${button ? `<tr><td style="padding:14px 20px 10px"><a class="f" href="${e(button.href)}" style="display:block;background:#173f9f;border:0 solid #0f2d76;border-width:0 14px;color:#fff;font:700 20px/1.3 ${read};text-decoration:none;padding:20px">${e(button.label)}</a></td></tr>` : ""}
+${button ? `<tr><td style="padding:14px 20px 10px">${mailButton(button)}</td></tr>` : ""}
 <tr><td style="padding:10px 20px 30px">${small.map((s) => `<p class="u" style="margin:0 0 12px;font:400 15px/1.5 ${read};color:${ink2}">${e(s)}</p>`).join("")}</td></tr>
 </table></td></tr></table></body></html>
 `;
