@@ -33,6 +33,28 @@ function clearForRun1(): { board: Board; run: string } {
   return { board, run: run.id };
 }
 
+describe("a run under way", () => {
+  const first = (board: Board, who: Parameters<typeof boardView>[1]) => boardView(judged(board), who).acts[0];
+
+  it("leads whoever leads it to the live card, lets the others follow, and is reviewed when it has ended", () => {
+    const { board, run: id } = clearForRun1();
+    const run = board.s.runs.find((r) => r.id === id);
+    if (!run) throw new Error("No run");
+    const live = `/installs/install/runs/${id}/live`;
+    board.act(run, "go");
+    expect(first(board, lead)).toMatchObject({ label: `Live card of run ${run.label}`, href: live });
+    expect(boardView(judged(board), inspector).acts.some((a) => a.href === live)).toBe(false);
+    board.act(run, "start");
+    expect(first(board, lead)).toMatchObject({ label: `Live card of run ${run.label}` });
+    expect(first(board, inspector)).toMatchObject({ label: `Follow run ${run.label}`, href: live });
+    board.wait();
+    board.act(run, "ended", {});
+    const review = { label: `Review run ${run.label}`, href: `/installs/install/runs/${id}/review` };
+    expect(first(board, inspector)).toMatchObject(review);
+    expect(boardView(judged(board), crew).acts.map((a) => a.label)).not.toContain(review.label);
+  });
+});
+
 describe("the answer", () => {
   it("says how many things stop the next run, and numbers them as they are listed", () => {
     const view = boardView(judged(gates()), builder);

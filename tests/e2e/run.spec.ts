@@ -42,6 +42,16 @@ test("from GO by the live card to the review: start list, oil pressure, steps, e
   await crew.goto(`${sorrel.run("1")}/live`);
   await expect(crew.getByText("You follow this run.")).toBeVisible();
   await expect(crew.getByRole("button", { name: /^Propeller stands/ })).toHaveCount(0);
+  // No clock that nobody presses there: it would cry STOP by itself. The word itself is at hand for everybody.
+  await expect(crew.getByLabel("Oil pressure")).toHaveCount(0);
+  await crew.getByRole("button", { name: /^STOP/ }).click();
+  await expect(crew.getByRole("dialog", { name: "STOP" })).toContainText("Throttle shut, usual stop");
+  await crew.getByRole("button", { name: "Back to the card" }).click();
+  const second = await visit("Odalys", "tablet");
+  await second.goto(`${sorrel.run("1")}/live`);
+  await expect(second.getByText("Another device holds the card.")).toBeVisible();
+  await second.goto(sorrel.board);
+  await expect(second.getByRole("link", { name: /^Live card of run 1/ })).toBeVisible();
   expect((await postForm(crew, `${sorrel.run("1")}/live`, { intent: "ended" })).status()).toBe(403);
 
   await lead.getByRole("button", { name: /^Above its least/ }).click();

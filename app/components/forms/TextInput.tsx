@@ -24,6 +24,7 @@ export function TextInput(props: TextInputProps) {
         <textarea
           {...withoutInputOnly(common)}
           rows={rows}
+          style={{ minHeight: `calc(${rows}lh + 24px)` }}
           className="field-frame field-area"
           onChange={onChange && ((event) => onChange(event.currentTarget.value))}
         />

@@ -13,6 +13,12 @@ export function StopWords({ parts }: { parts: AbortPart[] }) {
       <dialog ref={dialog} className="stop-words" aria-label="STOP">
         <p className="stop-words-word">STOP</p>
         <p className="text-h3">Shout it, or cross the arms overhead. Throttle shut, usual stop.</p>
+        {/* Before the words: what takes the focus decides what is in sight. */}
+        <p className="flex">
+          <Fitting type="button" size="act" variant="outline" onClick={() => dialog.current?.close()}>
+            Back to the card
+          </Fitting>
+        </p>
         {parts.map((part) => (
           <section key={part.word} aria-label={part.word}>
             <p className="text-lead">
@@ -25,11 +31,6 @@ export function StopWords({ parts }: { parts: AbortPart[] }) {
             </ul>
           </section>
         ))}
-        <p className="flex">
-          <Fitting type="button" size="act" variant="outline" onClick={() => dialog.current?.close()}>
-            Back to the card
-          </Fitting>
-        </p>
       </dialog>
     </>
   );

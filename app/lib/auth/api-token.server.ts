@@ -3,7 +3,7 @@ import { and, eq, gt, isNull } from "drizzle-orm";
 import { db, write } from "#app/db/client.server";
 import { apiTokens } from "#app/db/schema/api-tokens";
 import { users } from "#app/db/schema/users";
-import type { Actor } from "#app/lib/auth/actor.server";
+import { type Actor, actorColumns } from "#app/lib/auth/actor.server";
 import { addressNow, beginAttempt, waitInWords } from "#app/lib/auth/throttle.server";
 import { isToken, tokenHash } from "#app/lib/auth/token.server";
 import { now } from "#app/lib/clock";
@@ -57,12 +57,7 @@ const SCOPE_WORDS: Record<Scope, string> = { read: "read a board", record: "reco
 async function behind(hash: string, at: number) {
   const [row] = await db()
     .select({
-      userId: users.id,
-      name: users.name,
-      email: users.email,
-      units: users.units,
-      theme: users.theme,
-      isAdmin: users.isAdmin,
+      ...actorColumns,
       token: { id: apiTokens.id, scopes: apiTokens.scopes, lastUsedAt: apiTokens.lastUsedAt },
     })
     .from(apiTokens)

@@ -6,7 +6,7 @@ import { and, desc, eq, gt, isNull, lt, ne, or } from "drizzle-orm";
 import { db, type Tx, write } from "#app/db/client.server";
 import { sessions } from "#app/db/schema/sessions";
 import { users } from "#app/db/schema/users";
-import type { Actor } from "#app/lib/auth/actor.server";
+import { type Actor, actorColumns } from "#app/lib/auth/actor.server";
 import { now } from "#app/lib/clock";
 import { env } from "#app/lib/env.server";
 import { hasBearerToken } from "#app/lib/http/origin";
@@ -51,12 +51,7 @@ export async function readSession(request: Request): Promise<Actor | null> {
   const at = now();
   const [row] = await db()
     .select({
-      userId: users.id,
-      name: users.name,
-      email: users.email,
-      units: users.units,
-      theme: users.theme,
-      isAdmin: users.isAdmin,
+      ...actorColumns,
       sessionId: sessions.id,
       lastSeenAt: sessions.lastSeenAt,
     })
